@@ -1,0 +1,28 @@
+import node from '@astrojs/node';
+import react from '@astrojs/react';
+import tailwindcss from '@tailwindcss/vite';
+import { defineConfig } from 'astro/config';
+
+export default defineConfig({
+  output: 'server',
+  // Our own server in src/main.ts wraps Astro's handler: it drains requests on SIGTERM and limits bodies.
+  adapter: node({ mode: 'middleware' }),
+  integrations: [react()],
+  trailingSlash: 'never',
+  devToolbar: { enabled: false },
+  // Astro's own check refuses the signed webhooks and does not look at JSON posts; src/server/http/origin.ts does both.
+  security: { checkOrigin: false },
+  experimental: {
+    csp: {
+      directives: [
+        "default-src 'self'",
+        "base-uri 'none'",
+        "object-src 'none'",
+        "frame-ancestors 'none'",
+        "form-action 'self'",
+        "img-src 'self' data:",
+      ],
+    },
+  },
+  vite: { plugins: [tailwindcss()] },
+});
