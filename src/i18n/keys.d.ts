@@ -1,0 +1,19 @@
+import type common from '../../locales/en/common.json';
+import type errors from '../../locales/en/errors.json';
+import type front from '../../locales/en/front.json';
+import type mail from '../../locales/en/mail.json';
+import type texts from '../../locales/en/texts.json';
+
+// A key that is not in the English files, or a placeholder left out, is a type error.
+declare module 'i18next' {
+  interface CustomTypeOptions {
+    defaultNS: 'common';
+    resources: {
+      common: typeof common;
+      errors: typeof errors;
+      front: typeof front;
+      mail: typeof mail;
+      texts: typeof texts;
+    };
+  }
+}
