@@ -28,6 +28,9 @@ const nameRequest = defineMiddleware(async (context, next) => {
   greetReader(context, null);
   const response = await next();
   response.headers.set('X-Request-Id', requestId);
+  if (response.headers.get('content-type') === 'text/html') {
+    response.headers.set('Content-Type', 'text/html; charset=utf-8');
+  }
   log.info({
     event: 'request',
     requestId,

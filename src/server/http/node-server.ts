@@ -3,13 +3,11 @@ import compression from 'compression';
 import sirv from 'sirv';
 import { config } from '../env.ts';
 import { bodyLimitFor } from '../limits.ts';
+import { describeError, log } from '../log.ts';
 import { securityHeaders } from './security-headers.ts';
 
-export type PageHandler = (
-  request: IncomingMessage,
-  response: ServerResponse,
-  next: (error?: unknown) => void,
-) => void;
+/** Astro's handler. Without a `next` it answers addresses that no page has with the 404 page. */
+export type PageHandler = (request: IncomingMessage, response: ServerResponse) => Promise<void>;
 
 const forwardingHeaders = [
   'forwarded',
@@ -53,12 +51,15 @@ export function createWebServer(pages: PageHandler, clientFolder: string): Serve
     const refusal = bodyRefusal(request);
     if (refusal) return refuse(response, ...refusal);
 
-    const failed = () => {
-      if (response.headersSent) response.destroy();
-      else refuse(response, 500, 'unexpected');
-    };
+    // The types of `compression` are those of a framework that is not in use here.
     compress(request as never, response as never, () =>
-      files(request, response, () => pages(request, response, failed)),
+      files(request, response, () => {
+        pages(request, response).catch((error: unknown) => {
+          log.error({ event: 'request-failed', error: describeError(error) });
+          if (response.headersSent) response.destroy();
+          else refuse(response, 500, 'unexpected');
+        });
+      }),
     );
   });
 }
