@@ -13,7 +13,7 @@ export default defineConfig({
         extends: true,
         test: {
           name: 'unit',
-          include: ['src/**/*.test.ts'],
+          include: ['src/**/*.test.ts', 'tests/static/**/*.test.ts'],
           environment: 'node',
           setupFiles: ['tests/setup/quiet-console.ts'],
         },
