@@ -4,7 +4,7 @@ import subsetFont from 'subset-font';
 
 const GLYPHS = '0123456789,.+-\u2212';
 const WEIGHTS = [400, 600];
-const FOLDER = new URL('./generated/', import.meta.url);
+const FOLDER = new URL('../../.astro/figures/', import.meta.url);
 const resolve = createRequire(import.meta.url).resolve;
 
 async function isPresent(file) {
@@ -16,7 +16,7 @@ async function isPresent(file) {
 
 /**
  * Cuts the digits, comma, point, plus and minus out of IBM Plex Sans (SIL Open Font License 1.1) into
- * `generated/figures-<weight>.woff2`, unless the file is there already. Needs no network: the font comes from node_modules.
+ * `.astro/figures/figures-<weight>.woff2`, unless the file is there already. Needs no network: the font comes from node_modules.
  */
 export async function writeFiguresFace() {
   await mkdir(FOLDER, { recursive: true });
