@@ -1,0 +1,204 @@
+import { randomBytes } from 'node:crypto';
+import { countSegments } from '../../lib/messages/index.ts';
+import type { SharedClock } from '../clock.ts';
+import { openKeptDocument } from '../kept-document.ts';
+import type { FakesSettings } from '../settings.ts';
+import { carrierAnswers, decideCarrierAction } from './carrier-words.ts';
+import { type Faults, takeOne } from './faults.ts';
+import {
+  emptyTextServiceState,
+  type KeptText,
+  type TextServiceState,
+  textServiceStateSchema,
+} from './kept-texts.ts';
+import { openWebhookCaller } from './webhooks.ts';
+
+/** A refusal with the text service's own error code. */
+export interface SendRefusal {
+  status: number;
+  code: number;
+  message: string;
+}
+
+export interface SendRequest {
+  from: string;
+  to: string;
+  body: string;
+  statusCallback: string | null;
+}
+
+/** The text service without its HTTP: what it keeps and what it does by itself. */
+export interface TextService {
+  readonly state: TextServiceState;
+  accept(request: SendRequest): KeptText | SendRefusal;
+  /** A person at a phone sends a text to a shop's number. */
+  receive(text: { from: string; to: string; body: string }): KeptText;
+  repeatDelivery(number: number): boolean;
+  isOptedOut(number: string, phone: string): boolean;
+  stop(): void;
+}
+
+const phoneForm = /^\+[1-9]\d{6,14}$/;
+const longestBody = 1600;
+
+export function openTextService(options: {
+  settings: FakesSettings;
+  clock: SharedClock;
+  faults: () => Faults;
+  file: string | undefined;
+}): TextService {
+  const { settings, clock, faults } = options;
+  const kept = openKeptDocument({
+    file: options.file,
+    schema: textServiceStateSchema,
+    empty: emptyTextServiceState(),
+  });
+  const state = kept.content;
+  const timers = new Set<NodeJS.Timeout>();
+  const webhooks = openWebhookCaller({
+    deliveries: state.deliveries,
+    faults,
+    clock,
+    authToken: settings.authToken,
+    target: settings.webhookTarget,
+    changed: kept.changed,
+  });
+
+  const keep = (text: Pick<KeptText, 'direction' | 'from' | 'to' | 'body' | 'status'>): KeptText => {
+    const at = clock.now();
+    const full: KeptText = {
+      ...text,
+      sid: `SM${randomBytes(16).toString('hex')}`,
+      errorCode: null,
+      segments: countSegments(text.body).segments,
+      createdAt: at,
+      updatedAt: at,
+      statusCallback: null,
+    };
+    state.texts.push(full);
+    kept.changed();
+    return full;
+  };
+
+  const advance = (text: KeptText, status: KeptText['status'], errorCode: number | null = null): void => {
+    Object.assign(text, { status, errorCode, updatedAt: clock.now() });
+    kept.changed();
+    if (text.statusCallback === null) return;
+    webhooks.call({
+      kind: 'status',
+      url: text.statusCallback,
+      parameters: describeStatus(text, settings.accountSid),
+    });
+  };
+
+  const later = (step: () => void): void => {
+    const timer = setTimeout(() => {
+      timers.delete(timer);
+      step();
+    }, settings.stepMilliseconds);
+    timers.add(timer);
+  };
+
+  /** What happens to an accepted text from here on; taken up again after a restart. */
+  const carryOut = (text: KeptText): void => {
+    if (text.status === 'queued') {
+      later(() => {
+        advance(text, 'sent');
+        carryOut(text);
+      });
+    } else if (text.status === 'sent') {
+      const { undeliverNext } = faults();
+      const errorCode = takeOne(undeliverNext) ? undeliverNext.errorCode : null;
+      later(() => advance(text, errorCode === null ? 'delivered' : 'undelivered', errorCode));
+    }
+  };
+  state.texts.forEach(carryOut);
+
+  const optOutKey = (number: string, phone: string): string => `${number} ${phone}`;
+  const isOptedOut = (number: string, phone: string): boolean =>
+    state.optedOut.includes(optOutKey(number, phone));
+
+  return {
+    state,
+    isOptedOut,
+    accept: (request) => {
+      const refusal = findRefusal(request, isOptedOut(request.from, request.to), settings.numbers);
+      if (refusal !== undefined) return refusal;
+      const { statusCallback, ...rest } = request;
+      const text = keep({ direction: 'outbound-api', status: 'queued', ...rest });
+      text.statusCallback = statusCallback;
+      carryOut(text);
+      return text;
+    },
+    receive: ({ from, to, body }) => {
+      const text = keep({ direction: 'inbound', status: 'received', from, to, body });
+      const action = decideCarrierAction(body, isOptedOut(to, from));
+      if (action === 'opt out' && !isOptedOut(to, from)) state.optedOut.push(optOutKey(to, from));
+      if (action === 'opt in') state.optedOut.splice(state.optedOut.indexOf(optOutKey(to, from)), 1);
+      if (action !== 'none') {
+        keep({
+          direction: 'outbound-reply',
+          status: 'delivered',
+          from: to,
+          to: from,
+          body: carrierAnswers[action],
+        });
+      }
+      const url = new URL('/api/texts/inbound', settings.publicUrl).href;
+      webhooks.call({ kind: 'inbound', url, parameters: describeInbound(text, settings.accountSid) });
+      return text;
+    },
+    repeatDelivery: webhooks.repeat,
+    stop: () => {
+      timers.forEach(clearTimeout);
+      webhooks.stop();
+      kept.close();
+    },
+  };
+}
+
+/** Error codes as the text service publishes them. */
+function findRefusal(
+  request: SendRequest,
+  isOptedOut: boolean,
+  numbers: readonly string[],
+): SendRefusal | undefined {
+  const refuse = (code: number, message: string): SendRefusal => ({ status: 400, code, message });
+  if (!phoneForm.test(request.to)) return refuse(21_211, 'The number in To is not a phone number.');
+  if (request.body === '') return refuse(21_602, 'A text needs a body.');
+  if (request.body.length > longestBody) return refuse(21_617, 'The body is longer than 1600 characters.');
+  const isOwn = numbers.length === 0 ? phoneForm.test(request.from) : numbers.includes(request.from);
+  if (!isOwn) return refuse(21_606, 'The number in From is not one of this account.');
+  return isOptedOut ? refuse(21_610, 'The receiver has opted out of texts from this number.') : undefined;
+}
+
+function describeText(text: KeptText, accountSid: string): Record<string, string> {
+  return {
+    AccountSid: accountSid,
+    ApiVersion: '2010-04-01',
+    From: text.from,
+    MessageSid: text.sid,
+    SmsSid: text.sid,
+    To: text.to,
+  };
+}
+
+function describeInbound(text: KeptText, accountSid: string): Record<string, string> {
+  return {
+    ...describeText(text, accountSid),
+    Body: text.body,
+    NumMedia: '0',
+    NumSegments: String(text.segments),
+    SmsMessageSid: text.sid,
+    SmsStatus: 'received',
+  };
+}
+
+function describeStatus(text: KeptText, accountSid: string): Record<string, string> {
+  return {
+    ...describeText(text, accountSid),
+    MessageStatus: text.status,
+    SmsStatus: text.status,
+    ...(text.errorCode === null ? {} : { ErrorCode: String(text.errorCode) }),
+  };
+}
