@@ -7,7 +7,7 @@ export interface KeptDocument<T> {
   readonly content: T;
   /** Says that the content changed; the file follows within a moment. */
   changed(): void;
-  /** Writes what is not written yet. */
+  /** Writes what is not written yet; later changes stay in memory. */
   close(): void;
 }
 
@@ -26,6 +26,7 @@ export function openKeptDocument<T>(options: {
   const { file, schema, empty } = options;
   const content = file === undefined ? empty : readDocument(file, schema, empty);
   let timer: NodeJS.Timeout | undefined;
+  let isClosed = false;
   const write = () => {
     clearTimeout(timer);
     timer = undefined;
@@ -34,9 +35,10 @@ export function openKeptDocument<T>(options: {
   return {
     content,
     changed: () => {
-      if (file !== undefined) timer ??= setTimeout(write, writeBehindMilliseconds);
+      if (file !== undefined && !isClosed) timer ??= setTimeout(write, writeBehindMilliseconds);
     },
     close: () => {
+      isClosed = true;
       if (timer !== undefined) write();
     },
   };

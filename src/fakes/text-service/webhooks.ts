@@ -44,6 +44,10 @@ export function openWebhookCaller(options: {
 }): WebhookCaller {
   const { deliveries, faults, clock, authToken, target, changed } = options;
   const stopping = new AbortController();
+  for (const delivery of deliveries) {
+    // The process ended in the middle of the call: nobody knows whether it was heard.
+    if (delivery.outcome === 'under way') delivery.outcome = 'missed';
+  }
 
   const deliver = async (delivery: Delivery): Promise<void> => {
     delivery.outcome = 'under way';
