@@ -1,11 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { readFakesSettings } from './settings.ts';
 
-const least = {
-  APP_URL: 'http://127.0.0.1:4310',
-  TWILIO_ACCOUNT_SID: `AC${'0'.repeat(32)}`,
-  TWILIO_AUTH_TOKEN: 't',
-};
+const least = { APP_URL: 'http://127.0.0.1:4310' };
 
 describe('the settings of the stand-ins', () => {
   it('need little and default the ports', () => {

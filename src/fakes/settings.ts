@@ -23,8 +23,12 @@ const schema = z
     FAKES_DATA_DIR: z.string().min(1).optional(),
     /** File with the offset of the product's clock in milliseconds. */
     CLOCK_OFFSET_FILE: z.string().min(1).optional(),
-    TWILIO_ACCOUNT_SID: z.string().regex(/^AC[0-9a-f]{32}$/),
-    TWILIO_AUTH_TOKEN: z.string().min(1),
+    /** The demo's account: the same values as the product takes when it is given none. */
+    TWILIO_ACCOUNT_SID: z
+      .string()
+      .regex(/^AC[0-9a-f]{32}$/)
+      .default(`AC${'0'.repeat(32)}`),
+    TWILIO_AUTH_TOKEN: z.string().min(1).default('demo-text-service-key'),
     /** Phones to show before they have a text: `+15550100101=Ana,+15550100102=Minh`. */
     FAKES_PHONES: z.string().default(''),
     /** The shops' own numbers, first one first: `+15550100001,+15550100002`. */

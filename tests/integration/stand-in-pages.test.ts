@@ -135,7 +135,7 @@ describe('the process', () => {
     child.kill('SIGTERM');
     expect(await once(child, 'exit')).toEqual([0, null]);
 
-    const refused = start({ APP_URL: 'somewhere' });
+    const refused = start({ APP_URL: 'somewhere', TWILIO_ACCOUNT_SID: 'SK1' });
     let complaint = '';
     refused.stderr.on('data', (chunk: Buffer) => {
       complaint += chunk.toString();
