@@ -1,3 +1,5 @@
+import type { FieldProblem } from '../i18n/field-codes.ts';
+
 /**
  * Every refusal the product can give, with its HTTP status. The code travels; its sentence stands in
  * `locales/<language>/errors.json` under the same name.
@@ -24,13 +26,6 @@ export const statusOfCode = {
 } as const satisfies Record<string, number>;
 
 export type ErrorCode = keyof typeof statusOfCode;
-
-/** One field that was refused: where it stands (JSON pointer) and the key of its sentence in `errors:field`. */
-export interface FieldProblem {
-  pointer: string;
-  code: string;
-  values?: Record<string, string | number>;
-}
 
 /** An expected refusal. `detail` is for the log only and never reaches a reader. */
 export class AppError extends Error {

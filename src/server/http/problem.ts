@@ -1,3 +1,4 @@
+import { fieldSentence } from '../../i18n/field-codes.ts';
 import type { Translate } from '../../i18n/translator.ts';
 import { AppError, type ErrorCode, statusOfCode } from '../errors.ts';
 
@@ -12,33 +13,6 @@ export interface Problem {
   errors?: { pointer: string; code: string; detail: string }[];
   /** The present state, where somebody else was faster. */
   present?: unknown;
-}
-
-const fieldCodes = [
-  'missing',
-  'wrong-kind',
-  'too-small',
-  'too-big',
-  'too-short',
-  'too-long',
-  'not-a-choice',
-  'not-an-email',
-  'unknown-field',
-  'does-not-fit',
-] as const;
-export type FieldCode = (typeof fieldCodes)[number];
-
-export function isFieldCode(code: string): code is FieldCode {
-  return fieldCodes.some((known) => known === code);
-}
-
-/** The sentence of a field problem; an unknown code is a programmer's slip and reads as "does not fit". */
-export function fieldSentence(
-  t: Translate,
-  code: string,
-  values: Record<string, string | number> = {},
-): string {
-  return t(`errors:field.${isFieldCode(code) ? code : 'does-not-fit'}`, { limit: '', ...values });
 }
 
 export function problemOf(error: AppError, t: Translate, requestId: string): Problem {

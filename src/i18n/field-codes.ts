@@ -1,0 +1,48 @@
+/** What can be wrong with one answer. The sentence of each stands in `errors:field` under the same name. */
+export const fieldCodes = [
+  'missing',
+  'wrong-kind',
+  'too-small',
+  'too-big',
+  'too-short',
+  'too-long',
+  'not-a-choice',
+  'not-an-email',
+  'not-a-phone',
+  'not-a-time-zone',
+  'taken',
+  'mail-needed',
+  'line-phone-needs-number',
+  'line-phone-only-operator',
+  'pair-needed',
+  'statement-needed',
+  'unknown-field',
+  'does-not-fit',
+] as const;
+export type FieldCode = (typeof fieldCodes)[number];
+
+export function isFieldCode(code: string): code is FieldCode {
+  return fieldCodes.some((known) => known === code);
+}
+
+/** One field that was refused: where it stands (JSON pointer) and the code of what is wrong. */
+export interface FieldProblem {
+  pointer: string;
+  code: string;
+  values?: Record<string, string | number>;
+}
+
+/** The part of a translator that a field's sentence needs: the server's and an island's both have it. */
+type TranslateField = (
+  key: `errors:field.${FieldCode}`,
+  values: Record<string, string | number> & { limit: string | number },
+) => string;
+
+/** The sentence of a field problem; an unknown code is a programmer's slip and reads as "does not fit". */
+export function fieldSentence(
+  t: TranslateField,
+  code: string,
+  values: Record<string, string | number> = {},
+): string {
+  return t(`errors:field.${isFieldCode(code) ? code : 'does-not-fit'}`, { limit: '', ...values });
+}
