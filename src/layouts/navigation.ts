@@ -1,0 +1,36 @@
+import type { IconName } from '../components/ui/Icon.tsx';
+import type { Translate } from '../i18n/translator.ts';
+import type { Permission } from '../server/auth/permissions.ts';
+import { type Viewer, viewerMay } from '../server/auth/viewer.ts';
+
+interface Place {
+  href: string;
+  key: 'people' | 'shop';
+  icon: IconName;
+  /** Any of these opens the page. */
+  permissions: Permission[];
+}
+
+/** The main pages in the order of the menu; each is shown to those who may open it. */
+const places: Place[] = [
+  { href: '/people', key: 'people', icon: 'people', permissions: ['people.manage', 'operator.invite'] },
+  { href: '/shop', key: 'shop', icon: 'settings', permissions: ['shop.manage'] },
+];
+
+/** The menu for this person, with the page they are on marked. */
+export function navigationFor(viewer: Viewer, path: string, t: Translate) {
+  return places
+    .filter((place) => place.permissions.some((permission) => viewerMay(viewer, permission)))
+    .map(({ href, key, icon }) => ({
+      href,
+      icon,
+      label: t(`common:${key}`),
+      current: path === href || path.startsWith(`${href}/`),
+    }));
+}
+
+/** The page a person lands on after signing in. */
+export function startPageFor(viewer: Viewer): string {
+  const first = places.find((place) => place.permissions.some((permission) => viewerMay(viewer, permission)));
+  return first?.href ?? '/me';
+}
