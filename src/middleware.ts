@@ -1,6 +1,6 @@
 import { defineMiddleware, sequence } from 'astro:middleware';
-import { readSession, sessionCookieName } from './server/auth/session.ts';
-import { rolesOfPerson } from './server/auth/viewer.ts';
+import { recogniseViewer } from './server/auth/recognise-viewer.ts';
+import { viewerMay } from './server/auth/viewer.ts';
 import { AppError } from './server/errors.ts';
 import { isFromOurPages } from './server/http/origin.ts';
 import { problemResponse, toAppError } from './server/http/problem.ts';
@@ -24,7 +24,7 @@ const nameRequest = defineMiddleware(async (context, next) => {
   if (context.locals.refusal) return next();
   const began = performance.now();
   const requestId = newId();
-  Object.assign(context.locals, { requestId, viewer: null, refusal: null });
+  Object.assign(context.locals, { requestId, viewer: null, may: () => false, refusal: null });
   greetReader(context, null);
   const response = await next();
   response.headers.set('X-Request-Id', requestId);
@@ -70,27 +70,13 @@ const checkOrigin = defineMiddleware((context, next) => {
   return next();
 });
 
-const recogniseViewer = defineMiddleware(async (context, next) => {
-  const sessionId = context.cookies.get(sessionCookieName)?.value;
-  if (!sessionId) return next();
-  const { session, user, cookie } = await readSession(sessionId);
-  if (cookie) context.cookies.set(cookie.name, cookie.value, cookie.attributes);
-  if (!session) return next();
-  const { id, shopId, shopName, timeZone, name, language, theme } = user;
-  const viewer = {
-    personId: id,
-    shopId,
-    shopName,
-    timeZone,
-    name,
-    language,
-    theme,
-    roles: await rolesOfPerson(shopId, id),
-    sessionHandle: session.handle,
-  };
+const greetViewer = defineMiddleware(async (context, next) => {
+  const viewer = await recogniseViewer(context);
+  if (!viewer) return next();
   context.locals.viewer = viewer;
+  context.locals.may = (permission) => viewerMay(viewer, permission);
   greetReader(context, viewer);
   return next();
 });
 
-export const onRequest = sequence(nameRequest, explainRefusals, checkOrigin, recogniseViewer);
+export const onRequest = sequence(nameRequest, explainRefusals, checkOrigin, greetViewer);

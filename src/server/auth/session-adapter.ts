@@ -1,9 +1,9 @@
+import type { Knex } from 'knex';
 import type { Adapter, DatabaseSession, DatabaseUser } from 'lucia';
 import { z } from 'zod';
 import { isLanguage, type Language } from '../../i18n/languages.ts';
-import { now } from '../clock.ts';
+import { clockOffset, now } from '../clock.ts';
 import { moment } from '../db/columns.ts';
-import { database } from '../db/connection.ts';
 import { newId } from '../ids.ts';
 import { hashToken } from './token.ts';
 
@@ -13,6 +13,7 @@ export interface SessionAttributes {
   /** Names the session in lists, so that it can be ended without knowing its id. */
   handle: string;
   device: string;
+  lastSeenAt: number;
 }
 
 export interface PersonAttributes {
@@ -37,6 +38,7 @@ const sessionRow = z.object({
   person_id: z.string(),
   expires_at: moment,
   device: z.string(),
+  last_seen_at: moment,
 });
 
 const sessionWithPersonRow = sessionRow.extend({
@@ -47,12 +49,22 @@ const sessionWithPersonRow = sessionRow.extend({
   time_zone: z.string(),
 });
 
+// lucia reads the machine's clock; rows are kept by the product's, as all other times are.
+function toStored(luciaTime: Date): number {
+  return luciaTime.getTime() + clockOffset();
+}
+
 function toSession(id: string, row: z.output<typeof sessionRow>): DatabaseSession {
   return {
     id,
     userId: row.person_id,
-    expiresAt: new Date(row.expires_at),
-    attributes: { shopId: row.shop_id, handle: row.handle, device: row.device },
+    expiresAt: new Date(row.expires_at - clockOffset()),
+    attributes: {
+      shopId: row.shop_id,
+      handle: row.handle,
+      device: row.device,
+      lastSeenAt: row.last_seen_at,
+    },
   };
 }
 
@@ -75,10 +87,13 @@ function toUser(row: z.output<typeof sessionWithPersonRow>): DatabaseUser {
  * that lucia knows is the cookie's; rows listed without it carry the hash in its place.
  */
 export class HashedSessionAdapter implements Adapter {
+  /** @param db gives the handle to use: the connection, or a transaction that the change belongs to */
+  constructor(private readonly db: () => Knex) {}
+
   async getSessionAndUser(
     sessionId: string,
   ): Promise<[session: DatabaseSession | null, user: DatabaseUser | null]> {
-    const found: unknown = await database()('sessions')
+    const found: unknown = await this.db()('sessions')
       .join('people', (on) =>
         on.on('people.id', 'sessions.person_id').andOn('people.shop_id', 'sessions.shop_id'),
       )
@@ -90,6 +105,7 @@ export class HashedSessionAdapter implements Adapter {
         'sessions.person_id',
         'sessions.expires_at',
         'sessions.device',
+        'sessions.last_seen_at',
         'people.name',
         'people.language',
         'people.theme',
@@ -102,42 +118,41 @@ export class HashedSessionAdapter implements Adapter {
   }
 
   async getUserSessions(personId: string): Promise<DatabaseSession[]> {
-    const rows = await database()('sessions').where({ person_id: personId });
+    const rows = await this.db()('sessions').where({ person_id: personId });
     return rows.map((row) => toSession(String(row.id_hash), sessionRow.parse(row)));
   }
 
   async setSession(session: DatabaseSession): Promise<void> {
-    const at = now();
-    await database()('sessions').insert({
+    await this.db()('sessions').insert({
       id: newId(),
       shop_id: session.attributes.shopId,
       id_hash: hashToken(session.id),
       handle: session.attributes.handle,
       person_id: session.userId,
-      expires_at: session.expiresAt.getTime(),
-      last_seen_at: at,
+      expires_at: toStored(session.expiresAt),
+      last_seen_at: session.attributes.lastSeenAt,
       device: session.attributes.device,
-      created_at: at,
+      created_at: session.attributes.lastSeenAt,
     });
   }
 
   async updateSessionExpiration(sessionId: string, expiresAt: Date): Promise<void> {
-    await database()('sessions')
+    await this.db()('sessions')
       .where({ id_hash: hashToken(sessionId) })
-      .update({ expires_at: expiresAt.getTime() });
+      .update({ expires_at: toStored(expiresAt) });
   }
 
   async deleteSession(sessionId: string): Promise<void> {
-    await database()('sessions')
+    await this.db()('sessions')
       .where({ id_hash: hashToken(sessionId) })
       .delete();
   }
 
   async deleteUserSessions(personId: string): Promise<void> {
-    await database()('sessions').where({ person_id: personId }).delete();
+    await this.db()('sessions').where({ person_id: personId }).delete();
   }
 
   async deleteExpiredSessions(): Promise<void> {
-    await database()('sessions').where('expires_at', '<=', now()).delete();
+    await this.db()('sessions').where('expires_at', '<=', now()).delete();
   }
 }

@@ -1,4 +1,8 @@
+import type { Knex } from 'knex';
 import { Lucia, TimeSpan } from 'lucia';
+import { now } from '../clock.ts';
+import { database } from '../db/connection.ts';
+import type { ShopScope } from '../db/scope.ts';
 import { config } from '../env.ts';
 import { newId } from '../ids.ts';
 import { HashedSessionAdapter } from './session-adapter.ts';
@@ -11,22 +15,26 @@ declare module 'lucia' {
   }
 }
 
-const lucia = new Lucia(new HashedSessionAdapter(), {
-  sessionExpiresIn: new TimeSpan(2, 'w'),
-  sessionCookie: {
-    name: 'session',
-    attributes: { secure: config().appUrl.startsWith('https://'), sameSite: 'lax', path: '/' },
-  },
-  getSessionAttributes: ({ shopId, handle }) => ({ shopId, handle }),
-  getUserAttributes: ({ shopId, shopName, timeZone, name, language, theme }) => ({
-    shopId,
-    shopName,
-    timeZone,
-    name,
-    language,
-    theme,
-  }),
-});
+function luciaOn(db: () => Knex) {
+  return new Lucia(new HashedSessionAdapter(db), {
+    sessionExpiresIn: new TimeSpan(2, 'w'),
+    sessionCookie: {
+      name: 'session',
+      attributes: { secure: config().appUrl.startsWith('https://'), sameSite: 'lax', path: '/' },
+    },
+    getSessionAttributes: ({ shopId, handle, lastSeenAt }) => ({ shopId, handle, lastSeenAt }),
+    getUserAttributes: ({ shopId, shopName, timeZone, name, language, theme }) => ({
+      shopId,
+      shopName,
+      timeZone,
+      name,
+      language,
+      theme,
+    }),
+  });
+}
+
+const lucia = luciaOn(database);
 
 export const sessionCookieName = lucia.sessionCookieName;
 
@@ -38,18 +46,19 @@ export function describeDevice(userAgent: string | null): string {
   return (userAgent ?? '').replace(/[^\x20-\x7e]/g, '').slice(0, 160);
 }
 
-/** Starts a session with a new id and gives the cookie that carries it. */
-export async function startSession(person: {
-  personId: string;
-  shopId: string;
-  userAgent: string | null;
-}): Promise<SessionCookie> {
-  const session = await lucia.createSession(person.personId, {
-    shopId: person.shopId,
-    handle: newId(),
+/** Starts a session with a new id, in the transaction that `scope` holds if any, and gives the cookie that carries it. */
+export async function startSession(
+  scope: ShopScope,
+  person: { personId: string; userAgent: string | null },
+): Promise<{ cookie: SessionCookie; handle: string }> {
+  const handle = newId();
+  const session = await luciaOn(() => scope.db).createSession(person.personId, {
+    shopId: scope.shopId,
+    handle,
     device: describeDevice(person.userAgent),
+    lastSeenAt: now(),
   });
-  return lucia.createSessionCookie(session.id);
+  return { cookie: lucia.createSessionCookie(session.id), handle };
 }
 
 /** The session and person behind a cookie, and the cookie to set: renewed past half of its life, blank when it is dead. */
@@ -59,15 +68,18 @@ export async function readSession(sessionId: string) {
   return { session, user, cookie: session.fresh ? lucia.createSessionCookie(session.id) : null };
 }
 
-/** Ends one session and gives the blank cookie. */
+/** Ends the session of a cookie, whoever's it is, and gives the blank cookie. */
 export async function endSession(sessionId: string): Promise<SessionCookie> {
   await lucia.invalidateSession(sessionId);
   return lucia.createBlankSessionCookie();
 }
 
-/** Ends every session of a person: after a new password, changed roles, or "sign out everywhere". */
-export async function endAllSessions(personId: string): Promise<void> {
-  await lucia.invalidateUserSessions(personId);
+/**
+ * Ends every session of a person, in the transaction that `scope` holds if any: after a new password, changed roles,
+ * deactivation, or "sign out everywhere".
+ */
+export async function endAllSessions(scope: ShopScope, personId: string): Promise<void> {
+  await luciaOn(() => scope.db).invalidateUserSessions(personId);
 }
 
 export async function deleteExpiredSessions(): Promise<void> {

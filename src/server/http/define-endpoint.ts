@@ -23,6 +23,8 @@ interface Declaration<Params, Query, Body, Output> {
   /** Names each public field: whatever else a service returns does not leave the house. */
   output: z.ZodType<Output>;
   status?: number;
+  /** Whether a program may call it with a person's token; without it only a session opens it. */
+  byToken?: boolean;
 }
 
 interface Call<Params, Query, Body> {
@@ -105,14 +107,13 @@ export function defineEndpoint<Output, Params = undefined, Query = undefined, Bo
   declaration: Declaration<Params, Query, Body, Output> & { access: Permission | 'signed-in' },
   handle: (call: SignedInCall<Params, Query, Body>) => Promise<Output | Response>,
 ): Endpoint {
-  const { access } = declaration;
   const guarded = endpoint(declaration, (call) => {
-    const viewer = allowed(call.viewer, access);
+    const viewer = allowed(call.viewer, declaration);
     return handle({ ...call, viewer, scope: scopeOf(viewer) });
   });
   const route: APIRoute = (context) => {
     try {
-      allowed(context.locals.viewer, access);
+      allowed(context.locals.viewer, declaration);
     } catch (thrown) {
       return problemResponse(toAppError(thrown), context.locals.t, context.locals.requestId);
     }
@@ -121,10 +122,15 @@ export function defineEndpoint<Output, Params = undefined, Query = undefined, Bo
   return Object.assign(route, { declaration: guarded.declaration });
 }
 
-function allowed(viewer: Viewer | null, access: Permission | 'signed-in'): Viewer {
-  if (access !== 'signed-in') return requirePermission(viewer, access);
+function allowed(
+  viewer: Viewer | null,
+  { access, byToken = false }: { access: Permission | 'signed-in'; byToken?: boolean | undefined },
+): Viewer {
   if (!viewer) throw new AppError('not-signed-in');
-  return viewer;
+  if (viewer.sessionHandle === null && !byToken) {
+    throw new AppError('forbidden', { detail: 'not for tokens' });
+  }
+  return access === 'signed-in' ? viewer : requirePermission(viewer, access);
 }
 
 /** An endpoint that anybody may call, or that checks a signature itself. */
