@@ -1,6 +1,7 @@
 import type { z } from 'zod';
-import { AppError, type FieldProblem } from '../errors.ts';
-import { fieldProblems } from './field-problems.ts';
+import type { FieldProblem } from '../../i18n/field-codes.ts';
+import { fieldProblems } from '../../i18n/field-problems.ts';
+import { AppError } from '../errors.ts';
 
 /** What a plain form sent: its answers, or what is wrong with them beside what was typed. */
 export type FormReading<Output> =
