@@ -2,12 +2,6 @@ import { z } from 'zod';
 import './schema-settings.ts';
 
 const minutesInDay = 24 * 60;
-const wallMinute = z
-  .number()
-  .int()
-  .min(0)
-  .max(minutesInDay - 1);
-
 /**
  * A span of work: on which days it starts (1 Monday to 7 Sunday) and its wall minutes after midnight. One that ends at or
  * before its start runs into the next day: 22:00 to 06:00 is a night shift, 06:00 to 06:00 a whole day round.
@@ -18,8 +12,12 @@ export const workSpanSchema = z.strictObject({
     .min(1, { error: 'missing' })
     .max(7)
     .transform((days) => [...new Set(days)].sort((a, b) => a - b)),
-  fromMinute: wallMinute,
-  toMinute: wallMinute,
+  fromMinute: z
+    .number()
+    .int()
+    .min(0)
+    .max(minutesInDay - 1),
+  toMinute: z.number().int().min(0).max(minutesInDay),
 });
 export type WorkSpan = z.output<typeof workSpanSchema>;
 
