@@ -1,4 +1,9 @@
 // The only door into the statistics core: the rest of the product imports from here and from nowhere deeper.
+export type * from './analysis/analysis.ts';
+export { AnalysisError } from './analysis/analysis.ts';
+export { analyze } from './analysis/analyze.ts';
+export { type Prediction, predict } from './analysis/predict.ts';
+export { completeHierarchy } from './analysis/terms.ts';
 export * from './brief.ts';
 export { PlanError, type PlanErrorCode } from './design/plan-error.ts';
 export type {

@@ -46,3 +46,28 @@ export function termValue(term: string, letters: readonly Letter[], x: readonly 
     return product * value;
   }, 1);
 }
+
+// Every step of an analysis asks for the same columns of the same runs, which are never changed.
+const columnsOfRuns = new WeakMap<object, Map<string, readonly number[]>>();
+
+/** The values of a term over runs, one a run. */
+export function termColumn(
+  term: string,
+  letters: readonly Letter[],
+  runs: readonly { readonly x: readonly number[] }[],
+): readonly number[] {
+  let columns = columnsOfRuns.get(runs);
+  if (columns === undefined) {
+    columns = new Map();
+    columnsOfRuns.set(runs, columns);
+  }
+  const known = columns.get(term);
+  if (known !== undefined) return known;
+  const last = term.slice(-1);
+  const factor = letters.indexOf(last);
+  if (factor < 0) throw new RangeError(`termColumn: term ${term} names an unknown factor ${last}`);
+  const shorter = term.length > 1 ? termColumn(term.slice(0, -1), letters, runs) : null;
+  const column = runs.map((run, row) => (run.x[factor] ?? 0) * (shorter?.[row] ?? 1));
+  columns.set(term, column);
+  return column;
+}

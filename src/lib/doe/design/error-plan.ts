@@ -1,4 +1,4 @@
-import { listTerms, termValue } from '../analysis/terms.ts';
+import { listTerms, termColumn } from '../analysis/terms.ts';
 import { createColumnSpace } from '../linear-algebra/column-space.ts';
 import { indicatorColumns } from '../linear-algebra/indicators.ts';
 import { hasPseudoErrorLimits } from '../tables/pseudo-error-limits.ts';
@@ -24,7 +24,7 @@ const ENOUGH_DF = 3;
  * repeats plus free columns of order three and up. With whole plots each stratum has its own.
  */
 export function decideErrorPlan(letters: readonly string[], runs: readonly LayoutRun[]): ErrorPlan {
-  const columnOf = (term: string) => runs.map((run) => termValue(term, letters, run.x));
+  const columnOf = (term: string) => termColumn(term, letters, runs);
   const question = {
     terms: listTerms(letters, letters.length),
     columnOf,
@@ -60,7 +60,7 @@ function pickStratum(name: ErrorStratum['name'], plan: ErrorPlan): ErrorStratum 
 interface SpaceQuestion {
   /** In the order in which they may enter. */
   terms: readonly string[];
-  columnOf: (term: string) => number[];
+  columnOf: (term: string) => readonly number[];
   /** Columns that take out the differences between blocks or whole plots. */
   units: number[][];
   /** One column for each set of middle runs, so that bends never count as error. */
@@ -78,7 +78,10 @@ function decideFromSpaces(question: SpaceQuestion): ErrorPlan {
   const space = createColumnSpace([...units, ...middles]);
   const tested = terms.filter((term) => term.length <= 2 && space.add(columnOf(term)));
   const df = rows - space.rank;
-  const highOrderTerms = terms.filter((term) => term.length > 2 && space.add(columnOf(term)));
+  // Functions of the settings cannot fill more than what repeats leave; asking on would only cost time.
+  const highOrderTerms = terms.filter(
+    (term) => term.length > 2 && rows - space.rank > replicateDf && space.add(columnOf(term)),
+  );
   const contrasts = tested.length + highOrderTerms.length;
   const pseudo = regular && hasPseudoErrorLimits({ contrasts, replicateDf });
   const rung = chooseRung({ df, replicateDf, fewestDf, pseudo });
@@ -99,12 +102,13 @@ function chooseRung(known: {
   return df >= fewestDf ? byDf : 'none';
 }
 
-function middleColumns(runs: readonly LayoutRun[]): number[][] {
+export function middleColumns(runs: readonly LayoutRun[]): number[][] {
   const sets = new Set(runs.filter((run) => run.center).map((run) => run.x.join(' ')));
   return [...sets].map((set) => runs.map((run) => (run.center && run.x.join(' ') === set ? 1 : 0)));
 }
 
-function averageOver(plot: readonly number[], column: readonly number[]): number {
+/** Average of a column over the runs of a whole plot. */
+export function averageOver(plot: readonly number[], column: readonly number[]): number {
   const members = column.filter((_, row) => plot[row] === 1);
   return members.reduce((sum, value) => sum + value, 0) / members.length;
 }

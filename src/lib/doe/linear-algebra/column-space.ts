@@ -5,26 +5,35 @@ const RELATIVE_TOLERANCE = 1e-9;
 export interface ColumnSpace {
   readonly rank: number;
   /** Adds the column if it is independent of those before it; says whether it was. */
-  add(column: readonly number[]): boolean;
-  spans(column: readonly number[]): boolean;
+  add(column: ArrayLike<number>): boolean;
+  spans(column: ArrayLike<number>): boolean;
+  /** Sum of squares of what the space leaves of a vector. */
+  squaredDistance(vector: ArrayLike<number>): number;
 }
 
 /**
- * Column space of a model matrix, built one column at a time by Gram-Schmidt with one re-orthogonalization, which is enough for
- * orthogonality to rounding (Giraud, Langou & Rozloznik 2005, Computers and Mathematics with Applications 50).
+ * Column space of a model matrix, built one column at a time by Gram-Schmidt; where projection has taken most of a column it is done
+ * twice, which is enough for orthogonality to rounding (Giraud, Langou & Rozloznik 2005, Computers and Mathematics with Applications 50).
  *
  * Rank is decided by relative tolerance: a column is dependent when less than 1e-9 of its own length is left.
  */
-export function createColumnSpace(start: Iterable<readonly number[]> = []): ColumnSpace {
+export function createColumnSpace(start: Iterable<ArrayLike<number>> = []): ColumnSpace {
   const basis: Float64Array[] = [];
 
-  const remainder = (column: readonly number[]): { rest: Float64Array; isNew: boolean; length: number } => {
-    const rest = Float64Array.from(column);
+  /** Takes the space out of `rest` in place; returns the length that is left and the length before. */
+  const project = (rest: Float64Array): { left: number; whole: number } => {
     const whole = lengthOf(rest);
-    for (let pass = 0; pass < 2; pass++) for (const direction of basis) subtractProjection(rest, direction);
-    const length = lengthOf(rest);
-    return { rest, length, isNew: whole > 0 && length > RELATIVE_TOLERANCE * whole };
+    let left = whole;
+    for (let pass = 0; pass < 2; pass++) {
+      for (const direction of basis) subtractProjection(rest, direction);
+      const before = left;
+      left = lengthOf(rest);
+      if (left > 0.5 * before) break;
+    }
+    return { left, whole };
   };
+  const isNew = ({ left, whole }: { left: number; whole: number }) =>
+    whole > 0 && left > RELATIVE_TOLERANCE * whole;
 
   const space: ColumnSpace = {
     get rank() {
@@ -32,12 +41,15 @@ export function createColumnSpace(start: Iterable<readonly number[]> = []): Colu
     },
     add(column) {
       if (basis.length >= column.length) return false;
-      const { rest, length, isNew } = remainder(column);
-      if (!isNew) return false;
-      basis.push(rest.map((value) => value / length));
+      const rest = new Float64Array(column);
+      const lengths = project(rest);
+      if (!isNew(lengths)) return false;
+      for (let row = 0; row < rest.length; row++) rest[row] = (rest[row] ?? 0) / lengths.left;
+      basis.push(rest);
       return true;
     },
-    spans: (column) => !remainder(column).isNew,
+    spans: (column) => !isNew(project(new Float64Array(column))),
+    squaredDistance: (vector) => project(new Float64Array(vector)).left ** 2,
   };
   for (const column of start) space.add(column);
   return space;

@@ -11,10 +11,8 @@ export interface FactoredModel {
   /** How much each run determines its own fitted value, 0 to 1. */
   leverage: readonly number[];
   fit(y: readonly number[]): LeastSquaresFit;
-  /** Variance, for error variance 1, of the sum of the coefficients times `point`. */
-  varianceAt(point: readonly number[]): number;
-  /** Covariance, for error variance 1, of two such sums. */
-  covarianceAt(first: readonly number[], second: readonly number[]): number;
+  /** (X'WX)^-1: covariances of the coefficients for error variance 1. */
+  covariance(): number[][];
 }
 
 export interface LeastSquaresFit {
@@ -55,25 +53,15 @@ export function factorModel(
   const orthogonal = decomposition.orthogonalMatrix.to2DArray();
   const inverse = invertUpper(decomposition.upperTriangularMatrix.to2DArray());
 
-  const spread = (point: readonly number[]): number[] => {
-    const unscaled = point.map((value, column) => value / (lengths[column] ?? 1));
-    return Array.from({ length: parameters }, (_, index) => {
-      let sum = 0;
-      for (let column = 0; column <= index; column++)
-        sum += (unscaled[column] ?? 0) * (inverse[column]?.[index] ?? 0);
-      return sum;
-    });
-  };
-  const covarianceAt = (first: readonly number[], second: readonly number[]) =>
-    dot(spread(first), spread(second));
-
   return {
     parameters,
     residualDf: runs - parameters,
     variances: inverse.map((row, column) => dot(row, row) / (lengths[column] ?? 1) ** 2),
     leverage: orthogonal.map((row) => snapToOne(dot(row, row))),
-    varianceAt: (point) => covarianceAt(point, point),
-    covarianceAt,
+    covariance: () =>
+      inverse.map((first, row) =>
+        inverse.map((second, column) => dot(first, second) / ((lengths[row] ?? 1) * (lengths[column] ?? 1))),
+      ),
     fit(y) {
       const offset = y[0] ?? 0;
       const centered = y.map((value, row) => (value - offset) * (roots?.[row] ?? 1));

@@ -1,0 +1,88 @@
+import { normalUpperTail } from '../distributions/normal.ts';
+import { normalQuantile } from '../distributions/normal-quantile.ts';
+import { studentTTwoSided, studentTUpperQuantile } from '../distributions/student-t.ts';
+import { studentizedMaximumModulusUpperTail } from '../distributions/studentized-maximum-modulus.ts';
+import {
+  type PseudoErrorPlan,
+  type PseudoErrorStatistic,
+  pseudoErrorLimit,
+  pseudoErrorUpperTail,
+} from '../tables/pseudo-error-limits.ts';
+import type { Tested } from './analysis.ts';
+
+/** What an estimate is held against. Each kind knows its own tails. */
+export type Yardstick =
+  /** No error at all, or no spread in it. */
+  | { kind: 'none' }
+  /** A standard deviation with degrees of freedom. */
+  | { kind: 't'; sd: number; df: number; family: number }
+  /** The typical contrast: `sd` is the error of a run according to the contrasts that count for this estimate. */
+  | { kind: 'pseudo'; sd: number; plan: PseudoErrorPlan; outside: boolean; familyHasOutside: boolean }
+  /** A variance known by theory: never judged together, as the theory is only a floor. */
+  | { kind: 'known'; sd: number };
+
+const UNTESTED: Tested = { se: null, df: null, t: null, p: null, pFamily: null, ci: null };
+
+/**
+ * Tests an estimate.
+ *
+ * @param variance of the estimate for error variance 1
+ * @param alpha one minus the confidence of the interval
+ */
+export function testEstimate(
+  estimate: number,
+  variance: number,
+  yardstick: Yardstick,
+  alpha: number,
+): Tested {
+  if (yardstick.kind === 'none') return UNTESTED;
+  const se = yardstick.sd * Math.sqrt(variance);
+  const df = yardstick.kind === 't' ? yardstick.df : null;
+  if (!(se > 0)) return { ...UNTESTED, se: 0, df };
+  const t = estimate / se;
+  const halfWidth = limitOf(yardstick, alpha) * se;
+  return { se, df, t, ...tailsOf(yardstick, Math.abs(t)), ci: [estimate - halfWidth, estimate + halfWidth] };
+}
+
+/** Half-width of the interval in standard errors. */
+export function limitOf(yardstick: Exclude<Yardstick, { kind: 'none' }>, alpha: number): number {
+  if (yardstick.kind === 't') return rememberedLimit(`t ${yardstick.df}`, alpha, tLimit(yardstick.df));
+  if (yardstick.kind === 'known') return normalQuantile(1 - alpha / 2);
+  const { plan, outside } = yardstick;
+  const statistic: PseudoErrorStatistic = outside ? 'outside' : 'single';
+  const key = `${statistic} ${plan.contrasts} ${plan.replicateDf}`;
+  return rememberedLimit(key, alpha, (upper) => pseudoErrorLimit(plan, statistic, upper));
+}
+
+function tLimit(df: number): (alpha: number) => number {
+  return (alpha) => studentTUpperQuantile(alpha / 2, df);
+}
+
+function tailsOf(
+  yardstick: Exclude<Yardstick, { kind: 'none' }>,
+  size: number,
+): { p: number; pFamily: number | null } {
+  if (yardstick.kind === 'known') return { p: 2 * normalUpperTail(size), pFamily: null };
+  if (yardstick.kind === 't') {
+    const p = studentTTwoSided(size, yardstick.df);
+    const pFamily = studentizedMaximumModulusUpperTail(size, yardstick.family, yardstick.df);
+    return { p, pFamily: Math.min(1, Math.max(p, pFamily)) };
+  }
+  const { plan, outside, familyHasOutside } = yardstick;
+  const p = pseudoErrorUpperTail(plan, outside ? 'outside' : 'single', size);
+  const pFamily = pseudoErrorUpperTail(plan, familyHasOutside ? 'familyAndOutside' : 'family', size);
+  return { p, pFamily: Math.min(1, Math.max(p, pFamily)) };
+}
+
+// Quantiles cost a hundred times what the rest of a test does, and a few of them serve all trials.
+const limits = new Map<string, number>();
+
+function rememberedLimit(key: string, alpha: number, compute: (alpha: number) => number): number {
+  const full = `${key} ${alpha}`;
+  const known = limits.get(full);
+  if (known !== undefined) return known;
+  const limit = compute(alpha);
+  if (limits.size > 1000) limits.clear();
+  limits.set(full, limit);
+  return limit;
+}
