@@ -4,11 +4,21 @@ import tailwindcss from '@tailwindcss/vite';
 import { defineConfig } from 'astro/config';
 import { figuresFace } from './src/styles/figures-face.mjs';
 
+/** The daily server knows nothing of src/main.ts: this migrates, seeds and starts the worker once it listens. */
+const backgroundWork = {
+  name: 'background-work',
+  hooks: {
+    'astro:server:setup': ({ server }) => {
+      server.httpServer?.once('listening', () => server.ssrLoadModule('/src/dev-start.ts'));
+    },
+  },
+};
+
 export default defineConfig({
   output: 'server',
   // Our own server in src/main.ts wraps Astro's handler: it drains requests on SIGTERM and limits bodies.
   adapter: node({ mode: 'middleware' }),
-  integrations: [react()],
+  integrations: [react(), backgroundWork],
   trailingSlash: 'never',
   devToolbar: { enabled: false },
   // Astro's own check refuses the signed webhooks and does not look at JSON posts; src/server/http/origin.ts does both.
