@@ -9,7 +9,7 @@ const backgroundWork = {
   name: 'background-work',
   hooks: {
     'astro:server:setup': ({ server }) => {
-      server.httpServer?.once('listening', () => server.ssrLoadModule('/src/dev-start.ts'));
+      server.httpServer?.once('listening', () => server.ssrLoadModule('/src/dev-boot.ts'));
     },
   },
 };

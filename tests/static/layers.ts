@@ -16,7 +16,8 @@ export interface Layer {
   forDevelopment?: true;
 }
 
-const pure = ['doe', 'messages'];
+// Tables without code that touches anything: they run in the browser as well as on the server.
+const pure = ['doe', 'messages', 'contracts'];
 const markup = ['ui', 'island', 'i18n', 'styles'];
 
 export const layers: Layer[] = [
@@ -33,7 +34,12 @@ export const layers: Layer[] = [
     paths: /^src\/(main|dev-boot)\.ts$/,
     mayImport: ['server', 'worker', 'feature-server', 'i18n'],
   },
-  { name: 'middleware', paths: /^src\/middleware\.ts$/, mayImport: ['server', 'i18n'], underAstro: true },
+  {
+    name: 'middleware',
+    paths: /^src\/middleware\.ts$/,
+    mayImport: ['server', 'contracts', 'i18n'],
+    underAstro: true,
+  },
   {
     name: 'pages',
     paths: /^src\/pages\//,
@@ -49,7 +55,13 @@ export const layers: Layer[] = [
     ],
     underAstro: true,
   },
-  { name: 'layouts', paths: /^src\/layouts\//, mayImport: [...markup, 'feature-rules'], underAstro: true },
+  // Layouts frame pages for whoever reads them: they ask the server who that is, as pages do.
+  {
+    name: 'layouts',
+    paths: /^src\/layouts\//,
+    mayImport: [...markup, 'feature-rules', 'server', 'contracts'],
+    underAstro: true,
+  },
   { name: 'ui', paths: /^src\/components\/ui\//, mayImport: ['styles'], underAstro: true },
   { name: 'island', paths: /^src\/components\/island\//, mayImport: ['ui', 'i18n'] },
   {
@@ -83,7 +95,13 @@ export const layers: Layer[] = [
   { name: 'messages', paths: /^src\/lib\/messages\//, mayImport: [], packages: ['libphonenumber-js', 'zod'] },
   { name: 'i18n', paths: /^src\/i18n\//, mayImport: ['locales'] },
   { name: 'locales', paths: /^locales\//, mayImport: [] },
-  { name: 'server', paths: /^src\/server\//, mayImport: ['i18n', 'messages'] },
+  {
+    name: 'contracts',
+    paths: /^src\/server\/(errors|auth\/permissions)\.ts$/,
+    mayImport: ['i18n'],
+    packages: [],
+  },
+  { name: 'server', paths: /^src\/server\//, mayImport: ['i18n', 'messages', 'contracts'] },
   {
     name: 'worker',
     paths: /^src\/worker\//,

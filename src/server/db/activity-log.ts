@@ -1,4 +1,5 @@
 import { createHash } from 'node:crypto';
+import type { Knex } from 'knex';
 import { z } from 'zod';
 import { now } from '../clock.ts';
 import { newId } from '../ids.ts';
@@ -129,4 +130,14 @@ export async function checkActivityChain(scope: Pick<ShopScope, 'db' | 'shopId'>
   const head = await db('shops').where({ id: shopId }).first('log_seq', 'log_hash');
   const whole = head && Number(head.log_seq) === seq && head.log_hash === hash;
   return whole ? { intact: true, lines: seq } : { intact: false, seq: seq + 1, reason: 'head' };
+}
+
+/** The finding for each shop of the installation, by name. */
+export async function checkAllChains(db: Knex): Promise<{ shop: string; finding: ChainFinding }[]> {
+  const shops: { id: string; name: string }[] = await db('shops').orderBy('name').select('id', 'name');
+  const findings = [];
+  for (const { id, name } of shops) {
+    findings.push({ shop: name, finding: await checkActivityChain({ db, shopId: id }) });
+  }
+  return findings;
 }
