@@ -4,8 +4,6 @@ declare namespace App {
   interface Locals {
     requestId: string;
     viewer: import('./server/auth/viewer.ts').Viewer | null;
-    /** Whether the viewer holds a permission; for what a page shows. Services and endpoints check for themselves. */
-    may: (permission: import('./server/auth/permissions.ts').Permission) => boolean;
     language: import('./i18n/languages.ts').Language;
     t: import('./i18n/translator.ts').Translate;
     formats: import('./i18n/format.ts').Formats;

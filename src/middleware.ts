@@ -1,6 +1,5 @@
 import { defineMiddleware, sequence } from 'astro:middleware';
 import { recogniseViewer } from './server/auth/recognise-viewer.ts';
-import { viewerMay } from './server/auth/viewer.ts';
 import { AppError } from './server/errors.ts';
 import { isFromOurPages } from './server/http/origin.ts';
 import { problemResponse, toAppError } from './server/http/problem.ts';
@@ -24,7 +23,7 @@ const nameRequest = defineMiddleware(async (context, next) => {
   if (context.locals.refusal) return next();
   const began = performance.now();
   const requestId = newId();
-  Object.assign(context.locals, { requestId, viewer: null, may: () => false, refusal: null });
+  Object.assign(context.locals, { requestId, viewer: null, refusal: null });
   greetReader(context, null);
   const response = await next();
   response.headers.set('X-Request-Id', requestId);
@@ -74,7 +73,6 @@ const greetViewer = defineMiddleware(async (context, next) => {
   const viewer = await recogniseViewer(context);
   if (!viewer) return next();
   context.locals.viewer = viewer;
-  context.locals.may = (permission) => viewerMay(viewer, permission);
   greetReader(context, viewer);
   return next();
 });

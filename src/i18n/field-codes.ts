@@ -16,6 +16,10 @@ export const fieldCodes = [
   'line-phone-only-operator',
   'pair-needed',
   'statement-needed',
+  'too-common',
+  'too-plain',
+  'too-close',
+  'wrong-password',
   'unknown-field',
   'does-not-fit',
 ] as const;
