@@ -2,16 +2,17 @@ import { z } from 'zod';
 import { currencies } from '../../i18n/currencies.ts';
 import { languages } from '../../i18n/languages.ts';
 import { isTimeZone } from '../../i18n/time-zones.ts';
+import { personNameSchema } from './person.schema.ts';
 import { mailAddressSchema, newPasswordSchema } from './sign-in.schema.ts';
 import './schema-settings.ts';
 
 /** What makes a shop and its first admin. */
 export const setUpSchema = z.object({
-  shopName: z.string().trim().min(1).max(80),
+  shopName: personNameSchema,
   timeZone: z.string().refine(isTimeZone, { error: 'not-a-time-zone' }),
   language: z.enum(languages),
   currency: z.enum(currencies),
-  name: z.string().trim().min(1).max(80),
+  name: personNameSchema,
   email: mailAddressSchema,
   password: newPasswordSchema,
 });

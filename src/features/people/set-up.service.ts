@@ -4,11 +4,16 @@ import { endSession, type SessionCookie } from '../../server/auth/session.ts';
 import { isAddressTaken } from '../../server/auth/sign-in-address.ts';
 import { recordActivity } from '../../server/db/activity-log.ts';
 import { inTransaction } from '../../server/db/in-transaction.ts';
+import type { ShopScope } from '../../server/db/scope.ts';
 import { AppError } from '../../server/errors.ts';
+import { newId } from '../../server/ids.ts';
+import { storePasswordHash } from './password.repository.ts';
 import { prepareNewPassword } from './password.service.ts';
-import { completeShop, insertFirstAdmin, readShopName } from './set-up.repository.ts';
+import { insertPerson } from './person.repository.ts';
+import { completeShop, readShopName } from './set-up.repository.ts';
 import type { SetUp } from './set-up.schema.ts';
 import { type Browser, openSession } from './sign-in.service.ts';
+import { usualWorkSpans } from './work-hours.ts';
 
 interface Visit {
   token: string;
@@ -29,6 +34,26 @@ export async function readSetUpLink(visit: Visit): Promise<{ shopName: string }>
   return { shopName: await readShopName(scopeOfLink(link)) };
 }
 
+async function addFirstAdmin(scope: ShopScope, setUp: SetUp, passwordHash: string): Promise<string> {
+  const { name, email, language } = setUp;
+  const personId = newId();
+  await insertPerson(scope, {
+    id: personId,
+    kind: 'person',
+    name,
+    email,
+    phone: null,
+    language,
+    plainLetters: true,
+    roles: ['admin'],
+    safetyPerson: false,
+    workSpans: [...usualWorkSpans],
+    consent: 'unasked',
+  });
+  await storePasswordHash(scope, { personId, passwordHash });
+  return personId;
+}
+
 /**
  * Makes the shop and its first admin, and signs the admin in. Of two visitors with the same link one wins.
  * @throws AppError `gone`, `invalid` (the link can then be used again), `too-many`
@@ -42,7 +67,7 @@ export async function setUpShop(visit: Visit, setUp: SetUp, browser: Browser): P
       throw new AppError('invalid', { fields: [{ pointer: '#/email', code: 'taken' }] });
     }
     await completeShop(scope, setUp);
-    const personId = await insertFirstAdmin(scope, { ...setUp, passwordHash });
+    const personId = await addFirstAdmin(scope, setUp, passwordHash);
     await recordActivity(scope, {
       kind: 'shop.set-up',
       subjectId: scope.shopId,
