@@ -5,6 +5,9 @@ export { analyze } from './analysis/analyze.ts';
 export { type Prediction, predict } from './analysis/predict.ts';
 export { completeHierarchy } from './analysis/terms.ts';
 export * from './brief.ts';
+export { decode, encode } from './design/dial.ts';
+export { isForbidden } from './design/forbidden.ts';
+export { layOutAddedRuns, layOutRuns } from './design/lay-out-runs.ts';
 export { PlanError, type PlanErrorCode } from './design/plan-error.ts';
 export type {
   Alias,
@@ -12,8 +15,11 @@ export type {
   ErrorPlan,
   ErrorRung,
   ErrorStratum,
+  LayoutRow,
   PlannedRun,
   Proposal,
 } from './design/proposal.ts';
+export { proposePlans } from './design/propose-plans.ts';
+export { countTimeAndMoney } from './design/time-and-money.ts';
 export * from './distributions/index.ts';
 export * from './facts.ts';

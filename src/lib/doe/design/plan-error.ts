@@ -23,6 +23,7 @@ export const planRefusalSchema = z.object({
     'unknown-letter',
     'empty-rule',
     'everything-forbidden',
+    'too-much-forbidden',
     'too-few-runs',
     'too-little-time',
     'too-little-money',

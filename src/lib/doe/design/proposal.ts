@@ -32,6 +32,23 @@ export interface Proposal {
   recommended: boolean;
   reasons: Fact[];
   warnings: Fact[];
+  /** What the plan is made to test: every main effect and the pairs it can judge. */
+  terms: string[];
+  /** Only where rules took corners away: variance in a balanced plan of as many runs over the variance here, for each term. */
+  efficiencies?: { term: string; relative: number }[];
+  /** The runs in standard order, so that a stored proposal can be laid out again whatever becomes of the catalogue. */
+  layout: LayoutRow[];
+}
+
+/** One run before it has a place in the order. */
+export interface LayoutRow {
+  /** Coded settings: -1 low, 0 middle, +1 high. */
+  x: number[];
+  /** From 1. */
+  block: number;
+  /** From 1. */
+  wholePlot?: number;
+  center: boolean;
 }
 
 /** The estimate of `term` is the sum of it and of each term in `with` times its coefficient (+1 or -1 in regular plans). */

@@ -19,3 +19,4 @@ export {
   studentizedMaximumModulusQuantile,
   studentizedMaximumModulusUpperTail,
 } from './studentized-maximum-modulus.ts';
+export { trigamma } from './trigamma.ts';

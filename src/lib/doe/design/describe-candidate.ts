@@ -1,0 +1,66 @@
+import type { Brief } from '../brief.ts';
+import type { Candidate } from './candidate.ts';
+import { worstEffectVariance } from './effect-variance.ts';
+import { listWarnings } from './list-warnings.ts';
+import type { PlanningScale } from './planning-scale.ts';
+import { promise } from './promises.ts';
+import type { Proposal } from './proposal.ts';
+
+/** A candidate with its promises and warnings; not yet compared with others. */
+export function describeCandidate(brief: Brief, candidate: Candidate, scale: PlanningScale): Proposal {
+  const { structure, rows, centerPoints, errorPlan, minutes, cost } = candidate;
+  const { wholePlots } = structure;
+  const settingsWhere = (isHard: boolean) =>
+    brief.factors.flatMap((factor, index) => ((factor.hardToChange ?? false) === isHard ? [index] : []));
+  const hardVariance = worstEffectVariance(structure, rows, settingsWhere(true));
+  const grouped = wholePlots !== undefined && hardVariance !== null;
+  const easy = grouped ? settingsWhere(false) : brief.factors.map((_, index) => index);
+  const promises = promise({
+    scale,
+    errorPlan: wholePlots?.judged === false ? withoutWholeStratum(errorPlan) : errorPlan,
+    tested: structure.terms.length + (centerPoints > 0 ? 1 : 0),
+    easyVariance: worstEffectVariance(structure, rows, easy),
+    ...(grouped ? { hard: { plots: wholePlots.count, runVariance: hardVariance } } : {}),
+  });
+  return {
+    id: nameCandidate(candidate),
+    k: structure.k,
+    baseRuns: structure.baseRuns,
+    replicates: structure.replicates,
+    centerPoints,
+    blocks: structure.blocks,
+    ...(wholePlots === undefined ? {} : { wholePlots: new Set(rows.map((row) => row.wholePlot)).size }),
+    runs: rows.length,
+    generators: structure.generators,
+    definingWords: structure.definingWords,
+    resolution: structure.resolution,
+    aliases: structure.aliases,
+    confoundedWithBlocks: structure.confoundedWithBlocks,
+    errorPlan,
+    ...promises,
+    ...(minutes === undefined ? {} : { minutes }),
+    ...(cost === undefined ? {} : { cost }),
+    recommended: false,
+    reasons: [],
+    warnings: listWarnings({ brief, candidate, scale }),
+    terms: structure.terms,
+    ...(structure.irregular === undefined ? {} : { efficiencies: structure.irregular.efficiencies }),
+    layout: rows,
+  };
+}
+
+/** Fewer than two whole plots a level: declared unjudged before the start, even where middle plots would give it some error. */
+function withoutWholeStratum(errorPlan: Candidate['errorPlan']): Candidate['errorPlan'] {
+  const strata = errorPlan.strata?.filter(({ name }) => name === 'sub');
+  return strata === undefined ? errorPlan : { ...errorPlan, strata };
+}
+
+/** The same for the same structure, whatever the brief's numbers. */
+function nameCandidate({ structure, centerPoints }: Candidate): string {
+  const { k, baseRuns, replicates, blocks, generators, irregular, terms } = structure;
+  const parts = [`k${k}`, `n${baseRuns}`, `r${replicates}`, `c${centerPoints}`, `b${blocks}`];
+  if (structure.wholePlots) parts.push(`w${structure.wholePlots.count}`);
+  if (generators.some((generator) => generator.includes('-'))) parts.push(generators.join('.'));
+  if (irregular) parts.push(`t${terms.length}`);
+  return parts.join('-');
+}

@@ -1,0 +1,188 @@
+import { listTerms } from '../analysis/terms.ts';
+import type { Brief } from '../brief.ts';
+import { createColumnSpace } from '../linear-algebra/column-space.ts';
+import { createUniformSource } from '../random/random-numbers.ts';
+import { canShowMainEffects, listAllowedCorners } from './allowed-corners.ts';
+import { expandPoint, invertInformation, predictionVariance } from './information.ts';
+import { findOptimalSubsets } from './optimal-subset.ts';
+import type { Alias } from './proposal.ts';
+import { lettersUpTo } from './words.ts';
+
+/** Corners chosen around forbidden ones: not balanced, but as near to it as the rules allow. */
+export interface IrregularPlan {
+  corners: number[][];
+  /** Main effects and, in the larger plans, the pairs that corners can still show. */
+  terms: string[];
+  aliases: Alias[];
+  /** Variance of each term in a balanced plan of as many corners over its variance here. */
+  efficiencies: { term: string; relative: number }[];
+  /** Pairs of which some corner is never run, so that no plan could show how they work together. */
+  emptied: string[];
+  /** 5: pairs apart; 4: main effects apart from pairs; 3: not even that. Emptied pairs are not counted: their question cannot be asked. */
+  resolution: 3 | 4 | 5;
+}
+
+const lowestMainEfficiency = 0.6;
+
+/**
+ * D-optimal subsets of the allowed corners, the smallest two that serve each purpose: all pairs that corners can still show, and main effects alone.
+ *
+ * Sizes are those at which small two-level plans are nearly balanced: multiples of four for the settings no rule touches, multiples of three for two
+ * settings that share three of their four corners. Subsets that would know a main effect less than 60 % as well as a balanced plan are left out.
+ */
+export function findIrregularPlans(brief: Brief, largest: number): IrregularPlan[] {
+  const corners = listAllowedCorners(brief);
+  const letters = lettersUpTo(brief.factors.length);
+  if (!canShowMainEffects(corners, letters.length)) return [];
+  const withPairs = listShownTerms(corners, letters);
+  const found = [withPairs, letters].flatMap((terms) => {
+    if (!mayServe(corners, terms, letters.length)) return [];
+    const plans: IrregularPlan[] = [];
+    for (const size of sizes.filter((candidate) => candidate > terms.length && candidate <= largest)) {
+      const plan = planSubset({ corners, letters, size, terms });
+      if (plan !== null) plans.push(plan);
+      if (plans.length === plansEach) break;
+    }
+    return plans;
+  });
+  return found.filter(
+    (plan, index) => found.findIndex((other) => other.corners.length === plan.corners.length) === index,
+  );
+}
+
+const sizes = [4, 6, 8, 9, 10, 12, 14, 15, 16, 18, 20, 21, 24, 27, 28, 30, 32];
+const plansEach = 2;
+const nearlyOptimal = 0.95;
+
+/**
+ * Whether it is worth searching: shares of the allowed corners, moved a few steps from equal ones towards the best (S.D. Silvey, D.M. Titterington &
+ * B. Torsney, 1978, Communications in Statistics A 7), already know each main effect nearly well enough.
+ */
+function mayServe(corners: readonly number[][], terms: readonly string[], k: number): boolean {
+  const rows = corners.map((x) => expandPoint(x, terms));
+  let shares = rows.map(() => 1 / rows.length);
+  let inverse: number[][] | null = null;
+  // Larger models gain little and cost much per step.
+  for (let step = 0; step < (terms.length > k ? 3 : 25); step++) {
+    inverse = invertInformation(rows, shares);
+    if (inverse === null) return false;
+    const known = inverse;
+    shares = rows.map(
+      (row, index) => ((shares[index] ?? 0) * predictionVariance(row, known)) / (terms.length + 1),
+    );
+  }
+  return terms
+    .slice(0, k)
+    .every((_, index) => relativeVariance(inverse, index, 1) > 0.92 * lowestMainEfficiency);
+}
+
+function relativeVariance(inverse: readonly number[][] | null, index: number, runs: number): number {
+  return 1 / (runs * (inverse?.[index + 1]?.[index + 1] ?? Number.POSITIVE_INFINITY));
+}
+
+interface Subset {
+  corners: readonly number[][];
+  letters: readonly string[];
+  size: number;
+  terms: readonly string[];
+}
+
+function planSubset({ corners, letters, size, terms }: Subset): IrregularPlan | null {
+  const subsets = findOptimalSubsets({
+    candidates: corners.map((x) => expandPoint(x, terms)),
+    size,
+    // A fixed seed: the same brief always gets the same plans.
+    random: createUniformSource(size),
+    starts: terms.length > letters.length ? 2 : 5,
+  });
+  const plans = subsets
+    .filter(({ relativeDeterminant }) => relativeDeterminant > nearlyOptimal)
+    .flatMap(
+      ({ chosen }) =>
+        describeCorners({ chosen: chosen.map((index) => corners[index] ?? []), corners, letters, terms }) ??
+        [],
+    );
+  // Of subsets that are as good as equal, the one whose worst main effect is known best.
+  return plans.sort((first, second) => worstMain(second) - worstMain(first))[0] ?? null;
+}
+
+function worstMain({ efficiencies }: IrregularPlan): number {
+  return Math.min(...efficiencies.filter(({ term }) => term.length === 1).map(({ relative }) => relative));
+}
+
+interface ChosenCorners {
+  chosen: readonly number[][];
+  /** All that could have been chosen. */
+  corners: readonly number[][];
+  letters: readonly string[];
+  terms: readonly string[];
+}
+
+/** Efficiencies and aliases of corners under a model; null where they cannot carry it or know a main effect too badly. */
+function describeCorners({ chosen, corners, letters, terms }: ChosenCorners): IrregularPlan | null {
+  const rows = chosen.map((x) => expandPoint(x, terms));
+  const inverse = invertInformation(rows);
+  if (inverse === null) return null;
+  const efficiencies = terms.map((term, index) => ({
+    term,
+    relative: relativeVariance(inverse, index, chosen.length),
+  }));
+  const others = listTerms(letters, 2).filter((term) => !terms.includes(term));
+  const aliases = traceAliases({ chosen, rows, inverse, terms, others });
+  const emptied = others.filter((pair) => isEmptied(corners, pair));
+  const mainsTied = aliases.some(
+    ({ term, with: partners }) =>
+      term.length === 1 && partners.some((partner) => !emptied.includes(partner.term)),
+  );
+  const plan: IrregularPlan = {
+    corners: chosen.map((x) => [...x]),
+    terms: [...terms],
+    aliases,
+    efficiencies,
+    emptied,
+    resolution: mainsTied ? 3 : others.length > emptied.length ? 4 : 5,
+  };
+  return worstMain(plan) < lowestMainEfficiency - 1e-9 ? null : plan;
+}
+
+/** Main effects, then every pair that the corners can tell from what came before. */
+function listShownTerms(corners: readonly number[][], letters: readonly string[]): string[] {
+  const space = createColumnSpace([corners.map(() => 1)]);
+  return listTerms(letters, 2).filter((term) =>
+    space.add(corners.map((x) => expandPoint(x, [term])[1] ?? 0)),
+  );
+}
+
+function isEmptied(corners: readonly number[][], pair: string): boolean {
+  const [first = 0, second = 0] = lettersUpTo(26).flatMap((letter, index) =>
+    pair.includes(letter) ? [index] : [],
+  );
+  return new Set(corners.map((x) => `${x[first]} ${x[second]}`)).size < 4;
+}
+
+interface AliasQuestion {
+  chosen: readonly number[][];
+  rows: readonly number[][];
+  inverse: readonly number[][];
+  terms: readonly string[];
+  /** Terms left out of the model. */
+  others: readonly string[];
+}
+
+/** The alias matrix (X1'X1)^-1 X1'X2, row by row (G.E.P. Box & K.B. Wilson, 1951, JRSS B 13, 1-45). */
+function traceAliases({ chosen, rows, inverse, terms, others }: AliasQuestion): Alias[] {
+  const products = others.map((other) => {
+    const column = chosen.map((x) => expandPoint(x, [other])[1] ?? 0);
+    return (rows[0] ?? []).map((_, j) =>
+      rows.reduce((sum, row, run) => sum + (row[j] ?? 0) * (column[run] ?? 0), 0),
+    );
+  });
+  return terms.flatMap((term, index) => {
+    const line = inverse[index + 1] ?? [];
+    const partners = others.flatMap((other, place) => {
+      const coefficient = line.reduce((sum, value, j) => sum + value * (products[place]?.[j] ?? 0), 0);
+      return Math.abs(coefficient) < 1e-9 ? [] : [{ term: other, coefficient }];
+    });
+    return partners.length === 0 ? [] : [{ term, with: partners }];
+  });
+}

@@ -1,0 +1,82 @@
+import { listTerms } from '../analysis/terms.ts';
+import type { Brief } from '../brief.ts';
+import { groupBy } from './group-by.ts';
+import { expandPoint } from './information.ts';
+import { findIrregularPlans, type IrregularPlan } from './irregular-plan.ts';
+import { listMiddles } from './middle-runs.ts';
+import type { LayoutRow } from './proposal.ts';
+import { splitEvenly } from './split-evenly.ts';
+import type { Structure } from './structure.ts';
+import { lettersUpTo } from './words.ts';
+
+const mostCorners = 32;
+
+/** Structures around forbidden corners, freely shuffled and, with hard settings and no blocks, in whole plots. */
+export function listIrregularStructures(brief: Brief): Structure[] {
+  // Without middle runs only repeats can tell the error.
+  const repeats = listMiddles(brief).length > 0 ? [1] : [1, 2];
+  return findIrregularPlans(brief, mostCorners).flatMap((plan) =>
+    repeats.flatMap((replicates) => {
+      const corners = Array.from({ length: replicates }, () => plan.corners).flat();
+      const question = { brief, plan, replicates };
+      const shuffled = describe(question, splitIntoBlocks(brief, corners));
+      const grouped = groupIntoPlots(brief, corners);
+      return grouped === null
+        ? [shuffled]
+        : [shuffled, { ...describe(question, grouped.rows), wholePlots: grouped.wholePlots }];
+    }),
+  );
+}
+
+function describe(
+  { brief, plan, replicates }: { brief: Brief; plan: IrregularPlan; replicates: number },
+  rows: LayoutRow[],
+): Structure {
+  return {
+    k: brief.factors.length,
+    baseRuns: plan.corners.length,
+    replicates,
+    blocks: brief.blocks?.count ?? 1,
+    generators: [],
+    definingWords: [],
+    resolution: plan.resolution,
+    aliases: plan.aliases,
+    confoundedWithBlocks: [],
+    terms: plan.terms,
+    corners: rows,
+    irregular: { efficiencies: plan.efficiencies, emptied: plan.emptied },
+  };
+}
+
+function splitIntoBlocks(brief: Brief, corners: readonly number[][]): LayoutRow[] {
+  const parts = splitEvenly(termColumns(brief, corners), corners.length, brief.blocks?.count ?? 1);
+  return corners.map((x, row) => ({ x, block: (parts[row] ?? 0) + 1, center: false }));
+}
+
+/** Two whole plots for each combination of the hard settings, alike in all easy ones. null without hard settings or with blocks. */
+function groupIntoPlots(
+  brief: Brief,
+  all: readonly number[][],
+): { rows: LayoutRow[]; wholePlots: { count: number; judged: boolean } } | null {
+  const hard = brief.factors.flatMap((factor, index) => (factor.hardToChange ? [index] : []));
+  if (hard.length === 0 || (brief.blocks?.count ?? 1) > 1) return null;
+  const groups = groupBy(all, (x) => hard.map((index) => x[index]).join(' '));
+  const rows: LayoutRow[] = [];
+  let plots = 0;
+  for (const corners of groups) {
+    const parts = corners.length >= 4 ? 2 : 1;
+    const split = splitEvenly(termColumns(brief, corners), corners.length, parts);
+    for (const [row, x] of corners.entries())
+      rows.push({ x, block: 1, wholePlot: plots + (split[row] ?? 0) + 1, center: false });
+    plots += parts;
+  }
+  return { rows, wholePlots: { count: plots, judged: plots >= 2 * groups.length } };
+}
+
+/** Main effects count more than pairs: their columns are given twice the weight. */
+function termColumns(brief: Brief, corners: readonly number[][]): number[][] {
+  const letters = lettersUpTo(brief.factors.length);
+  return listTerms(letters, 2).map((term) =>
+    corners.map((x) => (term.length === 1 ? 2 : 1) * (expandPoint(x, [term])[1] ?? 0)),
+  );
+}

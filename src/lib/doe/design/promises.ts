@@ -1,0 +1,77 @@
+import type { Judging } from './judging.ts';
+import { judgeByDegrees, judgeByPseudoError } from './judging.ts';
+import type { PlanningScale } from './planning-scale.ts';
+import type { Detectable, ErrorPlan, ErrorStratum } from './proposal.ts';
+
+export interface PromiseQuestion {
+  scale: PlanningScale;
+  errorPlan: ErrorPlan;
+  /** Effects judged together: all tested terms, and curvature if there are middle runs. */
+  tested: number;
+  /** Variance of the least well known main effect of an easy setting, for a run variance of 1; null when all settings are hard. */
+  easyVariance: number | null;
+  /** Absent when everything is shuffled freely. */
+  hard?: {
+    /** Corner whole plots. */ plots: number /** Variance as for an easy setting. */;
+    runVariance: number;
+  };
+}
+
+export interface Promises {
+  detectable: Detectable[];
+  /** Of the least well seen kind of setting that can be judged; null: nothing can be said. */
+  powerAtWorthHaving: number | null;
+}
+
+/** What a plan promises: sizes of change that it would find 8 times in 10, and how often it would find W. */
+export function promise(question: PromiseQuestion): Promises {
+  const { scale } = question;
+  const seen = listKinds(question);
+  const { worthHaving } = scale;
+  return {
+    detectable: seen.map(({ effect, judging, standardError }) => {
+      const size = (sd: number, errors: number) => scale.toResponse(errors * standardError * sd);
+      const [low, high] = scale.sdRange;
+      return {
+        size: size(1, judging.likelySize),
+        unit: scale.unit,
+        range: [size(low, judging.likelySize), size(high, judging.likelySize)],
+        effect,
+        clearSize: size(1, judging.clearSize),
+        assumedActive: judging.assumedActive,
+      };
+    }),
+    powerAtWorthHaving:
+      worthHaving === null || seen.length === 0
+        ? null
+        : Math.min(...seen.map(({ judging, standardError }) => judging.power(worthHaving / standardError))),
+  };
+}
+
+interface SeenKind {
+  effect: Detectable['effect'];
+  judging: Judging;
+  standardError: number;
+}
+
+function listKinds({ scale, errorPlan, tested, easyVariance, hard }: PromiseQuestion): SeenKind[] {
+  const stratum = (name: ErrorStratum['name']) =>
+    errorPlan.strata?.find((candidate) => candidate.name === name);
+  const kinds: SeenKind[] = [];
+  const easy = judge(hard === undefined ? errorPlan : stratum('sub'), tested);
+  if (easy !== null && easyVariance !== null) {
+    kinds.push({ effect: 'easy', judging: easy, standardError: scale.runSd * Math.sqrt(easyVariance) });
+  }
+  const whole = hard === undefined ? null : judge(stratum('whole'), tested);
+  if (hard !== undefined && whole !== null) {
+    const variance = (4 / hard.plots) * scale.plotSd ** 2 + hard.runVariance * scale.runSd ** 2;
+    kinds.push({ effect: 'hardToChange', judging: whole, standardError: Math.sqrt(variance) });
+  }
+  return kinds;
+}
+
+function judge(error: ErrorPlan | ErrorStratum | undefined, tested: number): Judging | null {
+  if (error === undefined || error.rung === 'none') return null;
+  if (error.df !== null) return judgeByDegrees(error.df, tested);
+  return 'contrasts' in error ? judgeByPseudoError(error) : null;
+}
