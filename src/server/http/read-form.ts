@@ -8,16 +8,19 @@ export type FormReading<Output> =
   | { data: Output; typed: Record<string, string>; problems: [] }
   | { data: null; typed: Record<string, string>; problems: FieldProblem[] };
 
+const formTypes = /^(application\/x-www-form-urlencoded|multipart\/form-data)\b/i;
+
 /**
  * Reads the text fields of a plain form. A field that occurs once is a text, one that may occur several times (`lists`) is
  * a list of texts. `typed` is for showing the form again; a page never shows a password from it.
- * @throws AppError `malformed` when the body is not a form
+ * @throws AppError `wrong-content-type` when the body is no form, `malformed` when it cannot be read as one
  */
 export async function readForm<Output>(
   request: Request,
   schema: z.ZodType<Output>,
   lists: readonly string[] = [],
 ): Promise<FormReading<Output>> {
+  if (!formTypes.test(request.headers.get('content-type') ?? '')) throw new AppError('wrong-content-type');
   const form = await request.formData().catch((cause: unknown) => {
     throw new AppError('malformed', { cause });
   });
