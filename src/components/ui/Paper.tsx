@@ -14,7 +14,6 @@ export function Paper() {
         aria-hidden="true"
         focusable="false"
       >
-        <path d="M0 0 17 17V0Z" className="paper-clip-away" />
         <path d="M0 .5 16.5 17" fill="none" stroke="currentColor" className="paper-clip-edge" />
       </svg>
       <svg
