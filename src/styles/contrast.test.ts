@@ -81,6 +81,7 @@ describe.each(['light', 'dark'] as const)('tokens, %s', (theme) => {
 describe('the list of pairs', () => {
   const sheets = [
     './base.css',
+    './print.css',
     ...readdirSync(new URL('./pieces/', import.meta.url)).map((name) => `./pieces/${name}`),
   ];
   const used = new Set(

@@ -1,14 +1,14 @@
 import { useState } from 'react';
-import { Button } from './Button.tsx';
-import { ConfirmDialog } from './ConfirmDialog.tsx';
-import { Dialog } from './Dialog.tsx';
-import { words } from './pieces-sample.ts';
-import { Select } from './Select.tsx';
-import { Toast, ToastList } from './Toast.tsx';
-import { useToasts } from './use-toasts.ts';
+import { Button } from '../Button.tsx';
+import { ConfirmDialog } from '../ConfirmDialog.tsx';
+import { Dialog } from '../Dialog.tsx';
+import { Select } from '../Select.tsx';
+import { Toast, ToastList } from '../Toast.tsx';
+import { useToasts } from '../use-toasts.ts';
+import { words } from './sample-words.ts';
 
 /** What moves only in an island, on the page for developers. */
-export function PiecesDemo() {
+export function MovingPieces() {
   const [shown, setShown] = useState<'none' | 'dialog' | 'confirm'>('none');
   const { toasts, show, close } = useToasts();
   const closeDialog = () => setShown('none');
