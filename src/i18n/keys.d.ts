@@ -2,6 +2,8 @@ import type common from '../../locales/en/common.json';
 import type errors from '../../locales/en/errors.json';
 import type front from '../../locales/en/front.json';
 import type mail from '../../locales/en/mail.json';
+import type myPage from '../../locales/en/my-page.json';
+import type signIn from '../../locales/en/sign-in.json';
 import type texts from '../../locales/en/texts.json';
 
 // A key that is not in the English files, or a placeholder left out, is a type error.
@@ -13,6 +15,8 @@ declare module 'i18next' {
       errors: typeof errors;
       front: typeof front;
       mail: typeof mail;
+      'my-page': typeof myPage;
+      'sign-in': typeof signIn;
       texts: typeof texts;
     };
   }

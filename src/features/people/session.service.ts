@@ -1,4 +1,4 @@
-import { endAllSessions } from '../../server/auth/session.ts';
+import { endAllSessions, endSession, type SessionCookie } from '../../server/auth/session.ts';
 import {
   endListedSession,
   endOtherSessions,
@@ -50,4 +50,21 @@ export async function endOwnOtherSessions(scope: ShopScope, viewer: Viewer): Pro
   const keep = viewer.sessionHandle;
   if (keep === null) throw new RangeError('endOwnOtherSessions: viewer must come with a session');
   await endOtherSessions(scope, { personId: viewer.personId, keep });
+}
+
+/** Signs out of this browser and gives the blank cookie. */
+export async function endSessionOfBrowser(
+  scope: ShopScope,
+  viewer: Viewer,
+  sessionId: string,
+): Promise<SessionCookie> {
+  return inTransaction(scope, async (inner) => {
+    const cookie = await endSession(inner, sessionId);
+    await recordActivity(inner, {
+      kind: 'session.ended',
+      subjectId: viewer.personId,
+      details: { session: viewer.sessionHandle },
+    });
+    return cookie;
+  });
 }

@@ -1,18 +1,19 @@
 import { openLink, scopeOfLink, takeLink } from '../../server/auth/links.ts';
 import { countTry } from '../../server/auth/rate-limits.ts';
-import { endSession, type SessionCookie } from '../../server/auth/session.ts';
+import type { SessionCookie } from '../../server/auth/session.ts';
 import { isAddressTaken } from '../../server/auth/sign-in-address.ts';
 import { recordActivity } from '../../server/db/activity-log.ts';
 import { inTransaction } from '../../server/db/in-transaction.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
 import { AppError } from '../../server/errors.ts';
+import type { Browser } from '../../server/http/browser.ts';
 import { newId } from '../../server/ids.ts';
 import { storePasswordHash } from './password.repository.ts';
 import { prepareNewPassword } from './password.service.ts';
 import { insertPerson } from './person.repository.ts';
 import { completeShop, readShopName } from './set-up.repository.ts';
 import type { SetUp } from './set-up.schema.ts';
-import { type Browser, openSession } from './sign-in.service.ts';
+import { openSession } from './sign-in.service.ts';
 import { usualWorkSpans } from './work-hours.ts';
 
 interface Visit {
@@ -61,7 +62,7 @@ async function addFirstAdmin(scope: ShopScope, setUp: SetUp, passwordHash: strin
 export async function setUpShop(visit: Visit, setUp: SetUp, browser: Browser): Promise<SessionCookie> {
   const link = await openSetUpLink(visit);
   const passwordHash = await prepareNewPassword(setUp.password, setUp);
-  const cookie = await inTransaction(scopeOfLink(link), async (scope) => {
+  return inTransaction(scopeOfLink(link), async (scope) => {
     await takeLink(scope, link);
     if (await isAddressTaken(scope.db, setUp.email)) {
       throw new AppError('invalid', { fields: [{ pointer: '#/email', code: 'taken' }] });
@@ -78,8 +79,6 @@ export async function setUpShop(visit: Visit, setUp: SetUp, browser: Browser): P
       subjectId: personId,
       details: { roles: ['admin'] },
     });
-    return openSession(scope, { personId, userAgent: browser.userAgent });
+    return openSession(scope, personId, browser);
   });
-  if (browser.oldSessionId) await endSession(browser.oldSessionId);
-  return cookie;
 }

@@ -1,41 +1,29 @@
 import { checkPassword } from '../../server/auth/password.ts';
 import { countSignInTry, forgetSignInTries } from '../../server/auth/rate-limits.ts';
 import { endSession, type SessionCookie, startSession } from '../../server/auth/session.ts';
-import { findByAddress, type SignInPerson, scopeOfPerson } from '../../server/auth/sign-in-address.ts';
+import { findByAddress, scopeOfPerson } from '../../server/auth/sign-in-address.ts';
 import { recordActivity } from '../../server/db/activity-log.ts';
 import { inTransaction } from '../../server/db/in-transaction.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
+import type { Browser } from '../../server/http/browser.ts';
 
-/** The browser that a person signs in with. */
-export interface Browser {
-  userAgent: string | null;
-  /** The session it had before, if any: signing in ends it. */
-  oldSessionId: string | undefined;
-}
-
-/** Starts a session under a new id and records it, in the transaction that `scope` holds. */
+/**
+ * Starts a session under a new id, ends the one this browser had before, and records it; in the transaction that `scope`
+ * holds.
+ */
 export async function openSession(
   scope: ShopScope,
-  person: { personId: string; userAgent: string | null },
+  personId: string,
+  browser: Browser,
 ): Promise<SessionCookie> {
-  const { cookie, handle } = await startSession(scope, person);
+  if (browser.oldSessionId) await endSession(scope, browser.oldSessionId);
+  const { cookie, handle } = await startSession(scope, { personId, userAgent: browser.userAgent });
   await recordActivity(scope, {
     kind: 'session.started',
-    subjectId: person.personId,
+    subjectId: personId,
     details: { session: handle },
   });
   return cookie;
-}
-
-/** Signs in a person who has shown who they are. */
-export async function signInPerson(
-  person: Pick<SignInPerson, 'shopId' | 'personId'>,
-  browser: Browser,
-): Promise<SessionCookie> {
-  if (browser.oldSessionId) await endSession(browser.oldSessionId);
-  return inTransaction(scopeOfPerson(person), (scope) =>
-    openSession(scope, { personId: person.personId, userAgent: browser.userAgent }),
-  );
 }
 
 /**
@@ -53,5 +41,5 @@ export async function signIn(
   const matches = await checkPassword(person?.passwordHash ?? null, attempt.password);
   if (!person || !matches) return null;
   await forgetSignInTries(who);
-  return signInPerson(person, browser);
+  return inTransaction(scopeOfPerson(person), (scope) => openSession(scope, person.personId, browser));
 }

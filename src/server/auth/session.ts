@@ -69,8 +69,8 @@ export async function readSession(sessionId: string) {
 }
 
 /** Ends the session of a cookie, whoever's it is, and gives the blank cookie. */
-export async function endSession(sessionId: string): Promise<SessionCookie> {
-  await lucia.invalidateSession(sessionId);
+export async function endSession(scope: { db: Knex }, sessionId: string): Promise<SessionCookie> {
+  await luciaOn(() => scope.db).invalidateSession(sessionId);
   return lucia.createBlankSessionCookie();
 }
 

@@ -45,3 +45,59 @@ export async function readForm<Output>(
 export function problemAt(problems: readonly FieldProblem[], field: string): FieldProblem | undefined {
   return problems.find((problem) => problem.pointer === `#/${field}`);
 }
+
+/** How a posted form was answered: by a response, or by showing it again with what is wrong. */
+export interface FormAnswer {
+  response: Response | null;
+  typed: Record<string, string>;
+  problems: readonly FieldProblem[];
+  /** A refusal of the whole form that its page explains: too many tries. */
+  refusal: AppError | null;
+}
+
+/** What a page shows before anything was posted. */
+export const untouchedForm: FormAnswer = { response: null, typed: {}, problems: [], refusal: null };
+
+/**
+ * Reads a posted form and lets `use` answer it. Faults in its fields, found by the schema or by `use`, and too many tries
+ * come back for the page to show; every other refusal is thrown on.
+ */
+export async function answerForm<Output>(
+  request: Request,
+  schema: z.ZodType<Output>,
+  use: (data: Output) => Promise<Response>,
+): Promise<FormAnswer> {
+  const { data, typed, problems } = await readForm(request, schema);
+  if (data === null) return { response: null, typed, problems, refusal: null };
+  try {
+    return { response: await use(data), typed, problems: [], refusal: null };
+  } catch (thrown) {
+    if (!(thrown instanceof AppError)) throw thrown;
+    if (thrown.code === 'too-many') return { response: null, typed, problems: [], refusal: thrown };
+    if (thrown.fields.length === 0) throw thrown;
+    return { response: null, typed, problems: thrown.fields, refusal: null };
+  }
+}
+
+/** The status and headers of a page that shows a form again. */
+export function markAnswer(response: { status?: number; headers: Headers }, answer: FormAnswer): void {
+  if (answer.problems.length > 0) response.status = 422;
+  if (!answer.refusal) return;
+  response.status = answer.refusal.status;
+  response.headers.set('Retry-After', String(answer.refusal.retryAfterSeconds ?? 60));
+}
+
+/** Minutes to wait, rounded up, for the sentence about too many tries. */
+export function minutesToWait(refusal: AppError): number {
+  return Math.ceil((refusal.retryAfterSeconds ?? 60) / 60);
+}
+
+/** What `work` gives; null where it is refused because a link has ended, which the page of the link explains itself. */
+export async function nullWhenGone<Result>(work: Promise<Result>): Promise<Result | null> {
+  try {
+    return await work;
+  } catch (thrown) {
+    if (thrown instanceof AppError && thrown.code === 'gone') return null;
+    throw thrown;
+  }
+}

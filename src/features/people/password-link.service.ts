@@ -1,13 +1,14 @@
 import { openLink, scopeOfLink, takeLink } from '../../server/auth/links.ts';
 import { countTry } from '../../server/auth/rate-limits.ts';
-import { endAllSessions, endSession, type SessionCookie } from '../../server/auth/session.ts';
+import { endAllSessions, type SessionCookie } from '../../server/auth/session.ts';
 import { findByPerson, type SignInPerson } from '../../server/auth/sign-in-address.ts';
 import { recordActivity } from '../../server/db/activity-log.ts';
 import { inTransaction } from '../../server/db/in-transaction.ts';
 import { AppError } from '../../server/errors.ts';
+import type { Browser } from '../../server/http/browser.ts';
 import { storePasswordHash } from './password.repository.ts';
 import { prepareNewPassword } from './password.service.ts';
-import { type Browser, openSession } from './sign-in.service.ts';
+import { openSession } from './sign-in.service.ts';
 
 /** The two links that let a person choose a password: an invitation, and a mail after "forgotten". */
 export type PasswordLink = 'invite' | 'reset';
@@ -45,13 +46,12 @@ export async function choosePasswordByLink(
 ): Promise<SessionCookie> {
   const { link, person } = await openPasswordLink(visit, purpose);
   const passwordHash = await prepareNewPassword(visit.password, person);
-  if (browser.oldSessionId) await endSession(browser.oldSessionId);
   const { personId } = person;
   return inTransaction(scopeOfLink(link), async (scope) => {
     await takeLink(scope, link);
     await storePasswordHash(scope, { personId, passwordHash });
     await endAllSessions(scope, personId);
     await recordActivity(scope, { kind: recordedAs[purpose], subjectId: personId });
-    return openSession(scope, { personId, userAgent: browser.userAgent });
+    return openSession(scope, personId, browser);
   });
 }
