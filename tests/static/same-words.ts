@@ -1,0 +1,6 @@
+import type { SameWords } from './locale-faults.ts';
+
+/** Names, and words that a language shares with English. Everything else that equals the English text is not translated yet. */
+export const sameWords: SameWords = {
+  'common:product': ['es', 'pl', 'vi'],
+};
