@@ -1,5 +1,20 @@
+import { config } from '../server/env.ts';
 import { beat } from './beat.ts';
+import { catchUp } from './catch-up-texts.ts';
+import { mailGateway, textGateway } from './gateways.ts';
 import type { Job } from './loop.ts';
+import { readInbox } from './read-inbox.ts';
+import { retention } from './retention.ts';
+import { sendMails, sendTexts } from './send-messages.ts';
+import { settleUnsure } from './settle-unsure.ts';
 
 /** Every job there is. A job that must not run in two workers at once takes a lease by its name (see `lease.ts`). */
-export const jobs: Job[] = [beat];
+export const jobs: Job[] = [
+  beat,
+  readInbox,
+  sendTexts(textGateway, () => config().texts.perSecond),
+  sendMails(mailGateway),
+  settleUnsure(textGateway),
+  catchUp(textGateway),
+  retention,
+];

@@ -1,6 +1,7 @@
 import type { Knex } from 'knex';
 import { now } from '../server/clock.ts';
 import { describeError, log } from '../server/log.ts';
+import { sleepingJobs } from '../server/wake.ts';
 
 /** What a job gets to work with; `stopping` turns true when the process was asked to end. */
 export interface JobContext {
@@ -18,18 +19,9 @@ export interface Job {
   run(context: JobContext): Promise<number>;
 }
 
-const wakeKey = Symbol.for('trywell.wake');
-const wakers = globalThis as { [wakeKey]?: Set<() => void> };
-
-/** Lets waiting jobs of this process look at once instead of at their next turn. */
-export function wakeWorker(): void {
-  for (const wake of wakers[wakeKey] ?? []) wake();
-}
-
 function sleepUntilWoken(milliseconds: number, signal: AbortSignal): Promise<void> {
   return new Promise((resolve) => {
-    wakers[wakeKey] ??= new Set();
-    const sleepers = wakers[wakeKey];
+    const sleepers = sleepingJobs();
     const done = () => {
       clearTimeout(timer);
       sleepers.delete(done);

@@ -1,0 +1,115 @@
+import { z } from 'zod';
+import type { Translate } from '../../i18n/translator.ts';
+import type { Channel } from './message.ts';
+
+export interface Words {
+  /** Mails only. */
+  subject?: string;
+  body: string;
+}
+
+/** What is common to all messages of one kind. */
+export interface Template {
+  channel: Channel;
+  /** Rises when the words change what they say; kept with each message, and with the consent that was given to them. */
+  version: number;
+  /**
+   * Whom it may go to: `agreed` to people who said OK; `asked` only to somebody who is being asked; `anyone` needs no
+   * consent (mail).
+   */
+  audience: 'agreed' | 'asked' | 'anyone';
+  /** It answers a text the person has just sent, so it may go out when that text came outside the work hours. */
+  answersText: boolean;
+  /** Its words open a door (a link with a secret): they are blanked once they are out. */
+  holdsSecret: boolean;
+  /** Writes it. @throws ZodError when the parameters are not its own */
+  write(t: Translate, params: unknown): Words;
+  /** Checks parameters before they are stored. */
+  params: z.ZodType;
+}
+
+function text<Params extends Record<string, string | number>>(
+  kind: Omit<Template, 'channel' | 'write' | 'params' | 'holdsSecret'> & { params: z.ZodType<Params> },
+  write: (t: Translate, params: Params) => string,
+): Template & { params: z.ZodType<Params> } {
+  return {
+    ...kind,
+    channel: 'text',
+    holdsSecret: false,
+    write: (t, params) => ({ body: write(t, kind.params.parse(params)) }),
+  };
+}
+
+function mail<Params extends Record<string, string | number>>(
+  kind: Pick<Template, 'version' | 'holdsSecret'> & { params: z.ZodType<Params> },
+  write: (t: Translate, params: Params) => Required<Words>,
+): Template & { params: z.ZodType<Params> } {
+  return {
+    ...kind,
+    channel: 'mail',
+    audience: 'anyone',
+    answersText: false,
+    write: (t, params) => write(t, kind.params.parse(params)),
+  };
+}
+
+const none = z.strictObject({});
+const link = z.url({ protocol: /^https?$/ });
+
+/** Every text and mail there is. A test writes each of them in each language. */
+export const templates = {
+  consent: text(
+    {
+      version: 1,
+      audience: 'asked',
+      answersText: false,
+      params: z.strictObject({ shop: z.string(), asker: z.string() }),
+    },
+    (t, params) => t('texts:consent', params),
+  ),
+  practice: text({ version: 1, audience: 'agreed', answersText: true, params: none }, (t) =>
+    t('texts:practice'),
+  ),
+  practiceSaved: text(
+    { version: 1, audience: 'agreed', answersText: true, params: z.strictObject({ value: z.string() }) },
+    (t, params) => t('texts:practiceSaved', params),
+  ),
+  textsCheck: text(
+    { version: 1, audience: 'agreed', answersText: false, params: z.strictObject({ shop: z.string() }) },
+    (t, params) => t('texts:textsCheck', params),
+  ),
+  invitation: mail(
+    {
+      version: 1,
+      holdsSecret: true,
+      params: z.strictObject({ shop: z.string(), inviter: z.string(), link, days: z.number().int() }),
+    },
+    (t, { days, ...params }) => ({
+      subject: t('mail:invitation.subject', params),
+      body: t('mail:invitation.body', { ...params, validity: t('mail:linkDays', { count: days }) }),
+    }),
+  ),
+  reset: mail(
+    { version: 1, holdsSecret: true, params: z.strictObject({ link, minutes: z.number().int() }) },
+    (t, { link: address, minutes }) => ({
+      subject: t('mail:reset.subject'),
+      body: t('mail:reset.body', { link: address, validity: t('mail:linkMinutes', { count: minutes }) }),
+    }),
+  ),
+  emailChanged: mail(
+    { version: 1, holdsSecret: false, params: z.strictObject({ name: z.string(), shop: z.string() }) },
+    (t, params) => ({
+      subject: t('mail:emailChanged.subject'),
+      body: t('mail:emailChanged.body', params),
+    }),
+  ),
+} as const;
+
+export type TemplateName = keyof typeof templates;
+export type TemplateParams<Name extends TemplateName> = z.output<(typeof templates)[Name]['params']>;
+
+export const templateNames = Object.keys(templates) as TemplateName[];
+
+export function isTemplateName(name: string): name is TemplateName {
+  return Object.hasOwn(templates, name);
+}
