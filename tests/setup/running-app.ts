@@ -40,7 +40,12 @@ export async function startApp({ standIns = false, env = {} }: Wishes = {}): Pro
     TWILIO_AUTH_TOKEN: 'key-of-the-tests',
   };
   const fakes = standIns
-    ? await startProgram(built('fakes.mjs'), { ...shared, FAKES_PORT: '0', FAKES_SMTP_PORT: '0' })
+    ? await startProgram(built('fakes.mjs'), {
+        ...shared,
+        FAKES_HTTP_PORT: '0',
+        FAKES_SMTP_PORT: '0',
+        FAKES_STEP_MS: '1',
+      })
     : null;
   const textsUrl = fakes ? String(fakes.ready['textsUrl']) : null;
   const app = await startProgram(built('main.mjs'), {

@@ -62,6 +62,8 @@ function startsLikeText(text: string): boolean {
 }
 
 function looksLikeSentence(text: string): boolean {
+  // A name as a machine's panel shows it: in capitals, and the same in every language.
+  if (/^[\p{Lu}\d ]{1,12}$/u.test(text)) return false;
   const tokens = text.trim().split(/\s+/);
   const words = tokens.filter((token) => /^["'“„«(]?\p{L}[\p{L}'’-]*["'”»)]?[.,;:!?…]?$/u.test(token));
   const isMostlyWords = words.length >= 2 && words.length >= tokens.length * 0.6;
