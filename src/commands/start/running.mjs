@@ -1,6 +1,7 @@
 // @ts-check
-import { readFileSync } from 'node:fs';
+import { readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
+import { Refusal } from '../begin/refusal.mjs';
 
 /** @typedef {{ pid: number, startTick: string | null, url: string }} Running */
 
@@ -14,6 +15,24 @@ export function findRunning(dataFolder) {
   return ['all', 'web', 'worker']
     .map((role) => readLock(join(dataFolder, `trywell-${role}.lock`)))
     .find((lock) => lock !== undefined && isAlive(lock));
+}
+
+/**
+ * Takes the lock of the whole data folder until this process ends, so that the product cannot start meanwhile.
+ * @param {string} dataFolder
+ * @param {string} reason shown to whoever tries to start it
+ * @throws {Refusal} while a process holds the folder
+ */
+export function lockDataFolder(dataFolder, reason) {
+  const holder = findRunning(dataFolder);
+  if (holder)
+    throw new Refusal(`Trywell runs (process ${holder.pid}, ${holder.url}): end it first, then try again.`);
+  const file = join(dataFolder, 'trywell-all.lock');
+  const { pid } = process;
+  const content = { pid, startTick: startTickOf(pid), role: 'all', url: reason, startedAt: Date.now() };
+  rmSync(file, { force: true });
+  writeFileSync(file, JSON.stringify(content), { flag: 'wx' });
+  process.on('exit', () => rmSync(file, { force: true }));
 }
 
 /**

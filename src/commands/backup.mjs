@@ -1,0 +1,3 @@
+import { begin } from './begin/node-version.mjs';
+
+begin(() => import('./data/backup.mjs'));
