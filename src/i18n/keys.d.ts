@@ -3,6 +3,8 @@ import type errors from '../../locales/en/errors.json';
 import type front from '../../locales/en/front.json';
 import type mail from '../../locales/en/mail.json';
 import type myPage from '../../locales/en/my-page.json';
+import type people from '../../locales/en/people.json';
+import type shop from '../../locales/en/shop.json';
 import type signIn from '../../locales/en/sign-in.json';
 import type texts from '../../locales/en/texts.json';
 
@@ -17,6 +19,8 @@ declare module 'i18next' {
       mail: typeof mail;
       'my-page': typeof myPage;
       'sign-in': typeof signIn;
+      people: typeof people;
+      shop: typeof shop;
       texts: typeof texts;
     };
   }

@@ -1,5 +1,15 @@
 /** One namespace is one file in `locales/<language>/`. A new one is named here and in `keys.d.ts`. */
-export const namespaces = ['common', 'errors', 'front', 'texts', 'mail', 'sign-in', 'my-page'] as const;
+export const namespaces = [
+  'common',
+  'errors',
+  'front',
+  'texts',
+  'mail',
+  'people',
+  'shop',
+  'sign-in',
+  'my-page',
+] as const;
 
 export type Namespace = (typeof namespaces)[number];
 export type Namespaces = typeof namespaces;

@@ -95,3 +95,25 @@ export async function countPeople(scope: ShopScope, which: { operatorsOnly: bool
   const [row] = await query.count({ count: '*' });
   return Number(row?.['count'] ?? 0);
 }
+
+/** The names of these people, by id. */
+export async function readNames(scope: ShopScope, ids: readonly string[]): Promise<Map<string, string>> {
+  const rows = z.array(z.object({ id: z.string(), name: z.string() })).parse(
+    await scope
+      .db('people')
+      .where({ shop_id: scope.shopId })
+      .whereIn('id', [...ids])
+      .select('id', 'name'),
+  );
+  return new Map(rows.map(({ id, name }) => [id, name]));
+}
+
+/** The languages that the shop's active people read. */
+export async function readCrewLanguages(scope: ShopScope): Promise<string[]> {
+  const found: unknown[] = await scope
+    .db('people')
+    .where({ shop_id: scope.shopId, active: true })
+    .distinct()
+    .pluck('language');
+  return found.map(String);
+}

@@ -90,3 +90,5 @@ export type ChangePerson = z.output<typeof changePersonSchema>;
 
 /** The body of every action on a person: the state the reader saw. */
 export const personRevisionSchema = z.strictObject({ revision: z.number().int().positive() });
+
+export const personParamsSchema = z.object({ id: z.string() });

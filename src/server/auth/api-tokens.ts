@@ -90,6 +90,15 @@ export async function revokeApiToken(
   return revoked > 0;
 }
 
+/** Ends every token of a person, in the transaction of why they end. */
+export async function revokeApiTokens(scope: ShopScope, personId: string): Promise<void> {
+  await scope
+    .db('api_tokens')
+    .where({ shop_id: scope.shopId, person_id: personId })
+    .whereNull('revoked_at')
+    .update({ revoked_at: now() });
+}
+
 const holderRow = z.object({
   id: z.string(),
   person_id: z.string(),

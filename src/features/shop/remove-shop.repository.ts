@@ -1,0 +1,42 @@
+import { allowChanges, refuseChanges } from '../../server/db/schema-parts.ts';
+import type { ShopScope } from '../../server/db/scope.ts';
+
+/** Every table with rows of a shop, children before parents. A test reads the schema and refuses one that is missing. */
+export const shopTables = [
+  'conversations',
+  'readings',
+  'inbox_texts',
+  'messages',
+  'runs',
+  'stretches',
+  'plans',
+  'sessions',
+  'links',
+  'api_tokens',
+  'trials',
+  'suppressed_phones',
+  'person_roles',
+  'people',
+  'activity',
+] as const;
+
+/** Deletes every row of a shop and the shop itself, in the transaction at hand. */
+export async function deleteShopRows(scope: ShopScope): Promise<void> {
+  const { db, shopId } = scope;
+  if (!db.isTransaction) throw new RangeError('deleteShopRows: scope must hold a transaction');
+  // The log only grows, save here: its guard is lifted for this transaction and is back before it ends.
+  await allowChanges(db, 'activity');
+  for (const table of shopTables) await db(table).where({ shop_id: shopId }).delete();
+  await refuseChanges(db, 'activity');
+  await db('shops').where({ id: shopId }).delete();
+}
+
+/** The shop with this id or exactly this name. @returns null where there is none or the name is not one shop's alone */
+export async function findShopId(db: ShopScope['db'], idOrName: string): Promise<string | null> {
+  const rows: { id: unknown }[] = await db('shops')
+    .where({ id: idOrName })
+    .orWhere({ name: idOrName })
+    .select('id');
+  const [only, second] = rows;
+  return only && !second ? String(only.id) : null;
+}
