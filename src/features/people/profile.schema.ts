@@ -28,6 +28,9 @@ export const ownSessionSchema = z.object({
   isThisOne: z.boolean(),
 });
 
+/** A person holds no more tokens than this at a time. */
+export const mostTokens = 20;
+
 export const addTokenSchema = z.strictObject({ name: z.string().trim().min(1).max(60) });
 
 export const listedTokenSchema = z.object({

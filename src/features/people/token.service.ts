@@ -4,27 +4,28 @@ import {
   listApiTokens,
   revokeApiToken,
 } from '../../server/auth/api-tokens.ts';
-import type { Viewer } from '../../server/auth/viewer.ts';
+import { requirePermission, type Viewer, viewerMay } from '../../server/auth/viewer.ts';
 import { recordActivity } from '../../server/db/activity-log.ts';
 import { inTransaction } from '../../server/db/in-transaction.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
 import { AppError } from '../../server/errors.ts';
+import { mostTokens } from './profile.schema.ts';
 
-const mostTokens = 20;
-
-export function listOwnTokens(scope: ShopScope, viewer: Viewer): Promise<ListedToken[]> {
-  return listApiTokens(scope, viewer.personId);
+/** None for whoever may hold none. */
+export async function listOwnTokens(scope: ShopScope, viewer: Viewer): Promise<ListedToken[]> {
+  return viewerMay(viewer, 'token.own') ? listApiTokens(scope, viewer.personId) : [];
 }
 
 /**
  * Makes a token for the person's own programs. Its text is in this answer and nowhere else.
- * @throws AppError `not-now` when the person has twenty already
+ * @throws AppError `forbidden`; `not-now` when the person has twenty already
  */
 export async function addOwnToken(
   scope: ShopScope,
   viewer: Viewer,
   name: string,
 ): Promise<{ id: string; token: string; expiresAt: number }> {
+  requirePermission(viewer, 'token.own');
   return inTransaction(scope, async (inner) => {
     const tokens = await listApiTokens(inner, viewer.personId);
     if (tokens.length >= mostTokens) throw new AppError('not-now', { detail: 'too many tokens' });
