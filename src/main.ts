@@ -1,6 +1,7 @@
 import { once } from 'node:events';
 import type { Server } from 'node:http';
 import { fileURLToPath } from 'node:url';
+import { offerFirstSetUp } from './features/shop/installation.service.ts';
 import { lockDataFolder, StartRefusal } from './server/data-folder.ts';
 import { closeDatabase, database } from './server/db/connection.ts';
 import { migrateToLatest, seedDemo } from './server/db/migrate.ts';
@@ -57,12 +58,19 @@ function refusalSentence(error: unknown): string | null {
   return null;
 }
 
+/** What whoever started us may tell the person at the terminal: how to get in. */
+async function describeStart(settings: Config) {
+  const url = settings.appUrl;
+  if (settings.mode === 'demo') return { url, signIns: demoSignIns };
+  const setUpUrl = settings.role === 'web' ? null : await offerFirstSetUp(database());
+  return setUpUrl === null ? { url } : { url, setUpUrl };
+}
+
 async function run(): Promise<void> {
   const settings = config();
   const stop = await start(settings);
   log.info({ event: 'started' });
-  const signIns = settings.mode === 'demo' ? demoSignIns : undefined;
-  process.stdout.write(`READY ${JSON.stringify({ url: settings.appUrl, signIns })}\n`);
+  process.stdout.write(`READY ${JSON.stringify(await describeStart(settings))}\n`);
 
   let stopping = false;
   const end = async () => {
