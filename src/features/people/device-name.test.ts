@@ -25,7 +25,7 @@ describe('nameDevice', () => {
     ],
     [
       `${like} (Linux; Android 14; SM-S918B) ${webkit} SamsungBrowser/26.0 Chrome/122.0.0.0 Mobile Safari/537.36`,
-      'Samsung Internet',
+      'Samsung',
       'Android',
     ],
     ['curl/8.5.0', null, null],

@@ -2,7 +2,7 @@
 const browsers: [mark: RegExp, name: string][] = [
   [/\bEdgA?\/|\bEdgiOS\//, 'Edge'],
   [/\bOPR\/|\bOPiOS\//, 'Opera'],
-  [/\bSamsungBrowser\//, 'Samsung Internet'],
+  [/\bSamsungBrowser\//, 'Samsung'],
   [/\bFirefox\/|\bFxiOS\//, 'Firefox'],
   [/\bChrome\/|\bCriOS\//, 'Chrome'],
   [/\bSafari\//, 'Safari'],
