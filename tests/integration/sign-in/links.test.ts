@@ -82,7 +82,12 @@ describe('an invitation', () => {
     for (let look = 0; look < 3; look += 1) {
       expect((await visitor.get(`/invite/${token}`)).status).toBe(200);
     }
-    for (const password of ['too short', 'harrow lane foods', 'passwordpassword', 'DANA@harrowlane.example']) {
+    for (const password of [
+      'too short',
+      'harrow lane foods',
+      'passwordpassword',
+      'DANA@harrowlane.example',
+    ]) {
       const answer = await visitor.postForm(`/invite/${token}`, { password });
       expect(answer.status).toBe(422);
       expect(await answer.text()).not.toContain(`value="${password}"`);
