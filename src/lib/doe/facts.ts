@@ -1,3 +1,4 @@
+import { adviceFacts } from './advice/advice-facts.ts';
 import { designFacts } from './design/design-facts.ts';
 import { z } from './zod.ts';
 
@@ -8,7 +9,7 @@ export { type PlanRefusal, planRefusalSchema } from './design/plan-error.ts';
  * Everything the core may say, as one union without words. Facts are stored with plans and verdicts, so a kind that was ever stored keeps its
  * meaning; a new meaning is a new kind. Each area keeps its kinds in a file of its own; they meet here.
  */
-export const factSchema = z.discriminatedUnion('kind', [...designFacts]);
+export const factSchema = z.discriminatedUnion('kind', [...designFacts, ...adviceFacts]);
 
 export type Fact = z.infer<typeof factSchema>;
 

@@ -1,8 +1,24 @@
 // The only door into the statistics core: the rest of the product imports from here and from nowhere deeper.
+export { bestBet } from './advice/best-bet.ts';
+export { type CheckRuns, planCheckRuns } from './advice/check-runs.ts';
+export { judge } from './advice/judge.ts';
+export { type CheckReadings, judgeConfirmation } from './advice/judge-confirmation.ts';
+export type { ResultInput } from './advice/result-model.ts';
+export {
+  type BestBet,
+  bestBetSchema,
+  type ConfirmationVerdict,
+  confirmationVerdictSchema,
+  type Outlook,
+  type Verdict,
+  verdictSchema,
+} from './advice/verdict.ts';
 export type * from './analysis/analysis.ts';
 export { AnalysisError } from './analysis/analysis.ts';
 export { analyze } from './analysis/analyze.ts';
+export { type BoxCox, fitBoxCox } from './analysis/box-cox.ts';
 export { type Prediction, predict } from './analysis/predict.ts';
+export { analyzeSteadiness } from './analysis/steadiness.ts';
 export { completeHierarchy } from './analysis/terms.ts';
 export * from './brief.ts';
 export { decode, encode } from './design/dial.ts';

@@ -45,6 +45,8 @@ export interface AnalysisInput {
   errorPlan?: ErrorPlan;
   /** 0.05 if not given. */
   alpha?: number;
+  /** Variance of a run's figure by theory, where there is one beside that of counts: a floor for the error. */
+  knownVariance?: number;
 }
 
 /** An estimate against its error. All but the estimate are null where there is no error to judge it by. */

@@ -52,9 +52,21 @@ export function leftoverBetweenPlots({ letters, runs, terms }: SpreadQuestion): 
   ].filter((column) => isConstantWithin(plots, column));
   return residualSpread({
     y: averaged(runs.map((run) => run.y)),
-    weights: plots.map((plot) => plot.reduce((sum, member) => sum + member, 0)),
+    weights: plotWeights(runs, plots),
     columns: columns.map(averaged),
   });
+}
+
+/**
+ * Runs in each whole plot; one made of middle runs counts as big as those of the corners. Where it is smaller its average carries more of the spread
+ * within plots than theirs do, so the error comes out a little too big rather than too small.
+ */
+function plotWeights(runs: readonly MeasuredRun[], plots: readonly (readonly number[])[]): number[] {
+  const sizes = plots.map((plot) => plot.reduce((sum, member) => sum + member, 0));
+  const ofCorners = plots.map((plot) => runs.some((run, row) => plot[row] === 1 && !run.center));
+  const cornerSizes = sizes.filter((_, index) => ofCorners[index]);
+  const usual = Math.max(...cornerSizes, 1);
+  return sizes.map((size, index) => (ofCorners[index] ? size : usual));
 }
 
 /** Residual sum of squares around a constant and the columns, which may depend on each other. */

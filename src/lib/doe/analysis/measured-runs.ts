@@ -66,7 +66,7 @@ export function selectMeasuredRuns(input: AnalysisInput): MeasuredRuns {
   const unequal = runs.some((run) => run.weight !== runs[0]?.weight);
   return {
     runs,
-    theory: theory === null ? null : theory / meanWeight,
+    theory: input.knownVariance ?? (theory === null ? null : theory / meanWeight),
     ...(unequal && { weights: runs.map((run) => run.weight / meanWeight) }),
   };
 }

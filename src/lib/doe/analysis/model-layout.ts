@@ -29,10 +29,19 @@ export interface ModelQuestion {
   /** In the order in which they may enter. */
   terms: readonly string[];
   curvature: boolean;
+  /** false: aliases and terms confounded with blocks are not asked for. */
+  withAliases?: boolean;
 }
 
 /** The estimable part of the model asked for: a term that depends on blocks or on terms before it stays out and is named. */
-export function layOutModel({ letters, runs, weights, terms, curvature }: ModelQuestion): ModelLayout {
+export function layOutModel({
+  letters,
+  runs,
+  weights,
+  terms,
+  curvature,
+  withAliases = true,
+}: ModelQuestion): ModelLayout {
   const ones = runs.map(() => 1);
   const space = createColumnSpace([ones]);
   const blocks = unitContrasts(runs.map((run) => run.block)).filter((column) => space.add(column));
@@ -55,6 +64,18 @@ export function layOutModel({ letters, runs, weights, terms, curvature }: ModelQ
   const columns = [ones, ...blocks, ...(hasCurvature ? [middle] : []), ...kept.map(({ column }) => column)];
   const firstTerm = columns.length - kept.length;
   const model = factorModel(columns, weights);
+  const placeOf = (term: string) => firstTerm + kept.findIndex((entry) => entry.term === term);
+
+  const estimable = {
+    columns,
+    blockColumns: blocks.length,
+    hasCurvature,
+    terms: kept.map(({ term }) => term),
+    notEstimable,
+    model,
+    columnOf: placeOf,
+  };
+  if (!withAliases) return { ...estimable, aliases: [], confoundedWithBlocks: [] };
 
   const inModel = new Set(kept.map(({ term }) => term));
   const others = listTerms(letters, letters.length)
@@ -62,11 +83,7 @@ export function layOutModel({ letters, runs, weights, terms, curvature }: ModelQ
     .map((term) => ({ term, column: valueColumn(term) }));
   const confounded = blocks.length === 0 ? [] : others.filter(({ column }) => blockSpace.spans(column));
   return {
-    columns,
-    blockColumns: blocks.length,
-    hasCurvature,
-    terms: kept.map(({ term }) => term),
-    notEstimable,
+    ...estimable,
     confoundedWithBlocks: confounded.map(({ term }) => term),
     aliases: findAliases({
       kept,
@@ -77,8 +94,6 @@ export function layOutModel({ letters, runs, weights, terms, curvature }: ModelQ
       weighted: weights !== undefined,
       corners: runs.flatMap((run, row) => (run.center ? [] : [row])),
     }),
-    model,
-    columnOf: (term) => firstTerm + kept.findIndex((entry) => entry.term === term),
   };
 }
 

@@ -1,4 +1,5 @@
 import { Matrix, QrDecomposition } from 'ml-matrix';
+import { dot } from './dot.ts';
 
 /** A model matrix made ready for any number of responses; all arrays go by column or by row of the matrix that was given. */
 export interface FactoredModel {
@@ -83,12 +84,6 @@ export function factorModel(
       };
     },
   };
-}
-
-function dot(first: readonly number[], second: readonly number[]): number {
-  let sum = 0;
-  for (let index = 0; index < first.length; index++) sum += (first[index] ?? 0) * (second[index] ?? 0);
-  return sum;
 }
 
 // A run that alone determines its fitted value has leverage one; rounding must not turn that into a division by almost nothing.

@@ -1,0 +1,9 @@
+import type { Brief } from '../brief.ts';
+import { encode } from '../design/dial.ts';
+
+/** Usual settings in coded units. */
+export function usualSettings(brief: Brief): number[] {
+  return brief.factors.map((factor) =>
+    factor.kind === 'choice' ? (factor.usual === 'high' ? 1 : -1) : encode(factor, factor.usual),
+  );
+}
