@@ -1,7 +1,12 @@
 import { describe, expect, it } from 'vitest';
 import { regularPlan } from '../../../../tests/builders/random-process.ts';
 import { middles, readTrial, wobble } from '../../../../tests/builders/read-trial.ts';
-import { buildBrief, buildInput, buildResult, numberFactor } from '../../../../tests/builders/simulated-trial.ts';
+import {
+  buildBrief,
+  buildInput,
+  buildResult,
+  numberFactor,
+} from '../../../../tests/builders/simulated-trial.ts';
 import type { Brief } from '../brief.ts';
 import { bestBet } from './best-bet.ts';
 import { bestBetSchema } from './verdict.ts';
