@@ -24,6 +24,8 @@ export * from './brief.ts';
 export { decode, encode } from './design/dial.ts';
 export { isForbidden } from './design/forbidden.ts';
 export { layOutAddedRuns, layOutRuns } from './design/lay-out-runs.ts';
+export { moveWindow } from './design/move-window.ts';
+export { listNextPlans, type NextPlan, type NextWish } from './design/next-plans.ts';
 export { PlanError, type PlanErrorCode } from './design/plan-error.ts';
 export type {
   Alias,

@@ -1,4 +1,4 @@
-import { multiply, type RegularPlan } from './regular-plan.ts';
+import { multiply, type WordStructure } from './regular-plan.ts';
 import { lengthOfWord, spanWords, type Word, writeWord } from './words.ts';
 
 /**
@@ -7,7 +7,7 @@ import { lengthOfWord, spanWords, type Word, writeWord } from './words.ts';
  *
  * Agrees with the arrangements of Montgomery, Design and Analysis of Experiments, Table 7.9, in the number of terms of each length.
  */
-export function chooseBlockWords(plan: RegularPlan, count: number): Word[] | null {
+export function chooseBlockWords(plan: WordStructure, count: number): Word[] | null {
   let best: { words: Word[]; harm: number[] } | null = null;
   const words = plan.chains.map((chain) => chain[0] ?? 0);
   for (const chosen of chooseIndependent(plan, words, count)) {
@@ -21,7 +21,7 @@ export function chooseBlockWords(plan: RegularPlan, count: number): Word[] | nul
 /**
  * Terms that cannot be told apart from differences between blocks: of each chain its main effects and pairs, or its shortest term if it has none.
  */
-export function listConfounded(plan: RegularPlan, words: readonly Word[]): string[] {
+export function listConfounded(plan: WordStructure, words: readonly Word[]): string[] {
   return spanChains(plan, words).flatMap((chain) => {
     const short = chain.filter((word) => lengthOfWord(word) <= 2);
     return (short.length > 0 ? short : chain.slice(0, 1)).map(writeWord);
@@ -29,7 +29,7 @@ export function listConfounded(plan: RegularPlan, words: readonly Word[]): strin
 }
 
 /** All chains in the span of some words, the mean left out. */
-export function spanChains({ chains, chainOf }: RegularPlan, words: readonly Word[]): Word[][] {
+export function spanChains({ chains, chainOf }: WordStructure, words: readonly Word[]): Word[][] {
   const indices = new Set([...spanWords(words)].map((word) => chainOf[word] ?? -1));
   return chains.filter((_, index) => indices.has(index));
 }
@@ -41,7 +41,7 @@ export function partOf(words: readonly Word[], corner: readonly number[]): numbe
 
 /** All choices of `count` words of which none is a product of others, in the order of the list. */
 export function* chooseIndependent(
-  plan: RegularPlan,
+  plan: WordStructure,
   words: readonly Word[],
   count: number,
   chosen: readonly Word[] = [],
@@ -58,7 +58,7 @@ export function* chooseIndependent(
 }
 
 /** Hidden main effects, hidden pairs, then hidden chains by the length of their shortest word, from three. */
-function countHarm(plan: RegularPlan, words: readonly Word[]): number[] {
+function countHarm(plan: WordStructure, words: readonly Word[]): number[] {
   const harm = new Array<number>(Math.max(2, plan.k)).fill(0);
   for (const chain of spanChains(plan, words)) {
     const shortest = lengthOfWord(chain[0] ?? 0);

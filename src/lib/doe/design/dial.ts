@@ -1,5 +1,6 @@
 import type { Brief, FactorSpec } from '../brief.ts';
 import { isForbidden } from './forbidden.ts';
+import { tidyNumber } from './tidy-number.ts';
 
 /** Further from plan than this share of the half range, and a setting is analyzed as reached. */
 const asPlanned = 0.05;
@@ -30,7 +31,7 @@ export function setDials(brief: Brief, x: readonly number[]): DialPoint {
 /** The value of a coded setting in its unit, or the name of the choice. */
 export function decode(factor: FactorSpec, coded: number): number | string {
   if (factor.kind === 'choice') return coded > 0 ? factor.high : factor.low;
-  return tidy(factor.low + ((coded + 1) / 2) * (factor.high - factor.low));
+  return tidyNumber(factor.low + ((coded + 1) / 2) * (factor.high - factor.low));
 }
 
 /** The coded value of an actual setting: -1 at low, +1 at high. */
@@ -63,10 +64,5 @@ function isBetweenSteps(factor: FactorSpec, coded: number): boolean {
 function roundToStep(factor: FactorSpec, coded: number, up: boolean): number | string {
   if (factor.kind === 'choice' || factor.step === undefined) return decode(factor, coded);
   const steps = Number(decode(factor, coded)) / factor.step;
-  return tidy((up ? Math.ceil(steps) : Math.floor(steps)) * factor.step);
-}
-
-/** Without the dust of binary fractions: 0.9, not 0.9000000000000001. */
-function tidy(value: number): number {
-  return Number(value.toPrecision(12));
+  return tidyNumber((up ? Math.ceil(steps) : Math.floor(steps)) * factor.step);
 }

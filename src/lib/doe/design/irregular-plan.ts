@@ -6,6 +6,7 @@ import { canShowMainEffects, listAllowedCorners } from './allowed-corners.ts';
 import { expandPoint, invertInformation, predictionVariance } from './information.ts';
 import { findOptimalSubsets } from './optimal-subset.ts';
 import type { Alias } from './proposal.ts';
+import { traceAliases } from './trace-aliases.ts';
 import { lettersUpTo } from './words.ts';
 
 /** Corners chosen around forbidden ones: not balanced, but as near to it as the rules allow. */
@@ -128,7 +129,7 @@ function describeCorners({ chosen, corners, letters, terms }: ChosenCorners): Ir
     relative: relativeVariance(inverse, index, chosen.length),
   }));
   const others = listTerms(letters, 2).filter((term) => !terms.includes(term));
-  const aliases = traceAliases({ chosen, rows, inverse, terms, others });
+  const aliases = traceAliases({ corners: chosen, terms, others });
   const emptied = others.filter((pair) => isEmptied(corners, pair));
   const mainsTied = aliases.some(
     ({ term, with: partners }) =>
@@ -158,31 +159,4 @@ function isEmptied(corners: readonly number[][], pair: string): boolean {
     pair.includes(letter) ? [index] : [],
   );
   return new Set(corners.map((x) => `${x[first]} ${x[second]}`)).size < 4;
-}
-
-interface AliasQuestion {
-  chosen: readonly number[][];
-  rows: readonly number[][];
-  inverse: readonly number[][];
-  terms: readonly string[];
-  /** Terms left out of the model. */
-  others: readonly string[];
-}
-
-/** The alias matrix (X1'X1)^-1 X1'X2, row by row (G.E.P. Box & K.B. Wilson, 1951, JRSS B 13, 1-45). */
-function traceAliases({ chosen, rows, inverse, terms, others }: AliasQuestion): Alias[] {
-  const products = others.map((other) => {
-    const column = chosen.map((x) => expandPoint(x, [other])[1] ?? 0);
-    return (rows[0] ?? []).map((_, j) =>
-      rows.reduce((sum, row, run) => sum + (row[j] ?? 0) * (column[run] ?? 0), 0),
-    );
-  });
-  return terms.flatMap((term, index) => {
-    const line = inverse[index + 1] ?? [];
-    const partners = others.flatMap((other, place) => {
-      const coefficient = line.reduce((sum, value, j) => sum + value * (products[place]?.[j] ?? 0), 0);
-      return Math.abs(coefficient) < 1e-9 ? [] : [{ term: other, coefficient }];
-    });
-    return partners.length === 0 ? [] : [{ term, with: partners }];
-  });
 }

@@ -7,13 +7,9 @@ export interface DefiningWord {
   sign: 1 | -1;
 }
 
-/** A regular two-level plan, with all that follows from its generators. */
-export interface RegularPlan {
+/** How the terms of a regular two-level plan are tied to each other. */
+export interface WordStructure {
   k: number;
-  /** Signed: 'D=-ABC'. */
-  generators: string[];
-  /** Coded settings of each corner, in standard order: the first setting changes fastest. */
-  corners: number[][];
   /** Without the empty word; shortest first, then alphabetically. */
   definingWords: DefiningWord[];
   /** Length of the shortest defining word; Infinity for a full factorial. */
@@ -24,6 +20,14 @@ export interface RegularPlan {
   chains: Word[][];
   /** Chain index of every word of k letters; -1 for the empty word and the defining ones. */
   chainOf: number[];
+}
+
+/** A regular two-level plan, with all that follows from its generators. */
+export interface RegularPlan extends WordStructure {
+  /** Signed: 'D=-ABC'. */
+  generators: string[];
+  /** Coded settings of each corner, in standard order: the first setting changes fastest. */
+  corners: number[][];
 }
 
 /**
@@ -40,16 +44,22 @@ export function buildRegularPlan(k: number, generators: readonly string[]): Regu
       `buildRegularPlan: generators must use free settings, got ${writeWord(clash.product)}`,
     );
   const definingWords = multiplyOut(read.map(({ made, product, sign }) => ({ word: made ^ product, sign })));
+  return {
+    ...describeWords(k, definingWords),
+    generators: [...generators],
+    corners: listCorners(k, read, generated),
+  };
+}
+
+/** All that follows from the words that are the same in every corner. */
+export function describeWords(k: number, words: readonly DefiningWord[]): WordStructure {
+  const definingWords = [...words].sort((first, second) => compareWords(first.word, second.word));
   const lengths = definingWords.map(({ word }) => lengthOfWord(word));
   const chains = listChains(k, definingWords);
   const chainOf = new Array<number>(2 ** k).fill(-1);
-  chains.forEach((chain, index) => {
-    for (const word of chain) chainOf[word] = index;
-  });
+  for (const [index, chain] of chains.entries()) for (const word of chain) chainOf[word] = index;
   return {
     k,
-    generators: [...generators],
-    corners: listCorners(k, read, generated),
     definingWords,
     resolution: lengths.length === 0 ? Number.POSITIVE_INFINITY : Math.min(...lengths),
     wordLengthPattern: Array.from(
@@ -65,7 +75,7 @@ export function buildRegularPlan(k: number, generators: readonly string[]): Regu
  * Alias chains: for each group of terms that one contrast estimates together, the shortest term and all others with their signs. Chains of one term
  * are left out, so a full factorial has none.
  */
-export function listAliases({ definingWords, chains }: RegularPlan): Alias[] {
+export function listAliases({ definingWords, chains }: WordStructure): Alias[] {
   if (definingWords.length === 0) return [];
   const signOf = new Map(definingWords.map(({ word, sign }) => [word, sign]));
   return chains.map(([first = 0, ...others]) => ({
@@ -116,7 +126,7 @@ function multiplyOut(independent: readonly DefiningWord[]): DefiningWord[] {
       product,
       { word: product.word ^ word, sign: product.sign === sign ? 1 : -1 },
     ]);
-  return products.slice(1).sort((first, second) => compareWords(first.word, second.word));
+  return products.slice(1);
 }
 
 function listCorners(k: number, generators: readonly Generator[], generated: Word): number[][] {

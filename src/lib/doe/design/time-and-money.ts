@@ -29,6 +29,8 @@ export function countTimeAndMoney(brief: Brief, ordered: readonly (readonly numb
  * changes more or less.
  */
 export function expectTimeAndMoney(brief: Brief, rows: readonly LayoutRow[]): TimeAndMoney {
+  if (!brief.factors.some(({ settleMinutes = 0, discardParts = 0 }) => settleMinutes > 0 || discardParts > 0))
+    return convert(brief, rows.length, noChange);
   const usual = usualPoint(brief);
   const first = average(rows.map((row) => changeBetween(brief, usual, row.x)));
   const blocks = groupBy(rows, (row) => row.block);

@@ -39,5 +39,6 @@ export function averageOverChi({ of, df, rate }: AverageOverChi): number {
       if (term < sum * 1e-18) break;
     }
   }
-  return sum * step;
+  // The average of something bounded by 1, whatever rounding adds.
+  return Math.min(1, sum * step);
 }

@@ -8,7 +8,8 @@ import { studentTUpperQuantile } from './student-t.ts';
  * Example: power of an effect of 2 standard errors, 3 degrees of freedom, 5 %: `powerBeyond(2, 3, studentTUpperQuantile(.025, 3))`.
  */
 export function powerBeyond(noncentrality: number, df: number, limit: number): number {
-  return noncentralTUpperTail(limit, df, noncentrality) + noncentralTUpperTail(limit, df, -noncentrality);
+  const far = noncentralTUpperTail(limit, df, noncentrality);
+  return Math.min(1, far + noncentralTUpperTail(limit, df, -noncentrality));
 }
 
 /** Power of the two-sided t test at level `alpha`. */
