@@ -11,6 +11,7 @@ import { holdLease } from './lease.ts';
 import type { Job, JobContext } from './loop.ts';
 
 const textsAtOnce = 50;
+const leaseMilliseconds = 3_000;
 /** A text that cannot be read after so many tries is set aside, so that the sender's later ones are heard. */
 const mostAttempts = 5;
 
@@ -19,11 +20,11 @@ export const readInbox: Job = {
   name: 'read-inbox',
   everyMilliseconds: 500,
   async run(context) {
-    if (!(await holdLease(context, 'read-inbox', 10_000))) return 0;
     const heldUp = new Set<string>();
     let done = 0;
     for (const text of await listNewInboxTexts(context.db, textsAtOnce)) {
-      if (context.stopping()) break;
+      // Renewed with each text: short, so that after a restart nobody waits long for the lease of the one before.
+      if (context.stopping() || !(await holdLease(context, 'read-inbox', leaseMilliseconds))) break;
       // The order of one person's texts holds: after one that failed, the rest of theirs wait.
       if (text.personId !== null && heldUp.has(text.personId)) continue;
       if (await tryReading(context, text)) done += 1;

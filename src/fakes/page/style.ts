@@ -45,6 +45,7 @@ textarea {
 .clock { display: flex; flex-wrap: wrap; gap: 8px 16px; align-items: center; color: var(--steel); }
 .sheet { width: 100%; max-width: 960px; margin: 0 auto; padding: 24px 16px 48px; display: grid; gap: 16px; grid-template-columns: minmax(0, 1fr); align-content: start; }
 .phones { flex: 1; width: 100%; max-width: 1120px; margin: 0 auto; padding: 16px; display: grid; gap: 16px; grid-template-columns: 320px minmax(0, 1fr); align-items: start; align-content: start; }
+.pick { grid-column: 1 / -1; }
 .rows { list-style: none; margin: 0; padding: 0; display: grid; gap: 8px; grid-template-columns: minmax(0, 1fr); }
 .row {
   display: block; min-height: 72px; padding: 8px 12px; background: var(--card); color: var(--ink);

@@ -27,8 +27,10 @@ export function phonesPage(
     rows.length === 0
       ? html`<p class="quiet">No phone has a text yet. Ask someone for consent in the app, and the phone shows up here.</p>`
       : html`<ul class="rows">${rows}</ul>`;
-  return html`<section class="list" aria-label="Phones" id="list" data-live>${list}</section>
-${open === undefined ? html`<p class="quiet">Pick a phone to read its texts and to answer.</p>` : openPhone(open, isOptedOut)}`;
+  const head = html`<div class="pick"><h1>Phones</h1><p class="quiet">Pick a phone to read its texts and to answer.</p></div>`;
+  return html`${open === undefined ? head : nothing}
+<section class="list" aria-label="Phones" id="list" data-live>${list}</section>
+${open === undefined ? nothing : openPhone(open, isOptedOut)}`;
 }
 
 function phoneRow(conversation: PhoneConversation, isOpen: boolean): Html {
