@@ -30,7 +30,7 @@ export function ConfirmDialog(props: ConfirmDialogProps) {
       closeLabel={closeLabel}
       actions={
         <>
-          <Button autoFocus onClick={onCancel}>
+          <Button data-first-focus onClick={onCancel}>
             {cancelLabel}
           </Button>
           <Button kind={kind} busy={busy} busyLabel={busyLabel} onClick={onConfirm}>

@@ -16,7 +16,8 @@ interface DialogProps {
 
 /**
  * The browser's own modal dialog: it keeps the keyboard inside, hides the page behind from screen readers and gives the
- * focus back to where it came from. An element inside with `autoFocus` gets the focus first.
+ * focus back to where it came from. An element inside with `data-first-focus` gets the focus first; React's own autoFocus
+ * would come too early, while the dialog is still closed.
  */
 export function Dialog({ open, onClose, title, closeLabel, children, actions, role }: DialogProps) {
   const dialog = useRef<HTMLDialogElement>(null);
@@ -25,7 +26,10 @@ export function Dialog({ open, onClose, title, closeLabel, children, actions, ro
   useEffect(() => {
     const element = dialog.current;
     if (!element) return;
-    if (open && !element.open) element.showModal();
+    if (open && !element.open) {
+      element.showModal();
+      element.querySelector<HTMLElement>('[data-first-focus]')?.focus();
+    }
     if (!open && element.open) element.close();
   }, [open]);
 

@@ -36,7 +36,7 @@ export function MovingPieces() {
         }
       >
         <p className="mb-4">{words.dialogWords}</p>
-        <Select id="hand-over-to" label={words.to} options={words.callers} autoFocus />
+        <Select id="hand-over-to" label={words.to} options={words.callers} data-first-focus />
       </Dialog>
       <ConfirmDialog
         open={shown === 'confirm'}
