@@ -47,8 +47,12 @@ export function Button(props: ButtonProps) {
         children
       ) : (
         <span className="button-words">
-          <span className={busy ? 'invisible' : undefined}>{children}</span>
-          <span className={busy ? undefined : 'invisible'}>{busyLabel}</span>
+          <span className={busy ? 'invisible' : undefined} aria-hidden={busy}>
+            {children}
+          </span>
+          <span className={busy ? undefined : 'invisible'} aria-hidden={!busy}>
+            {busyLabel}
+          </span>
         </span>
       )}
     </button>
