@@ -1,19 +1,12 @@
-import type { Browser } from 'playwright-core';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { launchBrowser, openPage, type WatchedPage } from '../setup/browser.ts';
-import { type RunningApp, startApp } from '../setup/running-app.ts';
+import { beforeAll, describe, expect, it } from 'vitest';
+import { useAppInBrowser } from '../setup/app-in-browser.ts';
+import { openPage, type WatchedPage } from '../setup/browser.ts';
 
-let running: RunningApp;
-let browser: Browser;
+const at = useAppInBrowser();
 let opened: WatchedPage;
 beforeAll(async () => {
-  [running, browser] = await Promise.all([startApp(), launchBrowser()]);
-  opened = await openPage(browser);
-  await opened.page.goto(`${running.url}/pieces`, { waitUntil: 'load' });
-});
-afterAll(async () => {
-  await browser?.close();
-  await running?.stop();
+  opened = await openPage(at.browser);
+  await opened.page.goto(`${at.running.url}/pieces`, { waitUntil: 'load' });
 });
 
 interface Wish {

@@ -1,17 +1,9 @@
-import type { Browser, Page } from 'playwright-core';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { findAccessFaults, launchBrowser, openPage, takeShot } from '../setup/browser.ts';
-import { type RunningApp, startApp } from '../setup/running-app.ts';
+import type { Page } from 'playwright-core';
+import { describe, expect, it } from 'vitest';
+import { useAppInBrowser } from '../setup/app-in-browser.ts';
+import { findAccessFaults, openPage, takeShot } from '../setup/browser.ts';
 
-let running: RunningApp;
-let browser: Browser;
-beforeAll(async () => {
-  [running, browser] = await Promise.all([startApp(), launchBrowser()]);
-});
-afterAll(async () => {
-  await browser?.close();
-  await running?.stop();
-});
+const at = useAppInBrowser();
 
 /** Width and height in mm of each page of a PDF as Chromium writes it. */
 async function printPages(page: Page, format: 'A4' | 'Letter'): Promise<[number, number][]> {
@@ -28,16 +20,16 @@ describe('the paper', () => {
     ['A4', [210, 297]],
     ['Letter', [216, 279]],
   ] as const)('takes six tags on a page of %s, then the card on A5', async (format, size) => {
-    const { page, close } = await openPage(browser);
-    await page.goto(`${running.url}/pieces/paper`);
+    const { page, close } = await openPage(at.browser);
+    await page.goto(`${at.running.url}/pieces/paper`);
     expect(await page.locator('.print-cell').count()).toBe(12);
     expect(await printPages(page, format)).toEqual([size, size, [148, 210]]);
     await close();
   });
 
   it('has setting values of 24 pt and keeps every tag inside its cut marks', async () => {
-    const { page, complaints, close } = await openPage(browser);
-    await page.goto(`${running.url}/pieces/paper`);
+    const { page, complaints, close } = await openPage(at.browser);
+    await page.goto(`${at.running.url}/pieces/paper`);
     await page.emulateMedia({ media: 'print' });
     const sizes = await page
       .locator('.print-cell .job-tag-value:not(.job-tag-choice)')
@@ -53,8 +45,8 @@ describe('the paper', () => {
   });
 
   it('has no access fault on the screen before it is printed', async () => {
-    const { page, close } = await openPage(browser);
-    await page.goto(`${running.url}/pieces/paper`);
+    const { page, close } = await openPage(at.browser);
+    await page.goto(`${at.running.url}/pieces/paper`);
     expect(await findAccessFaults(page)).toEqual([]);
     await takeShot(page, 'pieces-paper');
     await close();

@@ -1,17 +1,10 @@
-import type { Browser, Page } from 'playwright-core';
+import type { Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { findAccessFaults, launchBrowser, openPage, takeShot, type WatchedPage } from '../setup/browser.ts';
-import { type RunningApp, startApp } from '../setup/running-app.ts';
+import { useAppInBrowser } from '../setup/app-in-browser.ts';
+import { findAccessFaults, openPage, takeShot, type WatchedPage } from '../setup/browser.ts';
+import { startApp } from '../setup/running-app.ts';
 
-let running: RunningApp;
-let browser: Browser;
-beforeAll(async () => {
-  [running, browser] = await Promise.all([startApp(), launchBrowser()]);
-});
-afterAll(async () => {
-  await browser?.close();
-  await running?.stop();
-});
+const at = useAppInBrowser();
 
 const widths = [
   { width: 1280, height: 800 },
@@ -34,8 +27,8 @@ function findSmallTargets(page: Page): Promise<string[]> {
 describe.each(['light', 'dark'])('the pieces in the %s theme', (theme) => {
   let opened: WatchedPage;
   beforeAll(async () => {
-    opened = await openPage(browser);
-    await opened.page.goto(`${running.url}/pieces?theme=${theme}`, { waitUntil: 'networkidle' });
+    opened = await openPage(at.browser);
+    await opened.page.goto(`${at.running.url}/pieces?theme=${theme}`, { waitUntil: 'networkidle' });
     await opened.page.evaluate(() => document.fonts.ready);
   });
   afterAll(() => opened.close());
@@ -67,15 +60,15 @@ describe('the theme', () => {
     ['dark', '?theme=light', 'rgb(238, 241, 238)'],
     ['light', '?theme=dark', 'rgb(17, 24, 29)'],
   ] as const)('on a %s device with "%s" has the bench %s', async (colorScheme, query, bench) => {
-    const { page, close } = await openPage(browser, { colorScheme });
-    await page.goto(`${running.url}/pieces${query}`);
+    const { page, close } = await openPage(at.browser, { colorScheme });
+    await page.goto(`${at.running.url}/pieces${query}`);
     expect(await backgroundOf(page)).toBe(bench);
     await close();
   });
 
   it('is light on paper, whatever it is on the screen', async () => {
-    const { page, close } = await openPage(browser);
-    await page.goto(`${running.url}/pieces?theme=dark`);
+    const { page, close } = await openPage(at.browser);
+    await page.goto(`${at.running.url}/pieces?theme=dark`);
     await page.emulateMedia({ media: 'print', colorScheme: 'dark' });
     expect(await page.evaluate(() => getComputedStyle(document.body).color)).toBe('rgb(22, 33, 43)');
     await close();
@@ -84,8 +77,8 @@ describe('the theme', () => {
 
 describe('by keyboard', () => {
   it('the skip link comes first and leads to the page', async () => {
-    const { page, close } = await openPage(browser);
-    await page.goto(`${running.url}/pieces`);
+    const { page, close } = await openPage(at.browser);
+    await page.goto(`${at.running.url}/pieces`);
     await page.keyboard.press('Tab');
     await page.keyboard.press('Enter');
     expect(await page.evaluate(() => document.activeElement?.id)).toBe('main');
@@ -93,8 +86,8 @@ describe('by keyboard', () => {
   });
 
   it('a menu opens, and Escape closes it and stays there', async () => {
-    const { page, close } = await openPage(browser);
-    await page.goto(`${running.url}/pieces`);
+    const { page, close } = await openPage(at.browser);
+    await page.goto(`${at.running.url}/pieces`);
     const menu = page.locator('.head-menu').first();
     await menu.locator('summary').focus();
     await page.keyboard.press('Enter');
@@ -107,8 +100,8 @@ describe('by keyboard', () => {
   });
 
   it('a dialog keeps the focus, starts on the harmless answer and gives the focus back', async () => {
-    const { page, complaints, close } = await openPage(browser);
-    await page.goto(`${running.url}/pieces`, { waitUntil: 'networkidle' });
+    const { page, complaints, close } = await openPage(at.browser);
+    await page.goto(`${at.running.url}/pieces`, { waitUntil: 'networkidle' });
     await page.getByRole('button', { name: 'End the trial early' }).press('Enter');
     const focused = () => page.evaluate(() => document.activeElement?.textContent);
     expect(await focused()).toBe('Keep it running');
@@ -121,8 +114,8 @@ describe('by keyboard', () => {
   });
 
   it('a wide table scrolls by arrow keys on a phone', async () => {
-    const { page, close } = await openPage(browser, { viewport: { width: 360, height: 740 } });
-    await page.goto(`${running.url}/pieces`);
+    const { page, close } = await openPage(at.browser, { viewport: { width: 360, height: 740 } });
+    await page.goto(`${at.running.url}/pieces`);
     const table = page.getByRole('region', { name: 'Runs so far' });
     await table.focus();
     for (let press = 0; press < 5; press += 1) await page.keyboard.press('ArrowRight');
@@ -133,8 +126,8 @@ describe('by keyboard', () => {
 
 describe('a tag', () => {
   it('is 200 x 194 with four settings, and a row of 72 on a phone', async () => {
-    const { page, close } = await openPage(browser);
-    await page.goto(`${running.url}/pieces`);
+    const { page, close } = await openPage(at.browser);
+    await page.goto(`${at.running.url}/pieces`);
     expect(await page.locator('.job-tag').first().boundingBox()).toMatchObject({ width: 200, height: 194 });
     await page.setViewportSize({ width: 360, height: 740 });
     expect(await page.locator('.job-tag').first().boundingBox()).toMatchObject({ width: 328, height: 72 });
@@ -142,8 +135,8 @@ describe('a tag', () => {
   });
 
   it('never shortens a figure', async () => {
-    const { page, close } = await openPage(browser);
-    await page.goto(`${running.url}/pieces`);
+    const { page, close } = await openPage(at.browser);
+    await page.goto(`${at.running.url}/pieces`);
     for (const viewport of widths) {
       await page.setViewportSize(viewport);
       const cut = await page
@@ -172,7 +165,7 @@ describe('for real', () => {
     try {
       for (const path of ['/pieces', '/pieces/paper']) {
         expect((await fetch(`${live.url}${path}`)).status).toBe(404);
-        expect((await fetch(`${running.url}${path}`)).status).toBe(200);
+        expect((await fetch(`${at.running.url}${path}`)).status).toBe(200);
       }
     } finally {
       await live.stop();

@@ -39,7 +39,7 @@ export function Stepper({ label, steps }: StepperProps) {
               <span className="step-label">
                 <span className="sr-only">{step.number} </span>
                 {step.label}
-                {step.stateWord && <span className="sr-only">, {step.stateWord}</span>}
+                {step.stateWord && <span className="sr-only"> {step.stateWord}</span>}
               </span>
             </>
           );

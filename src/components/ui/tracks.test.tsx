@@ -2,6 +2,7 @@ import { render, screen } from '@testing-library/react';
 import { describe, expect, it } from 'vitest';
 import { EffectList } from './EffectList.tsx';
 import { EffectTrack, findEffectDomain } from './EffectTrack.tsx';
+import { effects } from './pieces/sample-figures.ts';
 import { SettingTrack } from './SettingTrack.tsx';
 
 const low = { value: 140, label: '140' };
@@ -118,17 +119,7 @@ describe('EffectList', () => {
   it('says each change, its interval and the call in words', () => {
     render(
       <EffectList
-        rows={[
-          {
-            key: 'jaw',
-            name: 'Jaw temp 140 to 160',
-            change: 6,
-            from: 4,
-            to: 8,
-            size: '6 N stronger, 4 to 8',
-            call: 'Matters. Clear.',
-          },
-        ]}
+        rows={effects.slice(0, 1)}
         worthHaving={3}
         worseLabel="worse"
         betterLabel="better, N"

@@ -1,0 +1,29 @@
+import type { Browser } from 'playwright-core';
+import { afterAll, beforeAll } from 'vitest';
+import { launchBrowser } from './browser.ts';
+import { type RunningApp, startApp } from './running-app.ts';
+
+/** Starts the built product and a browser for all tests of a file, and ends both after them. */
+export function useAppInBrowser(): { readonly running: RunningApp; readonly browser: Browser } {
+  let running: RunningApp | undefined;
+  let browser: Browser | undefined;
+  beforeAll(async () => {
+    [running, browser] = await Promise.all([startApp(), launchBrowser()]);
+  });
+  afterAll(async () => {
+    await browser?.close();
+    await running?.stop();
+  });
+  function present<Value>(value: Value | undefined): Value {
+    if (value === undefined) throw new RangeError('useAppInBrowser: nothing runs before the tests do');
+    return value;
+  }
+  return {
+    get running() {
+      return present(running);
+    },
+    get browser() {
+      return present(browser);
+    },
+  };
+}
