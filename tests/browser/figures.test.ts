@@ -1,8 +1,8 @@
 import { beforeAll, describe, expect, it } from 'vitest';
-import { useAppInBrowser } from '../setup/app-in-browser.ts';
+import { withAppInBrowser } from '../setup/app-in-browser.ts';
 import { openPage, type WatchedPage } from '../setup/browser.ts';
 
-const at = useAppInBrowser();
+const at = withAppInBrowser();
 let opened: WatchedPage;
 beforeAll(async () => {
   opened = await openPage(at.browser);

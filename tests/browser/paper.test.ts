@@ -1,9 +1,9 @@
 import type { Page } from 'playwright-core';
 import { describe, expect, it } from 'vitest';
-import { useAppInBrowser } from '../setup/app-in-browser.ts';
+import { withAppInBrowser } from '../setup/app-in-browser.ts';
 import { findAccessFaults, openPage, takeShot } from '../setup/browser.ts';
 
-const at = useAppInBrowser();
+const at = withAppInBrowser();
 
 /** Width and height in mm of each page of a PDF as Chromium writes it. */
 async function printPages(page: Page, format: 'A4' | 'Letter'): Promise<[number, number][]> {

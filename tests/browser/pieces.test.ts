@@ -1,10 +1,10 @@
 import type { Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { useAppInBrowser } from '../setup/app-in-browser.ts';
+import { withAppInBrowser } from '../setup/app-in-browser.ts';
 import { findAccessFaults, openPage, takeShot, type WatchedPage } from '../setup/browser.ts';
 import { startApp } from '../setup/running-app.ts';
 
-const at = useAppInBrowser();
+const at = withAppInBrowser();
 
 const widths = [
   { width: 1280, height: 800 },

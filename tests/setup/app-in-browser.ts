@@ -4,7 +4,7 @@ import { launchBrowser } from './browser.ts';
 import { type RunningApp, startApp } from './running-app.ts';
 
 /** Starts the built product and a browser for all tests of a file, and ends both after them. */
-export function useAppInBrowser(): { readonly running: RunningApp; readonly browser: Browser } {
+export function withAppInBrowser(): { readonly running: RunningApp; readonly browser: Browser } {
   let running: RunningApp | undefined;
   let browser: Browser | undefined;
   beforeAll(async () => {
@@ -15,7 +15,7 @@ export function useAppInBrowser(): { readonly running: RunningApp; readonly brow
     await running?.stop();
   });
   function present<Value>(value: Value | undefined): Value {
-    if (value === undefined) throw new RangeError('useAppInBrowser: nothing runs before the tests do');
+    if (value === undefined) throw new RangeError('withAppInBrowser: nothing runs before the tests do');
     return value;
   }
   return {
