@@ -11,12 +11,12 @@ export const compilerTools = [
   {
     programs: ['g++', 'c++'],
     packages: ['build-essential'],
-    purpose: 'The C++ compiler',
+    purpose: 'the C++ compiler',
   },
   {
     programs: ['make'],
     packages: ['build-essential'],
-    purpose: 'The make program',
+    purpose: 'make',
   },
   { programs: ['python3'], packages: ['python3'], purpose: 'Python' },
 ];
@@ -31,7 +31,7 @@ export const browserTools = [
   {
     programs: ['pdftotext'],
     packages: ['poppler-utils'],
-    purpose: 'The program pdftotext',
+    purpose: 'pdftotext',
   },
 ];
 
@@ -63,11 +63,13 @@ export function findMissing(tools) {
 /**
  * One sentence that names what is missing and how to get it.
  * @param {Tool[]} missing
+ * @param {string} [purpose] what they are missing for, as `to …`
  */
-export function explainMissing(missing) {
-  const names = missing.map((tool) => tool.purpose).join(' and ');
+export function explainMissing(missing, purpose) {
+  const list = new Intl.ListFormat('en').format(missing.map((tool) => tool.purpose));
+  const names = list.charAt(0).toUpperCase() + list.slice(1);
   const verb = missing.length === 1 ? 'is' : 'are';
-  return `${names} ${verb} missing: run "sudo apt-get install ${packagesOf(missing).join(' ')}", then try again.`;
+  return `${names} ${verb} missing${purpose ? ` ${purpose}` : ''}: run "sudo apt-get install ${packagesOf(missing).join(' ')}", then try again.`;
 }
 
 /**

@@ -33,13 +33,13 @@ describe('findMissing', () => {
 
   it('is content with any of the programs of a tool', () => {
     putProgram('chromium-browser');
-    expect(findMissing(browserTools).map((tool) => tool.purpose)).toEqual(['The program pdftotext']);
+    expect(findMissing(browserTools).map((tool) => tool.purpose)).toEqual(['pdftotext']);
   });
 });
 
 it('names each missing package once, in one sentence', () => {
   expect(explainMissing(compilerTools)).toBe(
-    'The C++ compiler and The make program and Python are missing: ' +
+    'The C++ compiler, make, and Python are missing: ' +
       'run "sudo apt-get install build-essential python3", then try again.',
   );
 });

@@ -64,8 +64,7 @@ async function installCompiler() {
  */
 function explainFailedInstall(output) {
   const missing = findMissing(compilerTools);
-  if (missing.length > 0)
-    return `The SQLite driver has to be built on this machine. ${explainMissing(missing)}`;
+  if (missing.length > 0) return explainMissing(missing, 'to build the SQLite driver');
   if (/\b(ENOTFOUND|EAI_AGAIN|ECONNREFUSED|ECONNRESET|ETIMEDOUT)\b/.test(output))
     return 'The packages could not be fetched: check that this machine reaches the npm registry, then try again.';
   if (/\b(EACCES|EPERM|EROFS)\b/.test(output))
