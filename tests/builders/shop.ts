@@ -7,11 +7,14 @@ import { newId } from '../../src/server/ids.ts';
 const builtAt = Date.UTC(2026, 0, 5, 8);
 let built = 0;
 
-/** A shop of its own with valid defaults, and a scope for it. */
-export async function buildShop(overrides: Record<string, unknown> = {}): Promise<ShopScope> {
+/** A shop of its own with valid defaults, and a scope for it; in the database of an app beside the test if told. */
+export async function buildShop(
+  overrides: Record<string, unknown> = {},
+  db = database(),
+): Promise<ShopScope> {
   built += 1;
   const id = newId();
-  await database()('shops').insert({
+  await db('shops').insert({
     id,
     name: `Test shop ${built}`,
     time_zone: 'Europe/Warsaw',
@@ -22,7 +25,7 @@ export async function buildShop(overrides: Record<string, unknown> = {}): Promis
     updated_at: builtAt,
     ...overrides,
   });
-  return { db: database(), shopId: id, actor: { kind: 'command', id: null } };
+  return { db, shopId: id, actor: { kind: 'command', id: null } };
 }
 
 /** A person of that shop with the given roles; answers the id. */

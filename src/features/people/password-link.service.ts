@@ -6,8 +6,7 @@ import { recordActivity } from '../../server/db/activity-log.ts';
 import { inTransaction } from '../../server/db/in-transaction.ts';
 import { AppError } from '../../server/errors.ts';
 import type { Browser } from '../../server/http/browser.ts';
-import { storePasswordHash } from './password.repository.ts';
-import { prepareNewPassword } from './password.service.ts';
+import { prepareNewPassword, replacePassword } from './password.service.ts';
 import { openSession } from './sign-in.service.ts';
 
 /** The two links that let a person choose a password: an invitation, and a mail after "forgotten". */
@@ -49,7 +48,7 @@ export async function choosePasswordByLink(
   const { personId } = person;
   return inTransaction(scopeOfLink(link), async (scope) => {
     await takeLink(scope, link);
-    await storePasswordHash(scope, { personId, passwordHash });
+    await replacePassword(scope, { personId, passwordHash });
     await endAllSessions(scope, personId);
     await recordActivity(scope, { kind: recordedAs[purpose], subjectId: personId });
     return openSession(scope, personId, browser);

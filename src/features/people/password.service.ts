@@ -1,5 +1,8 @@
+import { revokeLinks } from '../../server/auth/links.ts';
 import { hashPassword } from '../../server/auth/password.ts';
+import type { ShopScope } from '../../server/db/scope.ts';
 import { AppError } from '../../server/errors.ts';
+import { storePasswordHash } from './password.repository.ts';
 import { findPasswordFault, type PasswordOwner, passwordLength } from './password-rule.ts';
 
 const limits = { 'too-short': passwordLength.least, 'too-long': passwordLength.most };
@@ -19,4 +22,15 @@ export async function prepareNewPassword(
   throw new AppError('invalid', {
     fields: [{ pointer, code: fault, ...(limit === undefined ? {} : { values: { limit } }) }],
   });
+}
+
+/** Keeps a new password. Links that were sent to choose one end with it: nobody comes back by an older mail. */
+export async function replacePassword(
+  scope: ShopScope,
+  change: { personId: string; passwordHash: string },
+): Promise<void> {
+  await storePasswordHash(scope, change);
+  for (const purpose of ['invite', 'reset'] as const) {
+    await revokeLinks(scope, { purpose, personId: change.personId });
+  }
 }

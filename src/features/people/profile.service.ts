@@ -6,8 +6,7 @@ import { recordActivity } from '../../server/db/activity-log.ts';
 import { inTransaction } from '../../server/db/in-transaction.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
 import { AppError } from '../../server/errors.ts';
-import { storePasswordHash } from './password.repository.ts';
-import { prepareNewPassword } from './password.service.ts';
+import { prepareNewPassword, replacePassword } from './password.service.ts';
 import { updateProfile } from './profile.repository.ts';
 import type { ChangeProfile } from './profile.schema.ts';
 import { endOwnOtherSessions } from './session.service.ts';
@@ -54,7 +53,7 @@ export async function changeOwnPassword(
   await forgetSignInTries(who);
   const passwordHash = await prepareNewPassword(change.password, person);
   await inTransaction(scope, async (inner) => {
-    await storePasswordHash(inner, { personId: viewer.personId, passwordHash });
+    await replacePassword(inner, { personId: viewer.personId, passwordHash });
     await endOwnOtherSessions(inner, viewer);
     await recordActivity(inner, { kind: 'password.changed', subjectId: viewer.personId });
   });

@@ -14,11 +14,8 @@ export type LinkPurpose = (typeof linkPurposes)[number];
 const hour = 3_600_000;
 
 /** How long each kind of link lives, in milliseconds. The others end with their trial: their maker says when. */
-const lifetimes: Partial<Record<LinkPurpose, number>> = {
-  setup: 24 * hour,
-  invite: 7 * 24 * hour,
-  reset: hour,
-};
+export const linkLifetimes = { setup: 24 * hour, invite: 7 * 24 * hour, reset: hour } as const;
+const lifetimes: Partial<Record<LinkPurpose, number>> = linkLifetimes;
 
 export interface Link {
   id: string;

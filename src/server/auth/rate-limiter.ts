@@ -73,8 +73,3 @@ function countOnUnlessOver(db: Knex, at: number): Record<string, Knex.Raw> {
     ),
   };
 }
-
-/** Forgets counts that no longer matter. */
-export async function deleteEndedCounts(): Promise<number> {
-  return database()('rate_limits').where('expire', '<=', now()).delete();
-}

@@ -81,7 +81,3 @@ export async function endSession(scope: { db: Knex }, sessionId: string): Promis
 export async function endAllSessions(scope: ShopScope, personId: string): Promise<void> {
   await luciaOn(() => scope.db).invalidateUserSessions(personId);
 }
-
-export async function deleteExpiredSessions(): Promise<void> {
-  await lucia.deleteExpiredSessions();
-}
