@@ -31,7 +31,7 @@ const schema = z
     TWILIO_AUTH_TOKEN: z.string().min(1).default('demo-text-service-key'),
     /** Phones to show before they have a text: `+15550100101=Ana,+15550100102=Minh`. */
     FAKES_PHONES: z.string().default(''),
-    /** The shops' own numbers, first one first: `+15550100001,+15550100002`. */
+    /** The shops' numbers, `+12025550100,+12025550101`; a phone without texts writes to the first. */
     FAKES_NUMBERS: z.string().default(''),
     /** Milliseconds from acceptance to "sent", and from there to "delivered". */
     FAKES_STEP_MS: z.coerce.number().int().min(0).max(60_000).default(400),

@@ -90,6 +90,10 @@ describe('a text on its way out', () => {
       outcome: 'refused',
       code: '21211',
     });
+    await expect(gateway.send({ messageId: '1', from: 'Trywell', to: phone, body: 'x' })).resolves.toEqual({
+      outcome: 'refused',
+      code: '21606',
+    });
     await expect(send('x'.repeat(1601))).resolves.toEqual({ outcome: 'refused', code: '21617' });
   });
 

@@ -1,6 +1,7 @@
 // @ts-check
 import { resolve } from 'node:path';
 import { projectFolder } from '../begin/project.mjs';
+import { demoNumber, demoPhones } from './demo-phones.mjs';
 
 /**
  * What the commands need to know before the product, which checks its own configuration, has started.
@@ -40,5 +41,11 @@ export function demoEnvironment({ dataFolder, localUrl }, env) {
     CLOCK_OFFSET_FILE: env['CLOCK_OFFSET_FILE'] || resolve(dataFolder, 'clock-offset'),
     FAKES_DATA_DIR: env['FAKES_DATA_DIR'] || resolve(dataFolder, 'fakes'),
     FAKES_WEBHOOK_TARGET: env['FAKES_WEBHOOK_TARGET'] || localUrl,
+    FAKES_NUMBERS: env['FAKES_NUMBERS'] || demoNumber,
+    FAKES_PHONES:
+      env['FAKES_PHONES'] ||
+      Object.entries(demoPhones)
+        .map(([phone, name]) => `${phone}=${name}`)
+        .join(','),
   };
 }

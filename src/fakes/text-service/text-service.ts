@@ -122,7 +122,7 @@ export function openTextService(options: {
     state,
     isOptedOut,
     accept: (request) => {
-      const refusal = findRefusal(request, isOptedOut(request.from, request.to), settings.numbers);
+      const refusal = findRefusal(request, isOptedOut(request.from, request.to));
       if (refusal !== undefined) return refusal;
       const { statusCallback, ...rest } = request;
       const text = keep({ direction: 'outbound-api', status: 'queued', ...rest });
@@ -158,17 +158,12 @@ export function openTextService(options: {
 }
 
 /** Error codes as the text service publishes them. */
-function findRefusal(
-  request: SendRequest,
-  isOptedOut: boolean,
-  numbers: readonly string[],
-): SendRefusal | undefined {
+function findRefusal(request: SendRequest, isOptedOut: boolean): SendRefusal | undefined {
   const refuse = (code: number, message: string): SendRefusal => ({ status: 400, code, message });
   if (!phoneForm.test(request.to)) return refuse(21_211, 'The number in To is not a phone number.');
   if (request.body === '') return refuse(21_602, 'A text needs a body.');
   if (request.body.length > longestBody) return refuse(21_617, 'The body is longer than 1600 characters.');
-  const isOwn = numbers.length === 0 ? phoneForm.test(request.from) : numbers.includes(request.from);
-  if (!isOwn) return refuse(21_606, 'The number in From is not one of this account.');
+  if (!phoneForm.test(request.from)) return refuse(21_606, 'The number in From is not one of this account.');
   return isOptedOut ? refuse(21_610, 'The receiver has opted out of texts from this number.') : undefined;
 }
 

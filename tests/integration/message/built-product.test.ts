@@ -4,6 +4,7 @@ import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import type { Knex } from 'knex';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { demoNumber, demoPhones } from '../../../src/commands/start/demo-phones.mjs';
 import { askForConsent } from '../../../src/features/message/consent.service.ts';
 import { queueMailTo } from '../../../src/features/message/message.service.ts';
 import { openDatabase } from '../../../src/server/db/connection.ts';
@@ -14,7 +15,6 @@ import { findFreePort } from '../../setup/free-port.ts';
 import { type StandIns, startStandIns, testAccount } from '../stand-ins.ts';
 
 const main = fileURLToPath(new URL('../../../dist/main/main.mjs', import.meta.url));
-const shopNumber = '+12025550100';
 // Minh of the demo shop, whom nobody has asked yet.
 const phone = '+12025550168';
 
@@ -78,6 +78,12 @@ async function inbound() {
 }
 
 describe('the built product with its worker', { timeout: 90_000 }, () => {
+  it('has the very phones that the demo shows', async () => {
+    const people = await db('people').whereNotNull('phone').orderBy('phone').select('phone', 'name');
+    expect(Object.fromEntries(people.map(({ phone: own, name }) => [own, name]))).toEqual(demoPhones);
+    expect(await db('shops').pluck('text_number')).toEqual([demoNumber]);
+  });
+
   it('sends a text and a mail, and hears by signed webhooks what became of it and what is answered', async () => {
     await askForConsent(shop, minh, { id: minh, name: 'Dana' });
     await expect.poll(received, soon).toEqual([expect.stringContaining('Dana asks if we may text you')]);
@@ -85,9 +91,9 @@ describe('the built product with its worker', { timeout: 90_000 }, () => {
       .poll(() => db('messages').where({ template: 'consent' }).pluck('state'), soon)
       .toEqual(['delivered']);
 
-    await standIns.textFromPhone({ from: phone, to: shopNumber, body: 'OK' });
+    await standIns.textFromPhone({ from: phone, to: demoNumber, body: 'OK' });
     await expect.poll(async () => (await received()).length, soon).toBe(2);
-    await standIns.textFromPhone({ from: phone, to: shopNumber, body: '41.5' });
+    await standIns.textFromPhone({ from: phone, to: demoNumber, body: '41.5' });
     await expect.poll(async () => (await received()).at(-1), soon).toContain('Got it: 41.5.');
 
     const params = { name: 'Dana', shop: 'Harrow Lane Foods' };
@@ -134,7 +140,7 @@ describe('the built product with its worker', { timeout: 90_000 }, () => {
 
   it('catches up with what was texted while it was down', async () => {
     expect(await app.stop()).toBe(0);
-    await standIns.textFromPhone({ from: phone, to: shopNumber, body: 'STOP' });
+    await standIns.textFromPhone({ from: phone, to: demoNumber, body: 'STOP' });
     await expect.poll(async () => (await inbound()).at(-1)?.outcome, soon).toBe('missed');
     app = await startProduct();
     await expect.poll(() => db('people').where({ id: minh }).pluck('consent'), soon).toEqual(['opted out']);
