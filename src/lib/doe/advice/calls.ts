@@ -6,11 +6,9 @@ import type { ResponseScale } from './response-scale.ts';
 /** *clear*: with all effects of the result judged together; *likely*: alone; *not*: neither. */
 export type Sure = 'clear' | 'likely' | 'not';
 
-/** What a call is decided by: an estimate, its interval and W, all on the scale of the analysis. */
+/** What a call is decided by: an interval and W, all on the scale of the analysis. */
 export interface CallQuestion {
-  estimate: number;
   ci: [number, number] | null;
-  se: number | null;
   pFamily: number | null;
   worthHaving: number;
   alpha: number;
@@ -52,9 +50,7 @@ export interface CallContext {
 
 export function callOf(term: TermEstimate, context: CallContext): Call {
   return decideCall({
-    estimate: term.effect,
     ci: term.ci,
-    se: term.se,
     pFamily: term.pFamily,
     worthHaving: context.worthHaving,
     alpha: context.analysis.basis.alpha,

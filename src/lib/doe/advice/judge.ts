@@ -138,9 +138,7 @@ function judgeSteadiness({ input, spec }: ResultInput): Fact[] {
   const worthHaving = spec.steadierWorthHaving ?? 1.5;
   return analysis.terms.flatMap((term): Fact[] => {
     const { call, sure } = decideCall({
-      estimate: term.effect,
       ci: term.ci,
-      se: term.se,
       pFamily: term.pFamily,
       worthHaving: Math.log(worthHaving),
       alpha: analysis.basis.alpha,

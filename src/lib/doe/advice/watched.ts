@@ -11,9 +11,7 @@ export function listWatched(results: readonly ResultInput[], models: readonly Re
     const inUnit = (value: number) => scale.changeInUnit(value, center);
     return analysis.terms.flatMap((term): Fact[] => {
       const { sure } = decideCall({
-        estimate: term.effect,
         ci: term.ci,
-        se: term.se,
         pFamily: term.pFamily,
         worthHaving: scale.worthHaving(spec, center) ?? 0,
         alpha: analysis.basis.alpha,
