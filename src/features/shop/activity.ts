@@ -1,0 +1,48 @@
+import type { Translate } from '../../i18n/translator.ts';
+
+/** Every kind of line that has its words in `shop:kind`. A test finds a kind that is written somewhere and missing here. */
+export const activityKinds = [
+  'person.added',
+  'person.changed',
+  'person.roles-changed',
+  'person.mail-changed',
+  'person.deactivated',
+  'person.activated',
+  'person.invited',
+  'person.exported',
+  'person.erased',
+  'people.imported',
+  'shop.changed',
+  'shop.set-up',
+  'shop.texts-checked',
+  'consent.asked',
+  'consent.given',
+  'consent.declined',
+  'consent.withdrawn',
+  'consent.reset',
+  'invitation.accepted',
+  'password.changed',
+  'password.reset',
+  'profile.changed',
+  'session.started',
+  'session.ended',
+  'sessions.ended',
+  'token.added',
+  'token.ended',
+] as const;
+export type ActivityKind = (typeof activityKinds)[number];
+
+function isKnown(kind: string): kind is ActivityKind {
+  return activityKinds.some((known) => known === kind);
+}
+
+/** What happened, in words. A kind written by a newer version is shown by its code, so that no line is hidden. */
+export function describeKind(kind: string, t: Translate): string {
+  return isKnown(kind) ? t(`shop:kind.${kind}`) : kind;
+}
+
+/** The figures of a line without the version of their layout; nothing where there are none. */
+export function describeDetails(details: string): string {
+  const { v: _, ...figures } = JSON.parse(details) as Record<string, unknown>;
+  return Object.keys(figures).length === 0 ? '' : JSON.stringify(figures);
+}
