@@ -5,7 +5,7 @@ import { type Viewer, viewerMay } from '../server/auth/viewer.ts';
 
 interface Place {
   href: string;
-  key: 'people' | 'shop';
+  key: 'people' | 'shop' | 'activity';
   icon: IconName;
   /** Any of these opens the page. */
   permissions: Permission[];
@@ -15,6 +15,7 @@ interface Place {
 const places: Place[] = [
   { href: '/people', key: 'people', icon: 'people', permissions: ['people.manage', 'operator.invite'] },
   { href: '/shop', key: 'shop', icon: 'settings', permissions: ['shop.manage'] },
+  { href: '/activity', key: 'activity', icon: 'clock', permissions: ['activity.read'] },
 ];
 
 /** The menu for this person, with the page they are on marked. */

@@ -19,7 +19,7 @@ export function ConsentMark({
   const hasPhone = person.phoneShown !== null;
   return (
     <span className="inline-flex items-center gap-2">
-      <Icon name={hasPhone ? icons[person.consent] : 'paper'} size={20} />
+      <Icon name={hasPhone ? icons[person.consent] : 'minus'} size={20} />
       {hasPhone ? t(`consent.${person.consent}`) : t('noPhone')}
     </span>
   );

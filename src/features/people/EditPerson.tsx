@@ -46,7 +46,7 @@ function PersonParts({ first, reader, language, timeZone }: Omit<Props, 'words'>
   const parts = { person, reader, onChange: takeOver, say: show };
 
   return (
-    <div className="grid gap-12">
+    <div className="grid max-w-180 gap-8">
       {!person.erased && <PersonSheet {...parts} />}
       {!person.erased && (
         <PersonTexts {...parts} history={consentHistory} language={language} timeZone={timeZone} />

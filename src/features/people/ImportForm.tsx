@@ -6,8 +6,10 @@ import { IslandRoot } from '../../components/island/IslandRoot.tsx';
 import { useSubmission } from '../../components/island/use-submission.ts';
 import { Button } from '../../components/ui/Button.tsx';
 import { ButtonLink } from '../../components/ui/ButtonLink.tsx';
+import { buttonClass } from '../../components/ui/button-class.ts';
 import { Callout } from '../../components/ui/Callout.tsx';
 import { Field } from '../../components/ui/Field.tsx';
+import { Icon } from '../../components/ui/Icon.tsx';
 import { formatsFor } from '../../i18n/format.ts';
 import type { Language } from '../../i18n/languages.ts';
 import { countCsvRows } from './csv.ts';
@@ -36,12 +38,14 @@ function ImportSteps({ language }: Pick<Props, 'language'>) {
   const input = useRef<HTMLInputElement>(null);
   const [fileFault, setFileFault] = useState<string | null>(null);
   const [preview, setPreview] = useState<ImportPreview | null>(null);
+  const [fileName, setFileName] = useState<string | null>(null);
   const [isRepeat, setRepeat] = useState(false);
   const { busy, fault, submit, clearFault } = useSubmission((problem: ServerProblem) =>
     setRepeat(problem.code === 'already-there'),
   );
 
   function forget(): void {
+    setFileName(input.current?.files?.[0]?.name ?? null);
     setPreview(null);
     setFileFault(null);
     setRepeat(false);
@@ -89,14 +93,23 @@ function ImportSteps({ language }: Pick<Props, 'language'>) {
     <form className="sheet grid gap-6" onSubmit={check} noValidate>
       <Field id="file" label={t('import.file')} help={t('import.fileHelp')} error={fileFault}>
         {(wiring) => (
-          <input
-            {...wiring}
-            ref={input}
-            type="file"
-            accept=".csv,text/csv"
-            className="input"
-            onChange={forget}
-          />
+          <div className="flex flex-wrap items-center gap-3">
+            <label
+              className={`${buttonClass({})} has-focus-visible:outline-3 has-focus-visible:outline-petrol`}
+            >
+              <Icon name="paper" />
+              {t('import.choose')}
+              <input
+                {...wiring}
+                ref={input}
+                type="file"
+                accept=".csv,text/csv"
+                className="sr-only"
+                onChange={forget}
+              />
+            </label>
+            <span>{fileName ?? t('import.noneChosen')}</span>
+          </div>
         )}
       </Field>
       {preview && <ImportFindings preview={preview} language={language} />}

@@ -48,7 +48,7 @@ function NewPersonForm({ shopLanguage, reach }: Pick<Props, 'shopLanguage' | 're
     });
 
   return (
-    <form noValidate className="sheet grid gap-6" onSubmit={form.handleSubmit(save)}>
+    <form noValidate className="sheet grid max-w-180 gap-6" onSubmit={form.handleSubmit(save)}>
       <PersonFields form={form} reach={reach} phoneShown={null} phoneHidden={false} />
       <Checkbox
         id="invite"

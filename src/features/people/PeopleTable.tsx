@@ -39,16 +39,20 @@ export function PeopleTable({ people, list, sortHref, t }: Props) {
       header: t('people:column.name'),
       rowHeader: true,
       sortHref: sortHref('name'),
-      cell: (person) => <a href={`/people/${person.id}`}>{person.name}</a>,
+      cell: (person) => (
+        <a className="whitespace-nowrap" href={`/people/${person.id}`}>
+          {person.name}
+        </a>
+      ),
     },
     {
       key: 'roles',
       header: t('people:column.roles'),
       cell: (person) => (
-        <>
+        <span className="whitespace-nowrap">
           {describeRole(person, t)}
           {person.safetyPerson && <span className="block text-steel">{t('people:safety')}</span>}
-        </>
+        </span>
       ),
     },
     {
@@ -56,12 +60,8 @@ export function PeopleTable({ people, list, sortHref, t }: Props) {
       header: t('people:column.texts'),
       sortHref: sortHref('consent'),
       cell: (person) => (
-        <span className="inline-flex items-baseline gap-2">
-          <Icon
-            name={person.phoneShown === null ? 'paper' : icons[person.consent]}
-            size={16}
-            className="self-center"
-          />
+        <span className="inline-flex items-center gap-2 whitespace-nowrap">
+          <Icon name={person.phoneShown === null ? 'minus' : icons[person.consent]} size={16} />
           {describeTexts(person, t)}
         </span>
       ),
@@ -80,7 +80,12 @@ export function PeopleTable({ people, list, sortHref, t }: Props) {
     {
       key: 'hours',
       header: t('people:column.hours'),
-      cell: (person) => describeHours(person.workSpans, t),
+      cell: (person) =>
+        describeHours(person.workSpans, t).map((line) => (
+          <span key={line} className="block whitespace-nowrap">
+            {line}
+          </span>
+        )),
     },
   ];
   return (

@@ -4,6 +4,7 @@ import { Button } from '../../components/ui/Button.tsx';
 import { Choice } from '../../components/ui/Choice.tsx';
 import { TextInput } from '../../components/ui/TextInput.tsx';
 import type { PersonFormValues } from './person-form.ts';
+import { parseWallTime } from './work-hours.ts';
 
 const days = ['1', '2', '3', '4', '5', '6', '7'] as const;
 
@@ -36,6 +37,12 @@ export function WorkHoursField({ control }: Props) {
   );
 }
 
+/** Whether a shift ends on the day after it began. */
+function isOvernight(from: string, to: string): boolean {
+  const [start, end] = [parseWallTime(from), parseWallTime(to)];
+  return start !== null && end !== null && end <= start;
+}
+
 function WorkSpanFields({
   control,
   place,
@@ -57,17 +64,21 @@ function WorkSpanFields({
         error={wrong?.days?.message}
         {...control.register(`${name}.days`)}
       />
-      <div className="flex flex-wrap items-end gap-4">
+      <div className="flex flex-wrap items-start gap-4">
         <TextInput
           id={`${id}-from`}
-          type="time"
+          inputMode="numeric"
+          autoComplete="off"
+          maxLength={5}
           label={t('form.from')}
           error={wrong?.from?.message}
           {...control.register(`${name}.from`)}
         />
         <TextInput
           id={`${id}-to`}
-          type="time"
+          inputMode="numeric"
+          autoComplete="off"
+          maxLength={5}
           label={t('form.to')}
           error={wrong?.to?.message}
           {...control.register(`${name}.to`)}
@@ -76,7 +87,7 @@ function WorkSpanFields({
           {t('form.removeHours')}
         </Button>
       </div>
-      {from !== '' && to !== '' && to <= from && <p className="text-steel">{t('form.overnight')}</p>}
+      {isOvernight(from, to) && <p className="text-steel">{t('form.overnight')}</p>}
     </div>
   );
 }

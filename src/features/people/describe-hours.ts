@@ -12,13 +12,11 @@ function describeDays(days: readonly number[], t: Translate): string {
   return days.map(nameOf).join(', ');
 }
 
-/** Work hours in one line for each shift, such as "Mon–Fri 06:00–14:00". */
-export function describeHours(spans: readonly WorkSpan[], t: Translate): string {
-  if (spans.length === 0) return t('people:noHours');
-  return spans
-    .map(({ days, fromMinute, toMinute }) => {
-      const times = `${formatWallTime(fromMinute)}\u2013${formatWallTime(toMinute % 1440)}`;
-      return `${describeDays(days, t)} ${times}`;
-    })
-    .join(' · ');
+/** Work hours, a line for each shift, such as "Mon–Fri 06:00–14:00". */
+export function describeHours(spans: readonly WorkSpan[], t: Translate): string[] {
+  if (spans.length === 0) return [t('people:noHours')];
+  return spans.map(({ days, fromMinute, toMinute }) => {
+    const times = `${formatWallTime(fromMinute)}\u2013${formatWallTime(toMinute % 1440)}`;
+    return `${describeDays(days, t)} ${times}`;
+  });
 }

@@ -7,7 +7,7 @@ export type ImportColumn = (typeof importColumns)[number];
 
 /** What a first row may call its columns, folded: whoever keeps the list keeps it in their own language. */
 const columnWords: Readonly<Record<ImportColumn, readonly string[]>> = {
-  name: ['name', 'full name', 'nombre', 'imie i nazwisko', 'nazwa', 'ten', 'ho ten', 'ho va ten'],
+  name: ['name', 'full name', 'nombre', 'imie i nazwisko', 'nazwisko', 'nazwa', 'ten', 'ho ten', 'ho va ten'],
   phone: [
     'phone',
     'mobile',

@@ -1,7 +1,9 @@
 import { describe, expect, it } from 'vitest';
+import { languages } from '../../i18n/languages.ts';
+import { translatorFor } from '../../i18n/translator.ts';
 import { countCsvRows, readCsv, withoutFormulaGuard, writeCsv } from './csv.ts';
 import { readHeadings, readImport } from './import.ts';
-import { readDays, readLanguage, readRoles } from './import-columns.ts';
+import { importColumns, readDays, readHeading, readLanguage, readRoles } from './import-columns.ts';
 
 const shop = { language: 'en', textNumber: '+12025550100' } as const;
 const limit = { rows: 5_000 };
@@ -111,6 +113,14 @@ describe('a file of people', () => {
     const text = `name\n${'Ana\n'.repeat(100_000)}`;
     expect(readCsv(text, limit)).toHaveLength(5_001);
     expect(countCsvRows(text)).toBe(100_001);
+  });
+});
+
+describe('the headings that the page names', () => {
+  it.each(languages)('are all read in %s', (language) => {
+    const t = translatorFor(language);
+    const named = importColumns.map((column) => t(`people:import.heading.${column}`));
+    expect(named.map(readHeading)).toEqual([...importColumns]);
   });
 });
 

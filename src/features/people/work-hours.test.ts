@@ -7,7 +7,12 @@ describe('times of day', () => {
     ['6:05', 365],
     ['23:59', 1439],
     ['24:00', null],
-    ['6', null],
+    ['6', 360],
+    ['0600', 360],
+    ['630', 390],
+    ['22.30', 1350],
+    ['6:5', null],
+    ['6 pm', null],
     ['', null],
   ])('"%s" reads as %s', (text, minute) => {
     expect(parseWallTime(text)).toBe(minute);

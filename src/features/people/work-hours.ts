@@ -36,10 +36,10 @@ export function storeWorkHours(spans: readonly WorkSpan[]): string {
   return JSON.stringify({ v: 1, spans });
 }
 
-/** `06:00` as minutes after midnight; null for anything that is no time of day. */
+/** A time of day as people type it (`06:00`, `6.30`, `0600`, `6`) in minutes after midnight; null for anything else. */
 export function parseWallTime(text: string): number | null {
-  const found = /^([01]?\d|2[0-3]):([0-5]\d)$/.exec(text.trim());
-  return found ? Number(found[1]) * 60 + Number(found[2]) : null;
+  const found = /^([01]?\d|2[0-3])(?:[:.]?([0-5]\d))?$/.exec(text.trim());
+  return found ? Number(found[1]) * 60 + Number(found[2] ?? 0) : null;
 }
 
 /** Minutes after midnight as `06:00`. */

@@ -82,7 +82,7 @@ function ShopRules({ first, timeZones }: Pick<Props, 'first' | 'timeZones'>) {
     );
 
   return (
-    <form noValidate className="grid gap-8" onSubmit={save(shop.revision)}>
+    <form noValidate className="grid max-w-180 gap-8" onSubmit={save(shop.revision)}>
       <ShopFields form={form} timeZones={timeZones} />
       <TextFields form={form} />
       <ReviewFields form={form} asksStatement={planReview === 'never'} />

@@ -31,14 +31,18 @@ export function TextFields({ form }: ShopPart) {
         <div className="flex flex-wrap gap-4">
           <TextInput
             id="quietFromMinute"
-            type="time"
+            inputMode="numeric"
+            autoComplete="off"
+            maxLength={5}
             label={t('quietFrom')}
             error={errors.quietFromMinute?.message}
             {...register('quietFromMinute')}
           />
           <TextInput
             id="quietToMinute"
-            type="time"
+            inputMode="numeric"
+            autoComplete="off"
+            maxLength={5}
             label={t('quietTo')}
             error={errors.quietToMinute?.message}
             {...register('quietToMinute')}

@@ -4,6 +4,7 @@ import { useTranslation } from 'react-i18next';
 import { IslandRoot } from '../../components/island/IslandRoot.tsx';
 import { useSubmission } from '../../components/island/use-submission.ts';
 import { Button } from '../../components/ui/Button.tsx';
+import { ButtonLink } from '../../components/ui/ButtonLink.tsx';
 import { Callout } from '../../components/ui/Callout.tsx';
 import { formatsFor } from '../../i18n/format.ts';
 import type { Language } from '../../i18n/languages.ts';
@@ -47,7 +48,7 @@ function CheckParts({ first, language, timeZone }: Omit<Props, 'words'>) {
     submit(async () => client.setQueryData(options.queryKey, await startTextsCheckCall()) && undefined);
 
   return (
-    <div className="grid gap-8">
+    <div className="grid max-w-180 gap-8">
       <section className="sheet grid gap-6" aria-labelledby="set-up">
         <h2 id="set-up">{t('check.setUp')}</h2>
         <CopyLine label={t('check.sender')} value={check.sender} missing={t('check.noSender')} />
@@ -56,7 +57,16 @@ function CheckParts({ first, language, timeZone }: Omit<Props, 'words'>) {
       <section className="sheet grid gap-6" aria-labelledby="check">
         <h2 id="check">{t('check.title')}</h2>
         {stop ? (
-          <Callout tone="caution">{t(`check.${stop}`)}</Callout>
+          <Callout
+            tone="caution"
+            actions={
+              stop === 'noPhone' ? (
+                <ButtonLink href={`/people/${check.personId}`}>{t('check.toSelf')}</ButtonLink>
+              ) : undefined
+            }
+          >
+            {t(`check.${stop}`)}
+          </Callout>
         ) : (
           <p>
             {t('check.to', { phone: check.phone ?? '' })}{' '}

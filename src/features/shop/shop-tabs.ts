@@ -6,13 +6,12 @@ interface ShopTab {
   current: boolean;
 }
 
-/** The pages about the shop. The log is the engineer's too, who may not open the others. */
+/** The pages about the shop. */
 export function shopTabs(path: string, t: Translate): ShopTab[] {
   const places = [
     { href: '/shop', label: t('shop:links.rules') },
     { href: '/shop/texts-check', label: t('shop:links.textsCheck') },
     { href: '/shop/poster', label: t('shop:links.poster') },
-    { href: '/activity', label: t('shop:links.activity') },
   ];
   return places.map((place) => ({ ...place, current: place.href === path }));
 }

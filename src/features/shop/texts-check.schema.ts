@@ -27,7 +27,9 @@ export type CheckFinding = z.output<typeof findingSchema>;
 export const textsCheckSchema = z.object({
   sender: z.string().nullable(),
   webhook: z.string(),
-  /** The admin's own number; null without one. */
+  /** The admin who checks. */
+  personId: z.string(),
+  /** Their own number; null without one. */
   phone: z.string().nullable(),
   consent: z.enum(['unasked', 'asked', 'agreed', 'opted out']),
   /** When the last check went out; null before the first. */

@@ -30,6 +30,7 @@ export async function readTextsCheck(scope: ShopScope): Promise<TextsCheck> {
   return {
     sender: (await findShop(scope)).textNumber,
     webhook: new URL(inboundWebhookPath, config().appUrl).href,
+    personId: self.id,
     phone: self.phone,
     consent: self.consent,
     startedAt: text?.createdAt ?? null,
