@@ -1,6 +1,8 @@
 import { config } from '../server/env.ts';
+import { backup } from './backup.ts';
 import { beat } from './beat.ts';
 import { catchUp } from './catch-up-texts.ts';
+import { checkLog } from './check-log.ts';
 import { mailGateway, textGateway } from './gateways.ts';
 import type { Job } from './loop.ts';
 import { readInbox } from './read-inbox.ts';
@@ -17,4 +19,6 @@ export const jobs: Job[] = [
   settleUnsure(textGateway),
   catchUp(textGateway),
   retention,
+  checkLog,
+  backup,
 ];

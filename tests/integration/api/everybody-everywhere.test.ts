@@ -1,0 +1,160 @@
+import { createHash } from 'node:crypto';
+import { beforeAll, describe, expect, it } from 'vitest';
+import { permissions, type Role, roles, rolesMay } from '../../../src/server/auth/permissions.ts';
+import type { Viewer } from '../../../src/server/auth/viewer.ts';
+import { database } from '../../../src/server/db/connection.ts';
+import type { ShopScope } from '../../../src/server/db/scope.ts';
+import type { Access } from '../../../src/server/http/define-endpoint.ts';
+import { newId } from '../../../src/server/ids.ts';
+import { buildPerson, buildShop } from '../../builders/shop.ts';
+import { type Attempt, attempt, endpoints } from './endpoints.ts';
+
+const json = (value: unknown) => ({ type: 'application/json', text: JSON.stringify(value) });
+
+/** A body that each endpoint would take, so that nothing but the permission or the foreign id can be why it says no. */
+const bodies: Record<string, Attempt['body']> = {
+  'PATCH /api/people/[id]': json({ revision: 1, name: 'Changed by a stranger' }),
+  'POST /api/people/[id]/deactivate': json({ revision: 1 }),
+  'POST /api/people/[id]/activate': json({ revision: 1 }),
+  'POST /api/people/[id]/erase': json({ revision: 1 }),
+  'POST /api/people/[id]/invite': json({}),
+};
+
+const needsPerson = (access: Access) => access !== 'public' && access !== 'signed';
+
+let here: ShopScope;
+let params: Record<string, string>;
+const viewers = new Map<Role, Viewer>();
+let stranger: Viewer;
+
+async function buildViewer(scope: ShopScope, held: Role[]): Promise<Viewer> {
+  const personId = await buildPerson(scope, held, { password_hash: 'x' });
+  return {
+    personId,
+    shopId: scope.shopId,
+    shopName: 'Shop',
+    timeZone: 'UTC',
+    name: 'Somebody',
+    language: 'en',
+    theme: 'auto',
+    roles: held,
+    sessionHandle: newId(),
+  };
+}
+
+/** A fingerprint of everything that is stored, save how often somebody tried. */
+async function readAll(): Promise<string> {
+  const tables: { name: string }[] = await database().raw(
+    "select name from sqlite_master where type = 'table' and name not like 'sqlite_%' order by name",
+  );
+  const rows = [];
+  for (const { name } of tables) if (name !== 'rate_limits') rows.push([name, await database()(name)]);
+  return createHash('sha256').update(JSON.stringify(rows)).digest('hex');
+}
+
+beforeAll(async () => {
+  here = await buildShop();
+  for (const role of roles) viewers.set(role, await buildViewer(here, [role]));
+  stranger = await buildViewer(await buildShop(), [...roles]);
+  const operator = viewers.get('operator')?.personId ?? '';
+  const [handle, tokenId] = [newId(), newId()];
+  await here.db('sessions').insert({
+    id: newId(),
+    shop_id: here.shopId,
+    id_hash: newId(),
+    handle,
+    person_id: operator,
+    expires_at: Number.MAX_SAFE_INTEGER,
+    last_seen_at: 0,
+    device: '',
+    created_at: 0,
+  });
+  await here.db('api_tokens').insert({
+    id: tokenId,
+    shop_id: here.shopId,
+    token_hash: newId(),
+    prefix: 'trywell_ab',
+    name: 'Token',
+    person_id: operator,
+    expires_at: Number.MAX_SAFE_INTEGER,
+    created_at: 0,
+  });
+  params = { handle, id: operator, token: tokenId };
+});
+
+function paramsFor(path: string): Record<string, string> {
+  const id = path.startsWith('/api/me/tokens') ? params['token'] : params['id'];
+  return { id: id ?? '', handle: params['handle'] ?? '' };
+}
+
+const table = endpoints.map((endpoint) => ({ ...endpoint, name: `${endpoint.method} ${endpoint.path}` }));
+
+describe('every endpoint', () => {
+  it('is here: there is something to try', () => {
+    expect(table.length).toBeGreaterThan(20);
+  });
+
+  it.each(table)('$name says who may call it', ({ access }) => {
+    const known: (Access | undefined)[] = [...permissions, 'signed-in', 'public', 'signed'];
+    expect(known.filter((each) => each !== undefined)).toContain(access);
+  });
+});
+
+describe.each(table.filter(({ access }) => access && needsPerson(access)))('$name', (endpoint) => {
+  const { access, name, path } = endpoint;
+  const body = bodies[name] ?? json({});
+
+  it('knows nobody who is not signed in, and changes nothing', async () => {
+    const before = await readAll();
+    const answer = await attempt(endpoint, { viewer: null, params: paramsFor(path), body });
+    expect(answer.status).toBe(401);
+    expect(await readAll()).toBe(before);
+  });
+
+  it.each(roles)('opens to a %s as the table of permissions says', async (role) => {
+    const viewer = viewers.get(role);
+    if (!viewer || !access || access === 'public' || access === 'signed') throw new Error('no viewer');
+    // An id that is nobody's: who may call gets as far as that.
+    const nowhere = { id: newId(), handle: newId() };
+    const before = await readAll();
+    const unread = { type: 'application/json', text: '{"no such field":true}' };
+    const answer = await attempt(endpoint, { viewer, params: nowhere, body: bodies[name] ?? unread });
+    const may = access === 'signed-in' || rolesMay([role], access);
+    expect(answer.status === 403).toBe(!may);
+    expect(answer.status).not.toBe(401);
+    expect(answer.status).toBeLessThan(500);
+    if (!answer.ok) expect(await readAll()).toBe(before);
+  });
+});
+
+describe.each(table.filter(({ access, path }) => access && needsPerson(access) && path.includes('[')))(
+  '$name of another shop',
+  (endpoint) => {
+    it('is not found by that shop’s admin, and nothing changes', async () => {
+      const { name, path, method } = endpoint;
+      const needsBody = !['GET', 'DELETE'].includes(method);
+      if (needsBody) expect(Object.keys(bodies)).toContain(name);
+      const before = await readAll();
+      const answer = await attempt(endpoint, {
+        viewer: stranger,
+        params: paramsFor(path),
+        body: bodies[name],
+      });
+      expect(answer.status).toBe(404);
+      expect(await readAll()).toBe(before);
+    });
+  },
+);
+
+describe.each(table.filter(({ access }) => access === 'signed'))('$name', (endpoint) => {
+  it('refuses a call without the service’s signature', async () => {
+    const before = await readAll();
+    const body = {
+      type: 'application/x-www-form-urlencoded',
+      text: 'From=%2B1&To=%2B2&Body=hi&MessageSid=SM1',
+    };
+    const answer = await attempt(endpoint, { viewer: null, body });
+    expect(answer.status).toBe(403);
+    expect(await readAll()).toBe(before);
+  });
+});
