@@ -1,0 +1,126 @@
+import { readdirSync } from 'node:fs';
+import { fileURLToPath } from 'node:url';
+import type { Browser } from 'playwright-core';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { languages } from '../../src/i18n/languages.ts';
+import { findAccessFaults, launchBrowser, openPage, takeShot, type WatchedPage } from '../setup/browser.ts';
+import { type RunningApp, startApp } from '../setup/running-app.ts';
+import { signIn } from '../setup/sign-in.ts';
+
+/** Who opens the page, and at which address; `:personId` stands for somebody of the demo shop. */
+interface Visit {
+  file: string;
+  path: string;
+  as: 'nobody' | 'admin';
+  /** The status to expect where it is not 200. */
+  status?: number;
+}
+
+const visits: Visit[] = [
+  { file: 'index.astro', path: '/', as: 'nobody' },
+  { file: '404.astro', path: '/no/such/page', as: 'nobody', status: 404 },
+  { file: 'refused.astro', path: '/refused', as: 'admin', status: 404 },
+  { file: 'pieces.astro', path: '/pieces', as: 'nobody' },
+  { file: 'sign-in.astro', path: '/sign-in', as: 'nobody' },
+  { file: 'reset/index.astro', path: '/reset', as: 'nobody' },
+  { file: 'reset/[token].astro', path: '/reset/a-link-that-never-was', as: 'nobody', status: 410 },
+  { file: 'invite/[token].astro', path: '/invite/a-link-that-never-was', as: 'nobody', status: 410 },
+  { file: 'setup/[token].astro', path: '/setup/a-link-that-never-was', as: 'nobody', status: 410 },
+  { file: 'me.astro', path: '/me', as: 'admin' },
+  { file: 'people/index.astro', path: '/people', as: 'admin' },
+  { file: 'people/new.astro', path: '/people/new', as: 'admin' },
+  { file: 'people/[id].astro', path: '/people/:personId', as: 'admin' },
+  { file: 'people/import.astro', path: '/people/import', as: 'admin' },
+  { file: 'shop/index.astro', path: '/shop', as: 'admin' },
+  { file: 'shop/texts-check.astro', path: '/shop/texts-check', as: 'admin' },
+  { file: 'shop/poster.astro', path: '/shop/poster', as: 'admin' },
+  { file: 'activity.astro', path: '/activity', as: 'admin' },
+];
+
+/** Pages with no look of their own: one only answers a form, one shows when the product itself fails. */
+const unseen = ['sign-out.astro', '500.astro'];
+
+const pagesFolder = fileURLToPath(new URL('../../src/pages/', import.meta.url));
+const views = [
+  { width: 1280, colorScheme: 'light' },
+  { width: 1280, colorScheme: 'dark' },
+  { width: 360, colorScheme: 'dark' },
+  { width: 360, colorScheme: 'light' },
+] as const;
+
+let running: RunningApp;
+let browser: Browser;
+let visitors: Record<Visit['as'], WatchedPage>;
+beforeAll(async () => {
+  running = await startApp({ standIns: true });
+  browser = await launchBrowser();
+  visitors = { nobody: await openPage(browser), admin: await openPage(browser) };
+  await signIn(visitors.admin.page, running.url, 'admin');
+});
+afterAll(async () => {
+  await browser?.close();
+  await running?.stop();
+});
+
+/** Opens the page as its visitor and answers the status. */
+async function open(visit: Visit): Promise<number | undefined> {
+  const { page } = visitors[visit.as];
+  let path = visit.path;
+  if (path.includes(':personId')) {
+    await page.goto(`${running.url}/people`);
+    path = (await page.locator('a[href^="/people/0"]').first().getAttribute('href')) ?? path;
+  }
+  const answer = await page.goto(`${running.url}${path}`, { waitUntil: 'networkidle' });
+  return answer?.status();
+}
+
+describe('every page', () => {
+  it('is visited below', () => {
+    const files = readdirSync(pagesFolder, { recursive: true, encoding: 'utf8' }).filter((file) =>
+      file.endsWith('.astro'),
+    );
+    expect(files.sort()).toEqual([...unseen, ...visits.map((visit) => visit.file)].sort());
+  });
+
+  it.each(visits)('$path is open to everybody who sees, hears or only uses keys', async (visit) => {
+    const { page, complaints } = visitors[visit.as];
+    expect(await open(visit)).toBe(visit.status ?? 200);
+    for (const { width, colorScheme } of views) {
+      await page.emulateMedia({ colorScheme });
+      await page.setViewportSize({ width, height: 800 });
+      expect(await findAccessFaults(page), `${width} px, ${colorScheme}`).toEqual([]);
+      const sticksOut = await page.evaluate(
+        () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
+      );
+      expect(sticksOut, `${width} px`).toBeLessThanOrEqual(0);
+      await takeShot(page, `${visit.file.replace(/\W+/g, '-')}-${width}-${colorScheme}`);
+    }
+    expect(complaints.splice(0)).toEqual([]);
+  });
+
+  it.each(languages)('shows in %s without a complaint', async (language) => {
+    const { page, complaints } = visitors.nobody;
+    await page.context().addCookies([{ name: 'language', value: language, url: running.url }]);
+    for (const visit of visits.filter(({ as, file }) => as === 'nobody' && file !== 'pieces.astro')) {
+      await open(visit);
+      expect(await page.locator('html').getAttribute('lang')).toBe(language);
+      expect(complaints.splice(0)).toEqual([]);
+    }
+  });
+
+  it('switches the language of a person who is signed in, everywhere and for good', async () => {
+    const { page, complaints } = visitors.admin;
+    for (const language of [...languages].reverse()) {
+      await page.goto(`${running.url}/people`);
+      await page.locator('.head-menu summary').first().click();
+      await page.locator(`button[name="language"][value="${language}"]`).click();
+      await page.waitForLoadState('networkidle');
+      for (const visit of visits.filter(({ as }) => as === 'admin')) {
+        await open(visit);
+        expect(await page.locator('html').getAttribute('lang')).toBe(language);
+        expect(complaints.splice(0)).toEqual([]);
+        await takeShot(page, `${visit.file.replace(/\W+/g, '-')}-${language}`);
+      }
+    }
+  });
+});
