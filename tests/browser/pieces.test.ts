@@ -16,7 +16,7 @@ const widths = [
 function findSmallTargets(page: Page): Promise<string[]> {
   return page.evaluate(() => {
     const controls = document.querySelectorAll<HTMLElement>(
-      '.button, .input, .choice, .menu-item, .frame-nav-link, .section-tab, .step-inside, .table-sort, .head-menu > summary',
+      '.button, .input, .choice, .menu-item, .frame-nav-link, .section-tab, .step-inside, .table-sort, .head-menu > summary, .disclosure > summary, .slider-input',
     );
     return Array.from(controls)
       .filter((control) => control.checkVisibility() && control.getBoundingClientRect().height < 47.5)
@@ -24,11 +24,18 @@ function findSmallTargets(page: Page): Promise<string[]> {
   });
 }
 
-describe.each(['light', 'dark'])('the pieces in the %s theme', (theme) => {
+const sheets = [
+  { path: '/pieces', theme: 'light' },
+  { path: '/pieces', theme: 'dark' },
+  { path: '/pieces/question', theme: 'light' },
+  { path: '/pieces/question', theme: 'dark' },
+];
+
+describe.each(sheets)('$path in the $theme theme', ({ path, theme }) => {
   let opened: WatchedPage;
   beforeAll(async () => {
     opened = await openPage(at.browser);
-    await opened.page.goto(`${at.running.url}/pieces?theme=${theme}`, { waitUntil: 'networkidle' });
+    await opened.page.goto(`${at.running.url}${path}?theme=${theme}`, { waitUntil: 'networkidle' });
     await opened.page.evaluate(() => document.fonts.ready);
   });
   afterAll(() => opened.close());
@@ -41,7 +48,7 @@ describe.each(['light', 'dark'])('the pieces in the %s theme', (theme) => {
   it.each(widths)('have no fault at $width px', async (viewport) => {
     const { page } = opened;
     await page.setViewportSize(viewport);
-    await takeShot(page, `pieces-${viewport.width}-${theme}`);
+    await takeShot(page, `${path.slice(1).replace('/', '-')}-${viewport.width}-${theme}`);
     expect(await findAccessFaults(page)).toEqual([]);
     expect(await findSmallTargets(page)).toEqual([]);
     expect(
@@ -163,7 +170,7 @@ describe('for real', () => {
       },
     });
     try {
-      for (const path of ['/pieces', '/pieces/paper']) {
+      for (const path of ['/pieces', '/pieces/question', '/pieces/paper']) {
         expect((await fetch(`${live.url}${path}`)).status).toBe(404);
         expect((await fetch(`${at.running.url}${path}`)).status).toBe(200);
       }

@@ -5,7 +5,7 @@ import { Button } from './Button.tsx';
 import { ButtonLink } from './ButtonLink.tsx';
 
 function renderInForm(button: React.ReactNode) {
-  const send = vi.fn((event: React.FormEvent) => event.preventDefault());
+  const send = vi.fn((event: { preventDefault(): void }) => event.preventDefault());
   render(<form onSubmit={send}>{button}</form>);
   return send;
 }

@@ -1,4 +1,5 @@
 import { useState } from 'react';
+import { ActionMenu } from '../ActionMenu.tsx';
 import { Button } from '../Button.tsx';
 import { ConfirmDialog } from '../ConfirmDialog.tsx';
 import { Dialog } from '../Dialog.tsx';
@@ -20,6 +21,18 @@ export function MovingPieces() {
         <Button onClick={() => setShown('confirm')}>{words.openConfirm}</Button>
         <Button onClick={() => show('good', words.savedToast)}>{words.toastGood}</Button>
         <Button onClick={() => show('caution', words.lateToast)}>{words.toastCaution}</Button>
+        <ActionMenu
+          label={words.more}
+          actions={[
+            { key: 'skip', label: words.skipRun, icon: 'skip', onPick: () => show('info', words.skipRun) },
+            {
+              key: 'repeat',
+              label: words.repeatRun,
+              icon: 'repeat',
+              onPick: () => show('info', words.repeatRun),
+            },
+          ]}
+        />
       </div>
       <Dialog
         open={shown === 'dialog'}

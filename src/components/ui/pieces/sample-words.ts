@@ -120,7 +120,8 @@ export const words = {
     { title: 'Whom to call', words: 'Dana, ext 12 by day. Lee, ext 14 at night.' },
   ],
   cardFoot: 'Hot jaws: guard closed. Local rules and the manual come first.',
-  spinning: 'Saving the run',
+  skipRun: 'Skip run 4',
+  repeatRun: 'Make run 4 again',
 } as const;
 
 export const swatches = [
