@@ -29,6 +29,8 @@ const nameRequest = defineMiddleware(async (context, next) => {
   response.headers.set('X-Request-Id', requestId);
   if (response.headers.get('content-type') === 'text/html') {
     response.headers.set('Content-Type', 'text/html; charset=utf-8');
+    // On a shared computer the button "back" must not show the page of whoever signed out.
+    if (context.locals.viewer) response.headers.set('Cache-Control', 'no-store');
   }
   log.info({
     event: 'request',

@@ -142,7 +142,7 @@ describe('a session', () => {
     await visitor.signIn(dana.email, dana.password);
     const old = String(visitor.sessionId);
     expect((await visitor.get('/sign-out')).status).toBe(200);
-    expect((await visitor.get('/me')).status).toBe(200);
+    expect((await visitor.get('/me')).headers.get('cache-control')).toBe('no-store');
     const answer = await visitor.postForm('/sign-out', {});
     expect([answer.status, visitor.sessionId]).toEqual([303, undefined]);
     visitor.setCookie('session', old);
