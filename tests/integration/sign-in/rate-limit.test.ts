@@ -86,6 +86,7 @@ describe('links', () => {
     const refused = await visitor.get('/reset/no-such-link');
     expect(refused.status).toBe(429);
     expect(Number(refused.headers.get('retry-after'))).toBeGreaterThan(0);
+    expect(await refused.text()).toContain('Try again in 1 minute.');
     await passTime(61 * second);
     expect((await visitor.get('/reset/no-such-link')).status).toBe(410);
   });

@@ -4,7 +4,7 @@ import { type RunningApp, startApp } from '../../setup/running-app.ts';
 import { Visitor } from '../../setup/visitor.ts';
 
 const [dana] = demoSignIns;
-const pairs = 60;
+const pairs = 100;
 const warmUp = 5;
 let running: RunningApp;
 beforeAll(async () => {
@@ -31,12 +31,15 @@ describe('the time of a refused sign-in', () => {
     const known: number[] = [];
     const unknown: number[] = [];
     for (let pair = 0; pair < pairs + warmUp; pair += 1) {
-      // In turn, so that a slow spell of the machine falls on both.
-      const one = await timeRefusal(dana.email, `203.0.113.${pair}`);
-      const other = await timeRefusal(`nobody${pair}@harrowlane.example`, `198.51.100.${pair}`);
-      if (pair < warmUp) continue;
-      known.push(one);
-      unknown.push(other);
+      // In turn and each first every other time, so that a slow spell of the machine falls on both.
+      const tries = [
+        { times: known, email: dana.email, network: `203.0.113.${pair}` },
+        { times: unknown, email: `nobody${pair}@harrowlane.example`, network: `198.51.100.${pair}` },
+      ];
+      for (const { times, email, network } of pair % 2 === 0 ? tries : tries.reverse()) {
+        const taken = await timeRefusal(email, network);
+        if (pair >= warmUp) times.push(taken);
+      }
     }
     const difference = Math.abs(median(known) - median(unknown)) / median(unknown);
     expect(difference, `medians ${median(known)} and ${median(unknown)} ms`).toBeLessThan(0.15);
