@@ -24,7 +24,6 @@ export async function installPackages({ mayInstallTools }) {
     limitMilliseconds: 1_200_000,
   });
   if (code === 0 && arePackagesInstalled()) return;
-  console.error(output.slice(-4_000));
   throw new Refusal(explainFailedInstall(output));
 }
 
@@ -70,7 +69,7 @@ function explainFailedInstall(output) {
   if (/\b(EACCES|EPERM|EROFS)\b/.test(output))
     return 'The packages could not be written: check that this account may write to the folder "node_modules".';
   if (/\bENOSPC\b/.test(output)) return 'The packages could not be written: the disk is full.';
-  return 'The packages could not be installed: npm says why above.';
+  return `The packages could not be installed. The last words of npm:\n${output.trimEnd().split('\n').slice(-30).join('\n')}`;
 }
 
 /**

@@ -59,7 +59,7 @@ describe('on a machine with a compiler', () => {
     ['npm error code ENOTFOUND', /could not be fetched/],
     ['npm error code EACCES', /could not be written/],
     ['npm error code ENOSPC', /the disk is full/],
-    ['npm error of another kind', /npm says why above/],
+    ['npm error of another kind', /^npm error of another kind$/],
   ])('"%s" is put into words', async (says, sentence) => {
     expect(await runWithFailingNpm('up', says)).toMatchObject({
       code: 1,
