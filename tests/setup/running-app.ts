@@ -20,14 +20,14 @@ export interface RunningApp {
   stop(): Promise<number | null>;
 }
 
-interface Wishes {
+export interface AppWishes {
   /** Start the text and mail stand-ins too. */
   standIns?: boolean;
   env?: Record<string, string>;
 }
 
 /** Starts the built product on a free port with a data folder of its own, seeded with the demo shop. */
-export async function startApp({ standIns = false, env = {} }: Wishes = {}): Promise<RunningApp> {
+export async function startApp({ standIns = false, env = {} }: AppWishes = {}): Promise<RunningApp> {
   const folder = mkdtempSync(join(tmpdir(), 'trywell-app-'));
   const dataDir = env['DATA_DIR'] ?? join(folder, 'data');
   const clockFile = join(folder, 'clock-offset');

@@ -5,7 +5,7 @@ const problemSchema = z.object({
   status: z.number(),
   detail: z.string().default(''),
   errors: z.array(z.object({ pointer: z.string(), code: z.string(), detail: z.string() })).default([]),
-  present: z.unknown(),
+  present: z.unknown().optional(),
 });
 export type ServerProblem = z.output<typeof problemSchema>;
 
