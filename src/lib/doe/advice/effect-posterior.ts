@@ -1,18 +1,14 @@
-import { EigenvalueDecomposition, Matrix } from 'ml-matrix';
-import { termColumn } from '../analysis/terms.ts';
+import type { Layout } from '../analysis/layout.ts';
 import { dot } from '../linear-algebra/dot.ts';
 import type { BeliefMixture } from './belief.ts';
-import { priorTerms } from './effect-regularities.ts';
 import { weighRatios } from './effect-to-noise.ts';
 import { type LeftOutReading, leaveOneOut } from './leave-one-out.ts';
-import { nuisanceSpace } from './nuisance-space.ts';
+import { priorLayoutOf } from './prior-layout.ts';
 
 export interface PosteriorQuestion {
-  letters: readonly string[];
-  runs: readonly { x: readonly number[]; y: number; center?: boolean }[];
-  weights?: readonly number[] | undefined;
-  /** Columns of which nothing is known beforehand: the constant first, then blocks. */
-  fixed: readonly (readonly number[])[];
+  layout: Layout;
+  /** Readings on the scale of the analysis, one a point. */
+  y: readonly number[];
   /** What was known about the noise of a run before the readings. */
   noise?: { sd: number; df: number } | undefined;
 }
@@ -33,9 +29,6 @@ export interface EffectPosterior {
   leaveOneOut(): LeftOutReading[];
 }
 
-/** Prior variance of the bend, in units of that of an active main effect: half its size. */
-const BEND_VARIANCE = 0.25;
-
 /**
  * Posterior of the coefficients of all terms of up to three letters: normal priors of relative size by effect regularities, their common size and
  * the noise unknown. Size and noise are integrated by marginal likelihood over a grid of their ratio, the noise itself in closed form.
@@ -43,33 +36,14 @@ const BEND_VARIANCE = 0.25;
  * With K the prior covariance of the readings after the fixed columns are projected out, one eigendecomposition of K serves all ratios.
  */
 export function inferEffects(question: PosteriorQuestion): EffectPosterior {
-  const { letters, runs, fixed } = question;
-  const n = runs.length;
-  const prior = [
-    ...priorTerms(letters).map(({ term, variance }) => ({
-      term,
-      variance,
-      column: termColumn(term, letters, runs),
-    })),
-    { term: 'bend', variance: BEND_VARIANCE, column: runs.map((run) => (run.center ? 1 : 0)) },
-  ];
-  const roots = question.weights?.map(Math.sqrt);
-  const rooted = (column: readonly number[]) =>
-    roots ? column.map((value, row) => value * (roots[row] ?? 1)) : column;
-  const offset = runs[0]?.y ?? 0;
-  const readings = rooted(runs.map((run) => run.y - offset));
-  const nuisance = nuisanceSpace(fixed.map(rooted));
-  const y = nuisance.projectOut(readings);
-  const columns = prior.map(({ column }) => nuisance.projectOut(rooted(column)));
-  const variances = prior.map(({ variance }) => variance);
-
-  const { eigenvalues, vectors } = decompose(columns, variances, n);
-  const scores = vectors.map((vector) => dot(vector, y));
-  // Loading of each coefficient on each eigenvector, times its prior variance.
-  const loadings = columns.map((column, index) => {
-    const variance = variances[index] ?? 0;
-    return vectors.map((vector) => variance * dot(vector, column));
-  });
+  const { layout, y } = question;
+  const n = y.length;
+  const { terms, variances, columns, roots, nuisance, eigenvalues, vectors, loadings } =
+    priorLayoutOf(layout);
+  const offset = y[0] ?? 0;
+  const readings = y.map((value, row) => (value - offset) * (roots?.[row] ?? 1));
+  const projected = nuisance.projectOut(readings);
+  const scores = vectors.map((vector) => dot(vector, projected));
 
   const priorDf = question.noise?.df ?? 0;
   // One reading alone says nothing of its noise; the mixture then has no width and no effect either.
@@ -107,35 +81,17 @@ export function inferEffects(question: PosteriorQuestion): EffectPosterior {
   };
 
   return {
-    terms: prior.map(({ term }) => term),
+    terms: [...terms],
     means: loadings.map((loading) => dot(loading, shrunkScores)),
     noiseVariance: mixture.reduce((sum, { noiseVariance, weight }) => sum + weight * noiseVariance, 0),
     difference: (weights) => difference(weights),
     level(weights) {
       // Given the coefficients, the constant is the mean of what they leave of the readings.
       const { row, variance } = nuisance.constant;
-      const shifted = weights.map((weight, term) => weight - dot(row, rooted(prior[term]?.column ?? [])));
+      const shifted = weights.map((weight, term) => weight - dot(row, columns[term] ?? []));
       return difference(shifted, offset + dot(row, readings), variance);
     },
     leaveOneOut: () =>
-      leaveOneOut({ eigenvalues, vectors, scores, mixture, df, priorSs, nuisance, roots, runs }),
-  };
-}
-
-function decompose(columns: readonly (readonly number[])[], variances: readonly number[], n: number) {
-  const kernel = Array.from({ length: n }, () => new Array<number>(n).fill(0));
-  columns.forEach((column, index) => {
-    for (let row = 0; row < n; row++) {
-      const value = (variances[index] ?? 0) * (column[row] ?? 0);
-      const target = kernel[row];
-      if (value === 0 || target === undefined) continue;
-      for (let other = 0; other < n; other++)
-        target[other] = (target[other] ?? 0) + value * (column[other] ?? 0);
-    }
-  });
-  const decomposition = new EigenvalueDecomposition(new Matrix(kernel), { assumeSymmetric: true });
-  return {
-    eigenvalues: decomposition.realEigenvalues.map((value) => Math.max(0, value)),
-    vectors: decomposition.eigenvectorMatrix.transpose().to2DArray(),
+      leaveOneOut({ eigenvalues, vectors, scores, mixture, df, priorSs, nuisance, roots, readings: y }),
   };
 }

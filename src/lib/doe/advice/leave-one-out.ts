@@ -22,10 +22,10 @@ export function leaveOneOut(known: {
   priorSs: number;
   nuisance: NuisanceSpace;
   roots: readonly number[] | undefined;
-  runs: readonly { y: number }[];
+  readings: readonly number[];
 }): LeftOutReading[] {
-  const { eigenvalues, vectors, scores, mixture, df, priorSs, nuisance, roots, runs } = known;
-  return runs.map((run, row) => {
+  const { eigenvalues, vectors, scores, mixture, df, priorSs, nuisance, roots, readings } = known;
+  return readings.map((reading, row) => {
     let p = 0;
     let mean = 0;
     let halfWidth = 0;
@@ -45,7 +45,7 @@ export function leaveOneOut(known: {
       const scale = Math.sqrt(left / (df - 1) / precision) / (roots?.[row] ?? 1);
       const residual = pulled / precision / (roots?.[row] ?? 1);
       p += weight * studentTTwoSided(Math.abs(residual) / scale, df - 1);
-      mean += weight * (run.y - residual);
+      mean += weight * (reading - residual);
       halfWidth += weight * scale;
     }
     const wide = halfWidth * studentTUpperQuantile(0.025, df - 1);

@@ -1,6 +1,5 @@
 import type { Analysis, AnalysisInput } from '../analysis/analysis.ts';
 import { selectMeasuredRuns } from '../analysis/measured-runs.ts';
-import { unitContrasts } from '../analysis/model-layout.ts';
 import { termValue } from '../analysis/terms.ts';
 import type { Brief, ResponseSpec } from '../brief.ts';
 import { type BeliefMixture, beliefOf } from './belief.ts';
@@ -33,13 +32,11 @@ export interface ResultModel {
 /** The model that picks settings: shrunken effects, so that luck in the readings is not mistaken for gain. */
 export function modelResult(brief: Brief, result: ResultInput): ResultModel {
   const { spec, input, analysis } = result;
-  const { runs, weights } = selectMeasuredRuns(input);
-  const letters = input.factors.map((factor) => factor.letter);
+  const { runs, layout } = selectMeasuredRuns(input);
+  const { letters } = layout;
   const posterior = inferEffects({
-    letters,
-    runs,
-    weights,
-    fixed: [runs.map(() => 1), ...unitContrasts(runs.map((run) => run.block))],
+    layout,
+    y: runs.map((run) => run.y),
     noise: expectedNoise(brief, spec, analysis),
   });
   const numbers = input.factors.flatMap((factor, index) => (factor.kind === 'number' ? [index] : []));

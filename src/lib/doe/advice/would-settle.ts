@@ -1,5 +1,5 @@
 import type { Analysis, TermEstimate } from '../analysis/analysis.ts';
-import { studentTUpperQuantile } from '../distributions/student-t.ts';
+import { studentTLimit } from '../analysis/yardstick.ts';
 import type { CallContext } from './calls.ts';
 
 const MOST_RUNS = 200;
@@ -16,7 +16,7 @@ export function runsToSettle(term: TermEstimate, context: CallContext): number |
   const corners = context.analysis.n;
   const df = degreesNow(context.analysis);
   for (let runs = 1; runs <= MOST_RUNS; runs++) {
-    const limit = studentTUpperQuantile(context.analysis.basis.alpha / 2, df + runs);
+    const limit = studentTLimit(df + runs, context.analysis.basis.alpha);
     if (limit * se * Math.sqrt(corners / (corners + runs)) <= room) return runs;
   }
   return null;

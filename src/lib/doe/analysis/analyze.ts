@@ -13,7 +13,7 @@ import type {
 import { estimateCornerContrasts } from './corner-contrasts.ts';
 import { diagnose } from './diagnostics.ts';
 import { pureErrorOf } from './error-spread.ts';
-import { type ErrorFindings, estimateError } from './estimate-error.ts';
+import { type ErrorFindings, estimateError, negligibleSpread } from './estimate-error.ts';
 import { computeLenthLimits } from './lenth.ts';
 import { type MeasuredRun, selectMeasuredRuns } from './measured-runs.ts';
 import { layOutModel, type ModelLayout } from './model-layout.ts';
@@ -34,36 +34,31 @@ export function analyze(input: AnalysisInput): Analysis {
   const alpha = input.alpha ?? 0.05;
   if (!(alpha > 0 && alpha < 1)) throw new RangeError(`analyze: alpha must be between 0 and 1, got ${alpha}`);
   const measured = selectMeasuredRuns(input);
-  const { runs } = measured;
-  const weights = measured.weights ? { weights: measured.weights } : {};
-  const letters = input.factors.map((factor) => factor.letter);
-  const pairs = listTerms(letters, 2);
+  const { runs, layout } = measured;
+  const y = runs.map((run) => run.y);
+  const pairs = listTerms(layout.letters, 2);
   const hasMiddles = runs.some((run) => run.center) && runs.some((run) => !run.center);
-  const layout = layOutModel({
-    letters,
-    runs,
-    ...weights,
+  const model = layOutModel({
+    layout,
     terms: input.terms ?? pairs,
     curvature: input.curvatureTerm ?? hasMiddles,
   });
   const withCurvature =
-    layout.hasCurvature || !hasMiddles
-      ? layout
-      : layOutModel({ letters, runs, ...weights, terms: pairs, curvature: true });
+    model.hasCurvature || !hasMiddles ? model : layOutModel({ layout, terms: pairs, curvature: true });
 
-  const errorTerms = [...new Set([...pairs, ...layout.terms])];
-  const plan = settlePlan(input.errorPlan, decideErrorPlan(letters, runs));
-  const spread = { letters, runs, ...weights, terms: errorTerms };
-  const y = runs.map((run) => run.y);
-  const fit = layout.model.fit(y);
-  const pureError = pureErrorOf(spread);
-  const residual = { df: layout.model.residualDf, ss: layout.model.residualDf > 0 ? fit.residualSs : 0 };
-  const family = Math.max(1, layout.terms.length + (withCurvature.hasCurvature ? 1 : 0));
+  const decided = layout.remember('error plan', () => decideErrorPlan(layout.letters, layout.points));
+  const plan = settlePlan(input.errorPlan, decided);
+  const fit = model.model.fit(y);
+  const pureError = pureErrorOf({ layout, y });
+  const residual = { df: model.model.residualDf, ss: model.model.residualDf > 0 ? fit.residualSs : 0 };
+  const family = Math.max(1, model.terms.length + (withCurvature.hasCurvature ? 1 : 0));
   const findings =
     input.error === 'residual'
       ? residualFindings(residual, family, pureError)
       : estimateError({
-          ...spread,
+          layout,
+          y,
+          terms: [...new Set([...pairs, ...model.terms])],
           plan,
           theory: measured.theory,
           family,
@@ -72,7 +67,7 @@ export function analyze(input: AnalysisInput): Analysis {
 
   const stratumOf = stratumFinder(runs, findings.estimate);
   const curvature = withCurvature.hasCurvature
-    ? estimateCurvature(withCurvature, withCurvature === layout ? fit : withCurvature.model.fit(y), {
+    ? estimateCurvature(withCurvature, withCurvature === model ? fit : withCurvature.model.fit(y), {
         findings,
         stratumOf,
         alpha,
@@ -80,20 +75,19 @@ export function analyze(input: AnalysisInput): Analysis {
     : undefined;
   const table = tabulateVariance({
     layout,
+    model,
     y,
-    weights: measured.weights,
     residual,
     pureError,
-    curvatureSs: layout.hasCurvature ? (curvature?.ss ?? null) : null,
+    curvatureSs: model.hasCurvature ? (curvature?.ss ?? null) : null,
     error: meanSquareOf(findings.estimate),
   });
-  const negligible = 32 * Number.EPSILON * Math.max(...y.map(Math.abs));
-  const diagnostics = diagnose(layout.model, fit, measured.weights, negligible);
-  const contrasts = estimateCornerContrasts(letters, runs);
+  const diagnostics = diagnose(model.model, fit, layout.weights, negligibleSpread({ y }));
+  const contrasts = estimateCornerContrasts({ layout, y });
   const lenth = contrasts && computeLenthLimits(contrasts.effects, alpha);
   const within = spreadWithinRuns(measured.runs.flatMap(({ index }) => input.runs[index] ?? []));
   const predictable = table.totalSs > 0 ? diagnostics.press : null;
-  const interceptYardstick = findings.yardstickFor(null, stratumOf(layout.columns[0] ?? []));
+  const interceptYardstick = findings.yardstickFor(null, stratumOf(model.columns[0] ?? []));
 
   return {
     n: runs.length,
@@ -103,15 +97,15 @@ export function analyze(input: AnalysisInput): Analysis {
       term: 'intercept',
       effect: fit.coefficients[0] ?? 0,
       coefficient: fit.coefficients[0] ?? 0,
-      ss: (fit.coefficients[0] ?? 0) ** 2 / (layout.model.variances[0] ?? 1),
+      ss: (fit.coefficients[0] ?? 0) ** 2 / (model.model.variances[0] ?? 1),
       aliasedWith: [],
-      ...testEstimate(fit.coefficients[0] ?? 0, layout.model.variances[0] ?? 0, interceptYardstick, alpha),
+      ...testEstimate(fit.coefficients[0] ?? 0, model.model.variances[0] ?? 0, interceptYardstick, alpha),
       pFamily: null,
     },
-    terms: layout.terms.map((term) => estimateTerm(term, layout, fit, { findings, stratumOf, alpha })),
-    aliases: layout.aliases,
-    confoundedWithBlocks: layout.confoundedWithBlocks,
-    notEstimable: input.terms === undefined ? [] : layout.notEstimable,
+    terms: model.terms.map((term) => estimateTerm(term, model, fit, { findings, stratumOf, alpha })),
+    aliases: model.aliases,
+    confoundedWithBlocks: model.confoundedWithBlocks,
+    notEstimable: input.terms === undefined ? [] : model.notEstimable,
     errorPlan: plan,
     error: findings.estimate,
     anova: table.rows,
@@ -125,16 +119,18 @@ export function analyze(input: AnalysisInput): Analysis {
     press: diagnostics.press,
     fitted: fit.fitted,
     residuals: fit.residuals,
-    leverage: [...layout.model.leverage],
+    leverage: [...model.model.leverage],
     studentizedInternal: diagnostics.studentizedInternal,
     studentizedExternal: diagnostics.studentizedExternal,
     cooks: diagnostics.cooks,
     basis: {
-      letters,
+      letters: [...layout.letters],
       kinds: input.factors.map((factor) => factor.kind),
-      blockColumns: layout.blockColumns,
-      hasCurvature: layout.hasCurvature,
-      covariance: layout.model.covariance(),
+      blockColumns: model.blockColumns,
+      hasCurvature: model.hasCurvature,
+      covariance: layout.remember(`covariance of ${model.terms.join(' ')} ${model.hasCurvature}`, () =>
+        model.model.covariance(),
+      ),
       alpha,
       limit: interceptYardstick.kind === 'none' ? null : limitOf(interceptYardstick, alpha),
       wholePlotVariance: findings.wholePlotVariance,

@@ -22,20 +22,18 @@ const HIGHEST = 3;
  * residual.
  */
 export function fitBoxCox(input: AnalysisInput): BoxCox | null {
-  const { runs } = selectMeasuredRuns({ ...input, scale: 'raw' });
+  const { runs, layout } = selectMeasuredRuns({ ...input, scale: 'raw' });
   if (runs.some((run) => run.y <= 0)) return null;
-  const letters = input.factors.map((factor) => factor.letter);
   const hasMiddles = runs.some((run) => run.center) && runs.some((run) => !run.center);
-  const layout = layOutModel({
-    letters,
-    runs,
-    terms: input.terms ?? listTerms(letters, 2),
+  const { model, columns } = layOutModel({
+    layout,
+    terms: input.terms ?? listTerms(layout.letters, 2),
     curvature: input.curvatureTerm ?? hasMiddles,
     withAliases: false,
   });
-  const { residualDf } = layout.model;
+  const { residualDf } = model;
   if (residualDf < 1) return null;
-  const space = createColumnSpace(layout.columns);
+  const space = createColumnSpace(columns);
   const logs = runs.map((run) => Math.log(run.y));
   const meanLog = logs.reduce((sum, value) => sum + value, 0) / logs.length;
   // Around the geometric mean, so that neither big readings nor powers near zero cost digits.

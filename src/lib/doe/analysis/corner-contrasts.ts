@@ -1,7 +1,8 @@
-import type { Letter } from '../brief.ts';
 import { isRegularComplete } from '../design/regular-layout.ts';
 import { createColumnSpace } from '../linear-algebra/column-space.ts';
-import type { MeasuredRun } from './measured-runs.ts';
+import { dot } from '../linear-algebra/dot.ts';
+import { indicatorColumns } from '../linear-algebra/indicators.ts';
+import type { Layout } from './layout.ts';
 import { listTerms, termColumn } from './terms.ts';
 
 /** The single-degree contrasts of the corner runs of a regular complete plan. */
@@ -18,19 +19,33 @@ export interface CornerContrasts {
 /**
  * All orthogonal contrasts of the corners that blocks (or whole plots) do not touch, or null when the plan is not regular and complete.
  *
- * Each is half the sum of its column times the readings over half the number of corners, whatever else is in the model.
+ * Each is the sum of its column times the readings over half the number of corners, whatever else is in the model.
  */
 export function estimateCornerContrasts(
-  letters: readonly Letter[],
-  runs: readonly MeasuredRun[],
-  unitOf: (run: MeasuredRun) => number | undefined = (run) => run.block,
+  { layout, y }: { layout: Layout; y: readonly number[] },
+  unit: 'block' | 'wholePlot' = 'block',
 ): CornerContrasts | null {
-  if (!isRegularComplete(runs)) return null;
-  const corners = runs.filter((run) => !run.center);
-  const units = [...new Set(corners.map(unitOf))].map((unit) =>
-    corners.map((run) => (unitOf(run) === unit ? 1 : 0)),
-  );
-  const space = createColumnSpace(units);
+  const found = layout.remember(`corner contrasts in ${unit}`, () => listContrasts(layout, unit));
+  if (found === null) return null;
+  const { terms, columns, rows } = found;
+  const offset = y[rows[0] ?? 0] ?? 0;
+  const readings = rows.map((row) => (y[row] ?? 0) - offset);
+  return {
+    runs: rows.length,
+    terms,
+    effects: columns.map((column) => (2 * dot(column, readings)) / rows.length),
+    placeOf(column) {
+      const onCorners = rows.map((row) => column[row] ?? 0);
+      return columns.findIndex((other) => Math.abs(dot(other, onCorners)) === rows.length);
+    },
+  };
+}
+
+function listContrasts({ letters, points }: Layout, unit: 'block' | 'wholePlot') {
+  if (!isRegularComplete(points)) return null;
+  const rows = points.flatMap((point, row) => (point.center ? [] : [row]));
+  const corners = points.filter((point) => !point.center);
+  const space = createColumnSpace(indicatorColumns(corners.map((point) => point[unit])));
   const terms: string[] = [];
   const columns: (readonly number[])[] = [];
   for (const term of listTerms(letters, letters.length)) {
@@ -40,18 +55,5 @@ export function estimateCornerContrasts(
     terms.push(term);
     columns.push(column);
   }
-  const productWith = (column: readonly number[], values: readonly number[]) =>
-    column.reduce((sum, sign, row) => sum + sign * (values[row] ?? 0), 0);
-  const offset = corners[0]?.y ?? 0;
-  const readings = corners.map((run) => run.y - offset);
-  const isCorner = runs.map((run) => !run.center);
-  return {
-    runs: corners.length,
-    terms,
-    effects: columns.map((column) => (2 * productWith(column, readings)) / corners.length),
-    placeOf(column) {
-      const onCorners = column.filter((_, row) => isCorner[row]);
-      return columns.findIndex((other) => Math.abs(productWith(other, onCorners)) === corners.length);
-    },
-  };
+  return { rows, terms, columns };
 }

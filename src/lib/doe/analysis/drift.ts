@@ -19,7 +19,8 @@ const MOST_EXPLAINED = 0.9;
  * order is not known, is explained by the settings, or fewer than two degrees of freedom are left.
  */
 export function estimateDrift(input: AnalysisInput, analysis: Analysis): Drift | null {
-  const { runs, weights } = selectMeasuredRuns(input);
+  const { runs, layout } = selectMeasuredRuns(input);
+  const { weights } = layout;
   const orders = runs.map((run) => input.runs[run.index]?.order);
   if (orders.some((order) => order === undefined)) return null;
   const { df, sd, strata } = analysis.error;
@@ -27,12 +28,9 @@ export function estimateDrift(input: AnalysisInput, analysis: Analysis): Drift |
   const known = orders.map((order) => order ?? 0);
   const span = Math.max(...known) - Math.min(...known);
   if (span === 0) return null;
-  const letters = input.factors.map((factor) => factor.letter);
   const { model } = layOutModel({
-    letters,
-    runs,
-    ...(weights && { weights }),
-    terms: listTerms(letters, 2),
+    layout,
+    terms: listTerms(layout.letters, 2),
     curvature: analysis.curvature !== undefined,
     withAliases: false,
   });

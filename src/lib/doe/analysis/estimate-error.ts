@@ -41,7 +41,7 @@ export function estimateError(question: ErrorQuestion): ErrorFindings {
       rung: plan.rung,
       pureError,
       leftover: leftoverSpread(question),
-      contrasts: () => estimateCornerContrasts(question.letters, question.runs),
+      contrasts: () => estimateCornerContrasts(question),
     });
     return {
       estimate: { source: rung.source, df: rung.df, sd: rung.sd, ...withPure },
@@ -56,7 +56,7 @@ export function estimateError(question: ErrorQuestion): ErrorFindings {
     rung: rungOf('sub'),
     pureError: pureErrorOf(question, 'wholePlot'),
     leftover: leftoverSpread(question, 'wholePlot'),
-    contrasts: () => estimateCornerContrasts(question.letters, question.runs, (run) => run.wholePlot),
+    contrasts: () => estimateCornerContrasts(question, 'wholePlot'),
   });
   const between = leftoverBetweenPlots(question);
   const whole = climb({
@@ -66,11 +66,11 @@ export function estimateError(question: ErrorQuestion): ErrorFindings {
     leftover: between,
     contrasts: () => null,
   });
-  const plotCount = new Set(question.runs.map((run) => run.wholePlot)).size;
+  const plotCount = new Set(question.layout.points.map((point) => point.wholePlot)).size;
   const wholePlotVariance =
     sub.sd === null || whole.sd === null
       ? 0
-      : Math.max(0, (whole.sd ** 2 - sub.sd ** 2) / (question.runs.length / plotCount));
+      : Math.max(0, (whole.sd ** 2 - sub.sd ** 2) / (question.y.length / plotCount));
   const strata: StratumError[] = [
     { name: 'whole', source: whole.source, df: whole.df, sd: whole.sd },
     { name: 'sub', source: sub.source, df: sub.df, sd: sub.sd },
@@ -161,6 +161,6 @@ function pseudoRung(step: {
 }
 
 /** Spread that is rounding and no spread: readings carry about sixteen digits. */
-function negligibleSpread({ runs }: ErrorQuestion): number {
-  return 32 * Number.EPSILON * Math.max(...runs.map((run) => Math.abs(run.y)));
+export function negligibleSpread({ y }: { y: readonly number[] }): number {
+  return 32 * Number.EPSILON * Math.max(...y.map(Math.abs));
 }

@@ -1,4 +1,5 @@
 import { AnalysisError, type AnalysisInput, type AnalysisRun } from './analysis.ts';
+import { type Layout, layoutOf } from './layout.ts';
 import { theoreticalVariance, toScale } from './scales.ts';
 
 /** A run that has a reading, ready for analysis. */
@@ -16,8 +17,8 @@ export interface MeasuredRun {
 
 export interface MeasuredRuns {
   runs: MeasuredRun[];
-  /** Weights when they differ; they average one. */
-  weights?: number[];
+  /** Where they are, and their weights. */
+  layout: Layout;
   /** Variance of a run of weight one by theory, null for measured results. */
   theory: number | null;
 }
@@ -64,10 +65,20 @@ export function selectMeasuredRuns(input: AnalysisInput): MeasuredRuns {
   const meanWeight = runs.reduce((sum, run) => sum + run.weight, 0) / runs.length;
   const theory = theoreticalVariance(scale);
   const unequal = runs.some((run) => run.weight !== runs[0]?.weight);
+  const points = runs.map(({ x, center, block, wholePlot }) => ({
+    x,
+    center,
+    ...(block !== undefined && { block }),
+    ...(wholePlot !== undefined && { wholePlot }),
+  }));
   return {
     runs,
+    layout: layoutOf(
+      input.factors.map((factor) => factor.letter),
+      points,
+      unequal ? runs.map((run) => run.weight / meanWeight) : undefined,
+    ),
     theory: input.knownVariance ?? (theory === null ? null : theory / meanWeight),
-    ...(unequal && { weights: runs.map((run) => run.weight / meanWeight) }),
   };
 }
 

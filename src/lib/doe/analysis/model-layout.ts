@@ -1,10 +1,9 @@
-import type { Letter } from '../brief.ts';
 import { middleColumns } from '../design/error-plan.ts';
 import type { Alias } from '../design/proposal.ts';
 import { createColumnSpace } from '../linear-algebra/column-space.ts';
 import { type FactoredModel, factorModel } from '../linear-algebra/least-squares.ts';
 import { findAliases } from './aliases.ts';
-import type { MeasuredRun } from './measured-runs.ts';
+import type { Layout } from './layout.ts';
 import { listTerms, termColumn } from './terms.ts';
 
 /** A model for given runs: which columns it has and what each term can and cannot be told apart from. */
@@ -23,9 +22,7 @@ export interface ModelLayout {
 }
 
 export interface ModelQuestion {
-  letters: readonly Letter[];
-  runs: readonly MeasuredRun[];
-  weights?: readonly number[];
+  layout: Layout;
   /** In the order in which they may enter. */
   terms: readonly string[];
   curvature: boolean;
@@ -34,14 +31,14 @@ export interface ModelQuestion {
 }
 
 /** The estimable part of the model asked for: a term that depends on blocks or on terms before it stays out and is named. */
-export function layOutModel({
-  letters,
-  runs,
-  weights,
-  terms,
-  curvature,
-  withAliases = true,
-}: ModelQuestion): ModelLayout {
+export function layOutModel(question: ModelQuestion): ModelLayout {
+  const { layout, terms, curvature, withAliases = true } = question;
+  const name = `model ${terms.join(' ')} ${curvature} ${withAliases}`;
+  return layout.remember(name, () => buildModel({ ...question, withAliases }));
+}
+
+function buildModel({ layout, terms, curvature, withAliases }: Required<ModelQuestion>): ModelLayout {
+  const { letters, points: runs, weights } = layout;
   const ones = runs.map(() => 1);
   const space = createColumnSpace([ones]);
   const blocks = unitContrasts(runs.map((run) => run.block)).filter((column) => space.add(column));

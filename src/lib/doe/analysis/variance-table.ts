@@ -1,6 +1,7 @@
 import { fUpperTail } from '../distributions/f.ts';
 import type { AnovaRow } from './analysis.ts';
-import { residualSpread, type Spread } from './error-spread.ts';
+import { aroundColumns, type Spread } from './error-spread.ts';
+import type { Layout } from './layout.ts';
 import type { ModelLayout } from './model-layout.ts';
 
 /** The analysis of variance and the figures that follow from it. */
@@ -13,9 +14,9 @@ export interface VarianceTable {
 }
 
 export interface VarianceQuestion {
-  layout: ModelLayout;
+  layout: Layout;
+  model: ModelLayout;
   y: readonly number[];
-  weights: readonly number[] | undefined;
   residual: Spread;
   pureError: Spread;
   /** Sum of squares of curvature when it enters last; null: not in the model. */
@@ -26,15 +27,14 @@ export interface VarianceQuestion {
 
 /** Sums of squares by source: blocks, model and curvature each as what is lost when it alone is left out. */
 export function tabulateVariance(question: VarianceQuestion): VarianceTable {
-  const { layout, y, weights, residual, pureError, curvatureSs, error } = question;
-  const { columns, blockColumns, terms } = layout;
+  const { layout, model, y, residual, pureError, curvatureSs, error } = question;
+  const { columns, blockColumns, terms } = model;
+  const named = `${blockColumns} ${model.hasCurvature} ${terms.join(' ')}`;
   const withoutColumns = (from: number, count: number) =>
-    residualSpread({
-      y,
-      weights,
-      columns: columns.filter((_, at) => at > 0 && (at < from || at >= from + count)),
-    });
-  const total = residualSpread({ y, weights, columns: [] });
+    aroundColumns(layout, `${named} without ${from} to ${from + count}`, () =>
+      columns.filter((_, at) => at > 0 && (at < from || at >= from + count)),
+    )(y);
+  const total = aroundColumns(layout, 'nothing', () => [])(y);
 
   const tested = (source: AnovaRow['source'], df: number, ss: number): AnovaRow => {
     const ms = df > 0 ? ss / df : null;

@@ -46,7 +46,7 @@ export function testEstimate(
 
 /** Half-width of the interval in standard errors. */
 export function limitOf(yardstick: Exclude<Yardstick, { kind: 'none' }>, alpha: number): number {
-  if (yardstick.kind === 't') return rememberedLimit(`t ${yardstick.df}`, alpha, tLimit(yardstick.df));
+  if (yardstick.kind === 't') return studentTLimit(yardstick.df, alpha);
   if (yardstick.kind === 'known') return normalQuantile(1 - alpha / 2);
   const { plan, outside } = yardstick;
   const statistic: PseudoErrorStatistic = outside ? 'outside' : 'single';
@@ -54,8 +54,9 @@ export function limitOf(yardstick: Exclude<Yardstick, { kind: 'none' }>, alpha: 
   return rememberedLimit(key, alpha, (upper) => pseudoErrorLimit(plan, statistic, upper));
 }
 
-function tLimit(df: number): (alpha: number) => number {
-  return (alpha) => studentTUpperQuantile(alpha / 2, df);
+/** The t quantile that cuts off `alpha` in both tails together. */
+export function studentTLimit(df: number, alpha: number): number {
+  return rememberedLimit(`t ${df}`, alpha, (both) => studentTUpperQuantile(both / 2, df));
 }
 
 function tailsOf(
