@@ -14,6 +14,8 @@ interface Visit {
   as: 'nobody' | 'admin';
   /** The status to expect where it is not 200. */
   status?: number;
+  /** Paper of a fixed size, which a narrow window scrolls. */
+  isPaper?: true;
 }
 
 const visits: Visit[] = [
@@ -21,7 +23,7 @@ const visits: Visit[] = [
   { file: '404.astro', path: '/no/such/page', as: 'nobody', status: 404 },
   { file: 'refused.astro', path: '/refused', as: 'admin', status: 404 },
   { file: 'pieces/index.astro', path: '/pieces', as: 'nobody' },
-  { file: 'pieces/paper.astro', path: '/pieces/paper', as: 'nobody' },
+  { file: 'pieces/paper.astro', path: '/pieces/paper', as: 'nobody', isPaper: true },
   { file: 'sign-in.astro', path: '/sign-in', as: 'nobody' },
   { file: 'reset/index.astro', path: '/reset', as: 'nobody' },
   { file: 'reset/[token].astro', path: '/reset/a-link-that-never-was', as: 'nobody', status: 410 },
@@ -93,7 +95,7 @@ describe('every page', () => {
       const sticksOut = await page.evaluate(
         () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
       );
-      expect(sticksOut, `${width} px`).toBeLessThanOrEqual(0);
+      if (!visit.isPaper) expect(sticksOut, `${width} px`).toBeLessThanOrEqual(0);
       await takeShot(page, `${visit.file.replace(/\W+/g, '-')}-${width}-${colorScheme}`);
     }
     expect(complaints.splice(0)).toEqual([]);
