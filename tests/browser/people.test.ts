@@ -62,8 +62,8 @@ describe('people', () => {
     await textBack('+12025550133', 'OK');
     await expect.poll(() => readTexts('+12025550133')).toHaveLength(2);
     await page.reload({ waitUntil: 'networkidle' });
-    expect(await page.locator('main').innerText()).toContain('Said OK');
-    expect(await page.locator('main').innerText()).not.toContain('2025550133');
+    expect(await page.locator('main').textContent()).toContain('Said OK');
+    expect(await page.locator('main').textContent()).not.toContain('2025550133');
     expect(await findAccessFaults(page)).toEqual([]);
     await takeShot(page, 'people-agreed');
     expect(complaints).toEqual([]);
@@ -81,12 +81,12 @@ describe('people', () => {
     await page.getByRole('button', { name: 'Erase this person' }).click();
     const dialog = page.getByRole('alertdialog');
     await dialog.waitFor();
-    expect(await page.locator(':focus').innerText()).toBe('Cancel');
+    expect(await page.locator(':focus').textContent()).toBe('Cancel');
     await takeShot(page, 'people-erase');
     await dialog.getByRole('button', { name: 'Erase for good' }).click();
     await page.getByText('Erased. The row stays as').waitFor();
     await open(page, '/people?show=not+active');
-    expect(await page.locator('main').innerText()).toContain('former operator 1');
+    expect(await page.locator('main').textContent()).toContain('former operator 1');
     expect(complaints).toEqual([]);
     await close();
   });
