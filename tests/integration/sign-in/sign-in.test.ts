@@ -33,7 +33,7 @@ describe('signing in', () => {
   it('sends each role to its own start page', async () => {
     for (const [person, start] of [
       [dana, '/people'],
-      [sam, '/me'],
+      [sam, '/activity'],
       [robin, '/people'],
     ] as const) {
       const visitor = newVisitor();
