@@ -5,17 +5,33 @@ import { lengthOfWord, spanWords, type Word, writeWord } from './words.ts';
  * The words whose signs split a regular plan into 2 to the `count` blocks, chosen so that what differs between blocks matters least: never a main
  * effect, then as few pairs as possible, then as few products of three, and so on. null where every choice would hide a main effect.
  *
+ * `grouped` are one-letter words of settings that stay put within whole plots: together with them, too, blocks must not fix any other setting.
+ *
  * Agrees with the arrangements of Montgomery, Design and Analysis of Experiments, Table 7.9, in the number of terms of each length.
  */
-export function chooseBlockWords(plan: WordStructure, count: number): Word[] | null {
+export function chooseBlockWords(
+  plan: WordStructure,
+  count: number,
+  grouped: readonly Word[] = [],
+): Word[] | null {
   let best: { words: Word[]; harm: number[] } | null = null;
   const words = plan.chains.map((chain) => chain[0] ?? 0);
   for (const chosen of chooseIndependent(plan, words, count)) {
     const harm = countHarm(plan, chosen);
-    if ((harm[0] ?? 0) > 0) continue;
+    if ((harm[0] ?? 0) > 0 || fixesOtherSetting(plan, chosen, grouped)) continue;
     if (best === null || compareHarm(harm, best.harm) < 0) best = { words: chosen, harm };
   }
   return best?.words ?? null;
+}
+
+/** Whether parts made by these words and whole plots made by `grouped` settings would leave another setting the same within each part. */
+export function fixesOtherSetting(
+  plan: WordStructure,
+  words: readonly Word[],
+  grouped: readonly Word[],
+): boolean {
+  const fixed = spanChains(plan, [...words, ...grouped]).flat();
+  return fixed.some((word) => lengthOfWord(word) === 1 && !grouped.includes(word));
 }
 
 /**

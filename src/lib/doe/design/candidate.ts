@@ -27,18 +27,31 @@ export function completeStructure(
   structure: Structure,
   fits: (candidate: { runs: number } & TimeAndMoney) => boolean,
 ): Candidate | null {
-  let last: Omit<Candidate, 'errorPlan'> | null = null;
-  for (const count of listMiddleCounts(brief, structure)) {
-    if (structure.corners.length + count > brief.budget.maxRuns) break;
+  const counts = listMiddleCounts(brief, structure);
+  const tryCount = (count: number) => {
+    if (structure.corners.length + count > brief.budget.maxRuns) return null;
     const rows = addMiddles(brief, structure.corners, count);
     const takes = expectTimeAndMoney(brief, rows);
-    if (!fits({ runs: rows.length, ...takes })) break;
-    last = { structure, centerPoints: count, rows, ...takes };
-    if (count < fewestMiddles) continue;
-    const errorPlan = decideErrorPlan(lettersUpTo(structure.k), rows);
-    if (hasEnoughError(errorPlan)) return { ...last, errorPlan };
+    return fits({ runs: rows.length, ...takes }) ? { structure, centerPoints: count, rows, ...takes } : null;
+  };
+  const judge = (plan: Omit<Candidate, 'errorPlan'>): Candidate => ({
+    ...plan,
+    errorPlan: decideErrorPlan(lettersUpTo(structure.k), plan.rows),
+  });
+
+  let best: Candidate | null = null;
+  for (const count of counts.filter((enough) => enough >= fewestMiddles)) {
+    const plan = tryCount(count);
+    if (plan === null) break;
+    best = judge(plan);
+    if (hasEnoughError(best.errorPlan)) return best;
   }
-  return last && { ...last, errorPlan: decideErrorPlan(lettersUpTo(structure.k), last.rows) };
+  if (best !== null) return best;
+  for (const count of counts.filter((few) => few < fewestMiddles).toReversed()) {
+    const plan = tryCount(count);
+    if (plan !== null) return judge(plan);
+  }
+  return null;
 }
 
 /** Whether effects are judged on an error with degrees of freedom of its own, three or more; with whole plots, those of easy settings. */

@@ -1,7 +1,7 @@
 import { chooseBlockWords, listConfounded, partOf } from './block-words.ts';
 import type { LayoutRow } from './proposal.ts';
 import type { RegularPlan } from './regular-plan.ts';
-import { chooseWholePlotWords } from './whole-plot-words.ts';
+import { chooseWholePlotWords, type WholePlotWords } from './whole-plot-words.ts';
 import type { Word } from './words.ts';
 
 export interface CornerRows {
@@ -24,18 +24,9 @@ interface CornerQuestion {
  * hides nothing; else each repeat is split by words. null where that would hide a main effect.
  */
 export function arrangeCorners({ plan, replicates, blocks, hard }: CornerQuestion): CornerRows | null {
-  const split = splitIntoBlocks(plan, replicates, blocks);
+  const split = splitIntoBlocks({ plan, replicates, blocks, hard });
   if (split === null) return null;
-  const grouping =
-    hard.length === 0
-      ? null
-      : chooseWholePlotWords({
-          plan,
-          hard: hard.map((index) => 1 << index),
-          blockWords: split.words,
-          blocks,
-          replicates,
-        });
+  const grouping = hard.length === 0 ? null : groupFor({ plan, replicates, blocks, hard }, split.words);
   const plotNumbers = new Map<string, number>();
   const rows = Array.from({ length: replicates }, (_, replicate) => replicate).flatMap((replicate) =>
     plan.corners.map((x): LayoutRow => {
@@ -58,12 +49,12 @@ interface BlockSplit {
   blockOf: (replicate: number, corner: readonly number[]) => number;
 }
 
-function splitIntoBlocks(plan: RegularPlan, replicates: number, blocks: number): BlockSplit | null {
+function splitIntoBlocks({ plan, replicates, blocks, hard }: CornerQuestion): BlockSplit | null {
   if (replicates % blocks === 0) {
     return { words: [], blockOf: (replicate) => Math.floor((replicate * blocks) / replicates) + 1 };
   }
   const parts = blocks % replicates === 0 ? blocks / replicates : blocks;
-  const words = wordsFor(plan, Math.log2(parts));
+  const words = wordsFor(plan, Math.log2(parts), hard);
   if (words === null) return null;
   const perReplicate = blocks / parts;
   return {
@@ -72,13 +63,35 @@ function splitIntoBlocks(plan: RegularPlan, replicates: number, blocks: number):
   };
 }
 
-// The search depends on the plan alone; the supervisor's sliders ask for the same few plans again and again.
-const knownWords = new WeakMap<RegularPlan, Map<number, Word[] | null>>();
+// Searches depend on the plan and a few small numbers; the supervisor's sliders ask for the same ones again and again.
+const knownBlocks = new WeakMap<RegularPlan, Map<string, Word[] | null>>();
+const knownPlots = new WeakMap<RegularPlan, Map<string, WholePlotWords>>();
 
-function wordsFor(plan: RegularPlan, count: number): Word[] | null {
-  const known = knownWords.get(plan) ?? new Map<number, Word[] | null>();
-  knownWords.set(plan, known);
-  const words = known.has(count) ? (known.get(count) ?? null) : chooseBlockWords(plan, count);
-  known.set(count, words);
-  return words;
+function wordsFor(plan: RegularPlan, count: number, hard: readonly number[]): Word[] | null {
+  return rememberFor(knownBlocks, plan, `${count} ${hard.join(' ')}`, () =>
+    chooseBlockWords(plan, count, hard.map(wordOf)),
+  );
+}
+
+function groupFor({ plan, replicates, blocks, hard }: CornerQuestion, blockWords: Word[]): WholePlotWords {
+  return rememberFor(knownPlots, plan, [replicates, blocks, ...hard, '|', ...blockWords].join(' '), () =>
+    chooseWholePlotWords({ plan, hard: hard.map(wordOf), blockWords, blocks, replicates }),
+  );
+}
+
+const wordOf = (index: number): Word => 1 << index;
+
+function rememberFor<Value>(
+  memory: WeakMap<RegularPlan, Map<string, Value>>,
+  plan: RegularPlan,
+  key: string,
+  search: () => Value,
+): Value {
+  const known = memory.get(plan) ?? new Map<string, Value>();
+  memory.set(plan, known);
+  const found = known.get(key);
+  if (found !== undefined) return found;
+  const value = search();
+  known.set(key, value);
+  return value;
 }

@@ -1,9 +1,10 @@
 import type { Brief } from '../brief.ts';
 import type { Candidate } from './candidate.ts';
 import { worstEffectVariance } from './effect-variance.ts';
+import { groupBy } from './group-by.ts';
 import { listWarnings } from './list-warnings.ts';
 import type { PlanningScale } from './planning-scale.ts';
-import { promise } from './promises.ts';
+import { type HardSettings, promise } from './promises.ts';
 import type { Proposal } from './proposal.ts';
 
 /** A candidate with its promises and warnings; not yet compared with others. */
@@ -12,15 +13,14 @@ export function describeCandidate(brief: Brief, candidate: Candidate, scale: Pla
   const { wholePlots } = structure;
   const settingsWhere = (isHard: boolean) =>
     brief.factors.flatMap((factor, index) => ((factor.hardToChange ?? false) === isHard ? [index] : []));
-  const hardVariance = worstEffectVariance(structure, rows, settingsWhere(true));
-  const grouped = wholePlots !== undefined && hardVariance !== null;
+  const grouped = wholePlots !== undefined;
   const easy = grouped ? settingsWhere(false) : brief.factors.map((_, index) => index);
   const promises = promise({
     scale,
     errorPlan: wholePlots?.judged === false ? withoutWholeStratum(errorPlan) : errorPlan,
     tested: structure.terms.length + (centerPoints > 0 ? 1 : 0),
     easyVariance: worstEffectVariance(structure, rows, easy),
-    ...(grouped ? { hard: { plots: wholePlots.count, runVariance: hardVariance } } : {}),
+    ...(grouped ? { hard: describeHard(candidate, settingsWhere(true), wholePlots.count) } : {}),
   });
   return {
     id: nameCandidate(candidate),
@@ -46,6 +46,25 @@ export function describeCandidate(brief: Brief, candidate: Candidate, scale: Pla
     terms: structure.terms,
     ...(structure.irregular === undefined ? {} : { efficiencies: structure.irregular.efficiencies }),
     layout: rows,
+  };
+}
+
+function describeHard(
+  { structure, rows }: Candidate,
+  settings: readonly number[],
+  plots: number,
+): HardSettings {
+  const variance = worstEffectVariance(structure, rows, settings) ?? 0;
+  const all = groupBy(rows, (row) => row.wholePlot);
+  const middles = all.filter((plot) => plot.every((row) => row.center));
+  const different = new Set(middles.map((plot) => plot.map((row) => row.x.join(' ')).join('; ')));
+  const middleRuns = middles.reduce((sum, plot) => sum + plot.length, 0);
+  return {
+    plots,
+    runsEach: (rows.length - middleRuns) / (all.length - middles.length),
+    middleDf: Math.max(0, middles.length - different.size),
+    middleRunsEach: middleRuns / Math.max(1, middles.length),
+    inflation: (variance * structure.corners.length) / 4,
   };
 }
 

@@ -7,7 +7,7 @@ import { expandPoint, invertInformation, predictionVariance } from './informatio
 import { findOptimalSubsets } from './optimal-subset.ts';
 import type { Alias } from './proposal.ts';
 import { traceAliases } from './trace-aliases.ts';
-import { lettersUpTo } from './words.ts';
+import { lettersUpTo, readWord } from './words.ts';
 
 /** Corners chosen around forbidden ones: not balanced, but as near to it as the rules allow. */
 export interface IrregularPlan {
@@ -38,8 +38,10 @@ export function findIrregularPlans(brief: Brief, largest: number): IrregularPlan
   const withPairs = listShownTerms(corners, letters);
   const found = [withPairs, letters].flatMap((terms) => {
     if (!mayServe(corners, terms, letters.length)) return [];
+    // More runs than these are better spent on pairs.
+    const most = terms.length > letters.length ? largest : Math.min(largest, mostForMains);
     const plans: IrregularPlan[] = [];
-    for (const size of sizes.filter((candidate) => candidate > terms.length && candidate <= largest)) {
+    for (const size of sizes.filter((candidate) => candidate > terms.length && candidate <= most)) {
       const plan = planSubset({ corners, letters, size, terms });
       if (plan !== null) plans.push(plan);
       if (plans.length === plansEach) break;
@@ -53,6 +55,7 @@ export function findIrregularPlans(brief: Brief, largest: number): IrregularPlan
 
 const sizes = [4, 6, 8, 9, 10, 12, 14, 15, 16, 18, 20, 21, 24, 27, 28, 30, 32];
 const plansEach = 2;
+const mostForMains = 20;
 const nearlyOptimal = 0.95;
 
 /**
@@ -88,46 +91,53 @@ interface Subset {
   terms: readonly string[];
 }
 
+/** Of the subsets that are as good as equal, the one whose worst main effect is known best; null where that is not well enough. */
 function planSubset({ corners, letters, size, terms }: Subset): IrregularPlan | null {
+  const rows = corners.map((x) => expandPoint(x, terms));
   const subsets = findOptimalSubsets({
-    candidates: corners.map((x) => expandPoint(x, terms)),
+    candidates: rows,
     size,
     // A fixed seed: the same brief always gets the same plans.
     random: createUniformSource(size),
     starts: terms.length > letters.length ? 2 : 5,
   });
-  const plans = subsets
+  const measured = subsets
     .filter(({ relativeDeterminant }) => relativeDeterminant > nearlyOptimal)
-    .flatMap(
-      ({ chosen }) =>
-        describeCorners({ chosen: chosen.map((index) => corners[index] ?? []), corners, letters, terms }) ??
-        [],
-    );
-  // Of subsets that are as good as equal, the one whose worst main effect is known best.
-  return plans.sort((first, second) => worstMain(second) - worstMain(first))[0] ?? null;
+    .map(({ chosen }) => ({
+      chosen,
+      efficiencies: measureEfficiencies(
+        chosen.map((index) => rows[index] ?? []),
+        terms,
+      ),
+    }));
+  const [best] = measured.sort(
+    (first, second) => worstMain(second.efficiencies) - worstMain(first.efficiencies),
+  );
+  if (best === undefined || worstMain(best.efficiencies) < lowestMainEfficiency - 1e-9) return null;
+  const chosen = best.chosen.map((index) => [...(corners[index] ?? [])]);
+  return {
+    ...describeTies(chosen, { corners, letters, terms }),
+    corners: chosen,
+    terms: [...terms],
+    efficiencies: best.efficiencies,
+  };
 }
 
-function worstMain({ efficiencies }: IrregularPlan): number {
+type Efficiencies = IrregularPlan['efficiencies'];
+
+function measureEfficiencies(rows: readonly number[][], terms: readonly string[]): Efficiencies {
+  const inverse = invertInformation(rows);
+  return terms.map((term, index) => ({ term, relative: relativeVariance(inverse, index, rows.length) }));
+}
+
+function worstMain(efficiencies: Efficiencies): number {
   return Math.min(...efficiencies.filter(({ term }) => term.length === 1).map(({ relative }) => relative));
 }
 
-interface ChosenCorners {
-  chosen: readonly number[][];
-  /** All that could have been chosen. */
-  corners: readonly number[][];
-  letters: readonly string[];
-  terms: readonly string[];
-}
-
-/** Efficiencies and aliases of corners under a model; null where they cannot carry it or know a main effect too badly. */
-function describeCorners({ chosen, corners, letters, terms }: ChosenCorners): IrregularPlan | null {
-  const rows = chosen.map((x) => expandPoint(x, terms));
-  const inverse = invertInformation(rows);
-  if (inverse === null) return null;
-  const efficiencies = terms.map((term, index) => ({
-    term,
-    relative: relativeVariance(inverse, index, chosen.length),
-  }));
+function describeTies(
+  chosen: readonly number[][],
+  { corners, letters, terms }: Omit<Subset, 'size'>,
+): Pick<IrregularPlan, 'aliases' | 'emptied' | 'resolution'> {
   const others = listTerms(letters, 2).filter((term) => !terms.includes(term));
   const aliases = traceAliases({ corners: chosen, terms, others });
   const emptied = others.filter((pair) => isEmptied(corners, pair));
@@ -135,15 +145,7 @@ function describeCorners({ chosen, corners, letters, terms }: ChosenCorners): Ir
     ({ term, with: partners }) =>
       term.length === 1 && partners.some((partner) => !emptied.includes(partner.term)),
   );
-  const plan: IrregularPlan = {
-    corners: chosen.map((x) => [...x]),
-    terms: [...terms],
-    aliases,
-    efficiencies,
-    emptied,
-    resolution: mainsTied ? 3 : others.length > emptied.length ? 4 : 5,
-  };
-  return worstMain(plan) < lowestMainEfficiency - 1e-9 ? null : plan;
+  return { aliases, emptied, resolution: mainsTied ? 3 : others.length > emptied.length ? 4 : 5 };
 }
 
 /** Main effects, then every pair that the corners can tell from what came before. */
@@ -154,9 +156,8 @@ function listShownTerms(corners: readonly number[][], letters: readonly string[]
   );
 }
 
+/** Whether some corner of a pair is never run. */
 function isEmptied(corners: readonly number[][], pair: string): boolean {
-  const [first = 0, second = 0] = lettersUpTo(26).flatMap((letter, index) =>
-    pair.includes(letter) ? [index] : [],
-  );
-  return new Set(corners.map((x) => `${x[first]} ${x[second]}`)).size < 4;
+  const settings = [...pair].map((letter) => Math.log2(readWord(letter)));
+  return new Set(corners.map((x) => settings.map((setting) => x[setting]).join(' '))).size < 4;
 }

@@ -15,7 +15,7 @@ const mostCorners = 32;
 export function listIrregularStructures(brief: Brief): Structure[] {
   // Without middle runs only repeats can tell the error.
   const repeats = listMiddles(brief).length > 0 ? [1] : [1, 2];
-  return findIrregularPlans(brief, mostCorners).flatMap((plan) =>
+  return plansAround(brief).flatMap((plan) =>
     repeats.flatMap((replicates) => {
       const corners = Array.from({ length: replicates }, () => plan.corners).flat();
       const question = { brief, plan, replicates };
@@ -26,6 +26,19 @@ export function listIrregularStructures(brief: Brief): Structure[] {
         : [shuffled, { ...describe(question, grouped.rows), wholePlots: grouped.wholePlots }];
     }),
   );
+}
+
+// The search depends on the rules alone and is the longest part of planning; sliders move limits, not rules.
+const knownPlans = new Map<string, IrregularPlan[]>();
+const mostKnown = 4;
+
+function plansAround(brief: Brief): IrregularPlan[] {
+  const key = JSON.stringify([brief.factors.length, brief.forbidden]);
+  const plans = knownPlans.get(key) ?? findIrregularPlans(brief, mostCorners);
+  knownPlans.delete(key);
+  knownPlans.set(key, plans);
+  for (const oldest of [...knownPlans.keys()].slice(0, -mostKnown)) knownPlans.delete(oldest);
+  return plans;
 }
 
 function describe(

@@ -11,10 +11,18 @@ export interface PromiseQuestion {
   /** Variance of the least well known main effect of an easy setting, for a run variance of 1; null when all settings are hard. */
   easyVariance: number | null;
   /** Absent when everything is shuffled freely. */
-  hard?: {
-    /** Corner whole plots. */ plots: number /** Variance as for an easy setting. */;
-    runVariance: number;
-  };
+  hard?: HardSettings;
+}
+
+export interface HardSettings {
+  /** Number of whole plots of corners, and of runs in one of them on average. */
+  plots: number;
+  runsEach: number;
+  /** Degrees of freedom that whole plots of middles add to the error that hard settings are judged by, and runs in each. */
+  middleDf: number;
+  middleRunsEach: number;
+  /** Variance of their least well known main effect over that in a balanced plan: 1 unless rules took corners away. */
+  inflation: number;
 }
 
 export interface Promises {
@@ -64,10 +72,25 @@ function listKinds({ scale, errorPlan, tested, easyVariance, hard }: PromiseQues
   }
   const whole = hard === undefined ? null : judge(stratum('whole'), tested);
   if (hard !== undefined && whole !== null) {
-    const variance = (4 / hard.plots) * scale.plotSd ** 2 + hard.runVariance * scale.runSd ** 2;
-    kinds.push({ effect: 'hardToChange', judging: whole, standardError: Math.sqrt(variance) });
+    const variance = plotVariance(scale, hard, stratum('whole')?.df ?? 1);
+    kinds.push({
+      effect: 'hardToChange',
+      judging: whole,
+      standardError: Math.sqrt((4 / hard.plots) * hard.inflation * variance),
+    });
   }
   return kinds;
+}
+
+/**
+ * Variance of the mean of a whole plot: its own set-up and its share of runs, as the error of hard settings shows it. Plots of middles hold fewer
+ * runs, so their means vary more; they count by their share in the degrees of freedom.
+ */
+function plotVariance({ plotSd, runSd }: PlanningScale, hard: HardSettings, df: number): number {
+  const varianceOf = (runs: number) => plotSd ** 2 + runSd ** 2 / runs;
+  const share = Math.min(1, hard.middleDf / df);
+  const corners = (1 - share) * varianceOf(hard.runsEach);
+  return share > 0 ? corners + share * varianceOf(hard.middleRunsEach) : corners;
 }
 
 function judge(error: ErrorPlan | ErrorStratum | undefined, tested: number): Judging | null {

@@ -59,26 +59,34 @@ const noChange: Change = { settleMinutes: 0, discardParts: 0 };
 function changeBetween(brief: Brief, from: readonly number[], to: readonly number[]): Change {
   let settleMinutes = 0;
   let discardParts = 0;
-  for (const [index, factor] of brief.factors.entries()) {
+  for (let index = 0; index < brief.factors.length; index++) {
     if (from[index] === to[index]) continue;
-    settleMinutes = Math.max(settleMinutes, factor.settleMinutes ?? 0);
-    discardParts = Math.max(discardParts, factor.discardParts ?? 0);
+    settleMinutes = Math.max(settleMinutes, brief.factors[index]?.settleMinutes ?? 0);
+    discardParts = Math.max(discardParts, brief.factors[index]?.discardParts ?? 0);
   }
   return { settleMinutes, discardParts };
 }
 
-/** Average change between runs of different groups. */
+/** Average change between runs of different groups; in plain sums, as it looks at every pair of runs of every plan. */
 function averageAcross(brief: Brief, groups: readonly (readonly LayoutRow[])[]): Change {
-  let sum = noChange;
+  let settleMinutes = 0;
+  let discardParts = 0;
   let pairs = 0;
-  for (const [index, group] of groups.entries()) {
-    for (const other of groups.slice(index + 1)) {
-      for (const row of group)
-        for (const next of other) sum = add(sum, changeBetween(brief, row.x, next.x), 1);
+  for (const [place, group] of groups.entries()) {
+    for (const other of groups.slice(place + 1)) {
+      for (const row of group) {
+        for (const next of other) {
+          const change = changeBetween(brief, row.x, next.x);
+          settleMinutes += change.settleMinutes;
+          discardParts += change.discardParts;
+        }
+      }
       pairs += group.length * other.length;
     }
   }
-  return pairs === 0 ? noChange : add(noChange, sum, 1 / pairs);
+  return pairs === 0
+    ? noChange
+    : { settleMinutes: settleMinutes / pairs, discardParts: discardParts / pairs };
 }
 
 function average(changes: readonly Change[]): Change {

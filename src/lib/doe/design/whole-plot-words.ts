@@ -1,4 +1,4 @@
-import { chooseIndependent, spanChains } from './block-words.ts';
+import { chooseIndependent, fixesOtherSetting, spanChains } from './block-words.ts';
 import type { RegularPlan } from './regular-plan.ts';
 import { lengthOfWord, spanWords, type Word } from './words.ts';
 
@@ -63,11 +63,8 @@ function judgeWords(
 ): { df: number; pairs: number } | null {
   const plots = 2 ** words.length * replicates;
   if (plots < 4) return null;
+  if (fixesOtherSetting(plan, words, hard)) return null;
   const chains = spanChains(plan, words);
-  const easyMain = chains.some((chain) =>
-    chain.some((word) => lengthOfWord(word) === 1 && !hard.includes(word)),
-  );
-  if (easyMain) return null;
   const hidden = new Set(spanChains(plan, blockWords));
   const tested = chains.filter((chain) => !hidden.has(chain) && lengthOfWord(chain[0] ?? 0) <= 2);
   return { df: plots - blocks - tested.length, pairs: tested.length };
