@@ -1,13 +1,11 @@
 import type { Brief } from '../brief.ts';
 import { createColumnSpace } from '../linear-algebra/column-space.ts';
 import { isForbidden } from './forbidden.ts';
+import { listCorners } from './list-corners.ts';
 
 /** All corners that no rule forbids, in standard order. */
 export function listAllowedCorners(brief: Pick<Brief, 'factors' | 'forbidden'>): number[][] {
-  const k = brief.factors.length;
-  return Array.from({ length: 2 ** k }, (_, run) =>
-    Array.from({ length: k }, (_, index) => ((run >> index) & 1 ? 1 : -1)),
-  ).filter((x) => !isForbidden(brief, x));
+  return listCorners(brief.factors.length).filter((x) => !isForbidden(brief, x));
 }
 
 /** Whether some corners can still show the main effect of each of k settings. */

@@ -55,8 +55,8 @@ const warnings = [
   defineFact('noise-unknown', {}),
   /** Promises for counts rest on pure counting noise; real noise is often more. */
   defineFact('counting-noise-only', {}),
-  /** Fewer than five rejects or flaws to be expected in a usual run; `lotNeeded` parts would give five. */
-  defineFact('few-rejects', { expected: z.number(), lotSize: z.number(), lotNeeded: z.number() }),
+  /** Fewer than five rejects or flaws to be expected in a usual run; `lotNeeded` parts would give five; null: no lot would, as there are none today. */
+  defineFact('few-rejects', { expected: z.number(), lotSize: z.number(), lotNeeded: z.number().nullable() }),
   /** Parts made in a row show short-term spread only. */
   defineFact('short-term-spread-only', { parts: z.number() }),
   /** Two or more choices: the bend is seen at their usual combination alone. */

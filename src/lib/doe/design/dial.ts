@@ -1,4 +1,4 @@
-import type { Brief, FactorSpec } from '../brief.ts';
+import type { Brief, FactorSpec, NumberFactor } from '../brief.ts';
 import { isForbidden } from './forbidden.ts';
 import { tidyNumber } from './tidy-number.ts';
 
@@ -26,6 +26,12 @@ export function setDials(brief: Brief, x: readonly number[]): DialPoint {
     if (!isForbidden(brief, point.coded)) return point;
   }
   return setAll(brief, x, []);
+}
+
+/** Where the middle runs of a number setting will be: halfway, or at the last step of the dial below that. */
+export function middleOnDial(range: Pick<NumberFactor, 'low' | 'high' | 'step'>): number {
+  const factor: FactorSpec = { kind: 'number', name: '', unit: '', usual: range.low, ...range };
+  return Number(isBetweenSteps(factor, 0) ? roundToStep(factor, 0, false) : decode(factor, 0));
 }
 
 /** The value of a coded setting in its unit, or the name of the choice. */

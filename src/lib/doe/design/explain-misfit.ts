@@ -1,5 +1,6 @@
 import type { Brief } from '../brief.ts';
 import { isForbidden } from './forbidden.ts';
+import { listCorners } from './list-corners.ts';
 import { PlanError, type PlanRefusal } from './plan-error.ts';
 import type { TimeAndMoney } from './time-and-money.ts';
 
@@ -57,10 +58,7 @@ function cheapest(refusals: readonly PlanRefusal[]): PlanRefusal {
 
 /** Index of the rule that takes away most corners that no other rule takes. */
 export function findWeightiestRule(brief: Brief): number {
-  const k = brief.factors.length;
-  const corners = Array.from({ length: 2 ** k }, (_, run) =>
-    Array.from({ length: k }, (_, index) => ((run >> index) & 1 ? 1 : -1)),
-  );
+  const corners = listCorners(brief.factors.length);
   const taken = brief.forbidden.map((rule, index) => {
     const others = { forbidden: brief.forbidden.filter((_, place) => place !== index) };
     return corners.filter((x) => isForbidden({ forbidden: [rule] }, x) && !isForbidden(others, x)).length;

@@ -1,4 +1,5 @@
 import type { Brief, ForbiddenRule } from '../brief.ts';
+import { listCorners } from './list-corners.ts';
 import { readWord } from './words.ts';
 
 /**
@@ -14,6 +15,15 @@ export function isForbidden(brief: Pick<Brief, 'forbidden'>, x: readonly number[
 /** Indices of the settings that a rule names. */
 export function settingsOfRule(rule: ForbiddenRule): number[] {
   return Object.keys(rule).map((letter) => Math.log2(readWord(letter)));
+}
+
+/** How many of all combinations of low and high a rule takes away. */
+export function countForbidden(
+  factors: readonly unknown[],
+  rule: ForbiddenRule,
+): { ruledOut: number; corners: number } {
+  const corners = listCorners(factors.length);
+  return { ruledOut: corners.filter((x) => appliesTo(rule, x)).length, corners: corners.length };
 }
 
 function appliesTo(rule: ForbiddenRule, x: readonly number[]): boolean {

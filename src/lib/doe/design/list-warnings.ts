@@ -5,6 +5,7 @@ import type { Candidate } from './candidate.ts';
 import { settingsOfRule } from './forbidden.ts';
 import { groupBy } from './group-by.ts';
 import type { PlanningScale } from './planning-scale.ts';
+import { warnOfThinLot } from './thin-lots.ts';
 import { letterAt } from './words.ts';
 
 interface Subject {
@@ -142,21 +143,11 @@ function offerNarrowing(brief: Brief, rule: number, settings: readonly number[])
 
 function warnOfReadings(brief: Brief): Fact[] {
   const facts: Fact[] = [];
-  for (const [result, { kind, lotSize, usualRate, partsPerRun }] of [
-    brief.response,
-    ...brief.watch,
-  ].entries()) {
-    const refs = { results: [result] };
-    if (kind === 'measured' && (partsPerRun ?? 1) > 1)
-      facts.push({ kind: 'short-term-spread-only', values: { parts: partsPerRun ?? 1 }, refs });
-    if (kind === 'measured' || usualRate === undefined) continue;
-    const lot = lotSize ?? 1;
-    const expected = kind === 'rejects' ? lot * usualRate : usualRate;
-    if (expected >= enoughRejects) continue;
-    const lotNeeded = Math.ceil((enoughRejects * lot) / Math.max(expected, 1e-9));
-    facts.push({ kind: 'few-rejects', values: { expected, lotSize: lot, lotNeeded }, refs });
+  for (const [result, response] of [brief.response, ...brief.watch].entries()) {
+    const parts = response.partsPerRun ?? 1;
+    if (response.kind === 'measured' && parts > 1)
+      facts.push({ kind: 'short-term-spread-only', values: { parts }, refs: { results: [result] } });
+    facts.push(...warnOfThinLot(response, result));
   }
   return facts;
 }
-
-const enoughRejects = 5;

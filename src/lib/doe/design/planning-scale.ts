@@ -20,7 +20,8 @@ export interface PlanningScale {
 }
 
 const defaultDf = 4;
-const assumedSetupShare = 0.5;
+/** Of the spread of parts: what setting the dials afresh is taken to add where nobody says. */
+export const assumedSetupShare = 0.5;
 
 /** Measured results as they are; rejects by twice the arcsine of the root of their share; flaws by twice the root of their count. */
 export function choosePlanningScale(brief: Brief): PlanningScale {

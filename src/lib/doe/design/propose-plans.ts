@@ -18,12 +18,8 @@ const nearlyAsSure = 1.1;
  * @throws PlanError when the brief makes no sense (the field is named) or nothing fits (the limit to relax is named, with the least it would need).
  */
 export function proposePlans(brief: Brief): Proposal[] {
-  checkBrief(brief);
+  const undominated = listBestPlans(brief);
   const scale = choosePlanningScale(brief);
-  const described = listFittingCandidates(brief).map((candidate) =>
-    describeCandidate(brief, candidate, scale),
-  );
-  const undominated = keepUndominated(described);
   const recommendation = recommend(undominated);
   const chosen = pickFew(undominated, recommendation.proposal);
   return chosen.map((proposal) => ({
@@ -31,6 +27,19 @@ export function proposePlans(brief: Brief): Proposal[] {
     recommended: proposal === recommendation.proposal,
     ...listReasons({ brief, scale, proposal, recommendation }),
   }));
+}
+
+/**
+ * All plans that fit a brief's limits and that no other beats, before a few are picked and compared.
+ *
+ * @throws PlanError like `proposePlans`.
+ */
+export function listBestPlans(brief: Brief): Proposal[] {
+  checkBrief(brief);
+  const scale = choosePlanningScale(brief);
+  return keepUndominated(
+    listFittingCandidates(brief).map((candidate) => describeCandidate(brief, candidate, scale)),
+  );
 }
 
 /**
