@@ -30,7 +30,8 @@ const nameRequest = defineMiddleware(async (context, next) => {
   if (response.headers.get('content-type') === 'text/html') {
     response.headers.set('Content-Type', 'text/html; charset=utf-8');
     // On a shared computer the button "back" must not show the page of whoever signed out.
-    if (context.locals.viewer) response.headers.set('Cache-Control', 'no-store');
+    // Nor may it keep a page for good by itself, as browsers do with a 410: the reader's language changes, links end.
+    response.headers.set('Cache-Control', context.locals.viewer ? 'no-store' : 'no-cache');
   }
   log.info({
     event: 'request',

@@ -8,6 +8,8 @@ export default defineConfig({
   root,
   test: {
     passWithNoTests: false,
+    // Vitest would leave one core free; most of our tests wait for a database, a child process or a browser.
+    maxWorkers: 2,
     // A machine that does other work besides must not fail a test for being slow; speed has benchmarks of its own.
     testTimeout: 30_000,
     hookTimeout: 30_000,
@@ -47,7 +49,6 @@ export default defineConfig({
           name: 'browser',
           include: ['tests/browser/**/*.test.ts'],
           environment: 'node',
-          fileParallelism: false,
           testTimeout: 120_000,
           hookTimeout: 120_000,
         },

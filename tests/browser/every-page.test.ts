@@ -3,7 +3,14 @@ import { fileURLToPath } from 'node:url';
 import type { Browser } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { languages } from '../../src/i18n/languages.ts';
-import { findAccessFaults, launchBrowser, openPage, takeShot, type WatchedPage } from '../setup/browser.ts';
+import {
+  findAccessFaults,
+  launchBrowser,
+  openAwake,
+  openPage,
+  takeShot,
+  type WatchedPage,
+} from '../setup/browser.ts';
 import { type RunningApp, startApp } from '../setup/running-app.ts';
 import { signIn } from '../setup/sign-in.ts';
 
@@ -24,6 +31,7 @@ const visits: Visit[] = [
   { file: 'refused.astro', path: '/refused', as: 'admin', status: 404 },
   { file: 'pieces/index.astro', path: '/pieces', as: 'nobody' },
   { file: 'pieces/paper.astro', path: '/pieces/paper', as: 'nobody', isPaper: true },
+  { file: 'pieces/question.astro', path: '/pieces/question', as: 'nobody' },
   { file: 'sign-in.astro', path: '/sign-in', as: 'nobody' },
   { file: 'reset/index.astro', path: '/reset', as: 'nobody' },
   { file: 'reset/[token].astro', path: '/reset/a-link-that-never-was', as: 'nobody', status: 410 },
@@ -41,7 +49,7 @@ const visits: Visit[] = [
 ];
 
 /** Pages with no look of their own: one only answers a form, one shows when the product itself fails. */
-const unseen = ['sign-out.astro', '500.astro', 'pieces/question.astro'];
+const unseen = ['sign-out.astro', '500.astro'];
 
 const pagesFolder = fileURLToPath(new URL('../../src/pages/', import.meta.url));
 const views = [
@@ -73,8 +81,7 @@ async function open(visit: Visit): Promise<number | undefined> {
     await page.goto(`${running.url}/people`);
     path = (await page.locator('a[href^="/people/0"]').first().getAttribute('href')) ?? path;
   }
-  const answer = await page.goto(`${running.url}${path}`, { waitUntil: 'networkidle' });
-  return answer?.status();
+  return openAwake(page, `${running.url}${path}`);
 }
 
 describe('every page', () => {
@@ -91,7 +98,8 @@ describe('every page', () => {
     for (const { width, colorScheme } of views) {
       await page.emulateMedia({ colorScheme, reducedMotion: 'reduce' });
       await page.setViewportSize({ width, height: 800 });
-      expect(await findAccessFaults(page), `${width} px, ${colorScheme}`).toEqual([]);
+      const rules = colorScheme === 'dark' ? ['color-contrast'] : null;
+      expect(await findAccessFaults(page, rules), `${width} px, ${colorScheme}`).toEqual([]);
       const sticksOut = await page.evaluate(
         () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
       );
@@ -99,6 +107,17 @@ describe('every page', () => {
       await takeShot(page, `${visit.file.replace(/\W+/g, '-')}-${width}-${colorScheme}`);
     }
     expect(complaints.splice(0)).toEqual([]);
+  });
+
+  it.each(languages)('speaks to whoever is not signed in as their cookie asks (%s)', async (language) => {
+    const { page, complaints } = visitors.nobody;
+    await page.context().addCookies([{ name: 'language', value: language, url: running.url }]);
+    // The sheets of pieces are for developers and speak English only.
+    for (const visit of visits.filter(({ as, path }) => as === 'nobody' && !path.startsWith('/pieces'))) {
+      await open(visit);
+      expect(await page.locator('html').getAttribute('lang'), visit.path).toBe(language);
+      expect(complaints.splice(0)).toEqual([]);
+    }
   });
 
   it('switches the language of a person who is signed in, everywhere and for good', async () => {

@@ -52,18 +52,29 @@ export async function openPage(browser: Browser, options: BrowserContextOptions 
   return { page, complaints, close: () => context.close() };
 }
 
-/** What axe finds on the page as it stands, one line a rule and place. */
-export async function findAccessFaults(page: Page): Promise<string[]> {
+/**
+ * What axe finds on the page as it stands, one line a rule and place.
+ * @param rules only these, such as `color-contrast` where nothing but the colours has changed since the last look
+ */
+export async function findAccessFaults(page: Page, rules: string[] | null = null): Promise<string[]> {
   await page.evaluate(axeSource);
-  return page.evaluate(async () => {
+  return page.evaluate(async (only) => {
     const { axe } = globalThis as unknown as { axe: typeof import('axe-core') };
-    const { violations } = await axe.run();
+    const { violations } = await axe.run(only ? { runOnly: only } : {});
     return violations.flatMap(({ id, nodes }) => nodes.map((node) => `${id}: ${node.target.join(' ')}`));
-  });
+  }, rules);
 }
 
-/** Saves the whole page as a picture in `shots/`, to be looked at. */
+/** Opens an address and waits until each island on it is awake. Answers the status. */
+export async function openAwake(page: Page, address: string): Promise<number | undefined> {
+  const answer = await page.goto(address, { waitUntil: 'load' });
+  await page.waitForFunction(() => document.querySelector('astro-island[ssr]') === null);
+  return answer?.status();
+}
+
+/** Saves the whole page as a picture in `shots/`, to be looked at; only where somebody asks for it with `SHOTS=yes`. */
 export async function takeShot(page: Page, name: string): Promise<void> {
+  if (process.env['SHOTS'] !== 'yes') return;
   mkdirSync(shotsFolder, { recursive: true });
   await page.screenshot({ path: `${shotsFolder}${name}.png`, fullPage: true });
 }

@@ -44,7 +44,8 @@ export function createMailGateway(settings: MailGatewaySettings): MailGateway {
     ...(user === undefined ? {} : { auth: { user, pass: password ?? '' } }),
     connectionTimeout: timeout,
     greetingTimeout: timeout,
-    socketTimeout: timeout,
+    // Longer than the greeting may take: which of the two clocks runs out tells whether a mail was on its way.
+    socketTimeout: timeout * 2,
     // A mail is made of what is handed over; it never pulls in a file or an address.
     disableFileAccess: true,
     disableUrlAccess: true,
