@@ -36,19 +36,26 @@ async function readProblem(response: Response): Promise<ServerProblem> {
 /**
  * Calls an endpoint of ours and checks what comes back.
  * @param call.body sent as JSON, save a `Blob`, which is sent as it is
+ * @param call.keepalive whether it goes on when the page is left; browsers then carry at most 64 KB
  * @throws ServerRefusal or NoConnection
  */
 export async function callServer<Output>(
   path: string,
-  call: { method?: 'GET' | 'POST' | 'PATCH' | 'PUT' | 'DELETE'; body?: unknown; output: z.ZodType<Output> },
+  call: {
+    method?: 'GET' | 'POST' | 'PATCH' | 'PUT' | 'DELETE';
+    body?: unknown;
+    output: z.ZodType<Output>;
+    keepalive?: boolean;
+  },
 ): Promise<Output> {
-  const { method = 'GET', body, output } = call;
+  const { method = 'GET', body, output, keepalive = false } = call;
   const isFile = body instanceof Blob;
   let response: Response;
   try {
     response = await fetch(path, {
       method,
       credentials: 'same-origin',
+      keepalive,
       ...(body === undefined ? {} : { body: isFile ? body : JSON.stringify(body) }),
       ...(body === undefined || isFile ? {} : { headers: { 'Content-Type': 'application/json' } }),
     });

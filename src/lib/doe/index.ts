@@ -22,6 +22,7 @@ export { analyzeSteadiness } from './analysis/steadiness.ts';
 export { completeHierarchy } from './analysis/terms.ts';
 export * from './brief.ts';
 export { coach } from './design/coach.ts';
+export { describePast, type PastNumbers, spreadOfExtremes } from './design/describe-past.ts';
 export { decode, encode } from './design/dial.ts';
 export type { CoachDraft, DraftFactor } from './design/draft.ts';
 export { countForbidden, isForbidden } from './design/forbidden.ts';
