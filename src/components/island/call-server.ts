@@ -55,7 +55,7 @@ export async function callServer<Output>(
     response = await fetch(path, {
       method,
       credentials: 'same-origin',
-      keepalive,
+      ...(keepalive ? { keepalive } : {}),
       ...(body === undefined ? {} : { body: isFile ? body : JSON.stringify(body) }),
       ...(body === undefined || isFile ? {} : { headers: { 'Content-Type': 'application/json' } }),
     });
