@@ -2,7 +2,7 @@ import { chooseBlockWords, listConfounded, partOf } from './block-words.ts';
 import type { LayoutRow } from './proposal.ts';
 import type { RegularPlan } from './regular-plan.ts';
 import { chooseWholePlotWords, type WholePlotWords } from './whole-plot-words.ts';
-import type { Word } from './words.ts';
+import { type Word, wordOf } from './words.ts';
 
 export interface CornerRows {
   rows: LayoutRow[];
@@ -21,12 +21,13 @@ interface CornerQuestion {
 
 /**
  * The corners of a regular plan, repeated, split into blocks and grouped into whole plots. Repeats become blocks where their numbers match, which
- * hides nothing; else each repeat is split by words. null where that would hide a main effect.
+ * hides nothing; else each repeat is split by words. null where that would hide a main effect, or keep an easy setting the same in each whole plot.
  */
 export function arrangeCorners({ plan, replicates, blocks, hard }: CornerQuestion): CornerRows | null {
   const split = splitIntoBlocks({ plan, replicates, blocks, hard });
   if (split === null) return null;
   const grouping = hard.length === 0 ? null : groupFor({ plan, replicates, blocks, hard }, split.words);
+  if (grouping === null && hard.length > 0) return null;
   const plotNumbers = new Map<string, number>();
   const rows = Array.from({ length: replicates }, (_, replicate) => replicate).flatMap((replicate) =>
     plan.corners.map((x): LayoutRow => {
@@ -65,7 +66,7 @@ function splitIntoBlocks({ plan, replicates, blocks, hard }: CornerQuestion): Bl
 
 // Searches depend on the plan and a few small numbers; the supervisor's sliders ask for the same ones again and again.
 const knownBlocks = new WeakMap<RegularPlan, Map<string, Word[] | null>>();
-const knownPlots = new WeakMap<RegularPlan, Map<string, WholePlotWords>>();
+const knownPlots = new WeakMap<RegularPlan, Map<string, WholePlotWords | null>>();
 
 function wordsFor(plan: RegularPlan, count: number, hard: readonly number[]): Word[] | null {
   return rememberFor(knownBlocks, plan, `${count} ${hard.join(' ')}`, () =>
@@ -73,13 +74,14 @@ function wordsFor(plan: RegularPlan, count: number, hard: readonly number[]): Wo
   );
 }
 
-function groupFor({ plan, replicates, blocks, hard }: CornerQuestion, blockWords: Word[]): WholePlotWords {
+function groupFor(
+  { plan, replicates, blocks, hard }: CornerQuestion,
+  blockWords: Word[],
+): WholePlotWords | null {
   return rememberFor(knownPlots, plan, [replicates, blocks, ...hard, '|', ...blockWords].join(' '), () =>
     chooseWholePlotWords({ plan, hard: hard.map(wordOf), blockWords, blocks, replicates }),
   );
 }
-
-const wordOf = (index: number): Word => 1 << index;
 
 function rememberFor<Value>(
   memory: WeakMap<RegularPlan, Map<string, Value>>,

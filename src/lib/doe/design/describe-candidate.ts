@@ -1,5 +1,6 @@
 import type { Brief } from '../brief.ts';
 import type { Candidate } from './candidate.ts';
+import { catalogue } from './catalogue.ts';
 import { worstEffectVariance } from './effect-variance.ts';
 import { groupBy } from './group-by.ts';
 import { listWarnings } from './list-warnings.ts';
@@ -79,7 +80,13 @@ function nameCandidate({ structure, centerPoints }: Candidate): string {
   const { k, baseRuns, replicates, blocks, generators, irregular, terms } = structure;
   const parts = [`k${k}`, `n${baseRuns}`, `r${replicates}`, `c${centerPoints}`, `b${blocks}`];
   if (structure.wholePlots) parts.push(`w${structure.wholePlots.count}`);
-  if (generators.some((generator) => generator.includes('-'))) parts.push(generators.join('.'));
+  if (!isListed(generators, k)) parts.push(generators.join('.'));
   if (irregular) parts.push(`t${terms.length}`);
   return parts.join('-');
+}
+
+/** Whether a plan stands in the catalogue as it is, without a turned sign or exchanged letters. */
+function isListed(generators: readonly string[], k: number): boolean {
+  const written = generators.join('.');
+  return catalogue.some((entry) => entry.k === k && entry.generators.join('.') === written);
 }

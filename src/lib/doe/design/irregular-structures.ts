@@ -66,24 +66,46 @@ function splitIntoBlocks(brief: Brief, corners: readonly number[][]): LayoutRow[
   return corners.map((x, row) => ({ x, block: (parts[row] ?? 0) + 1, center: false }));
 }
 
-/** Two whole plots for each combination of the hard settings, alike in all easy ones. null without hard settings or with blocks. */
-function groupIntoPlots(
-  brief: Brief,
-  all: readonly number[][],
-): { rows: LayoutRow[]; wholePlots: { count: number; judged: boolean } } | null {
+interface Plots {
+  rows: LayoutRow[];
+  wholePlots: { count: number; judged: boolean };
+}
+
+/**
+ * Two whole plots for each combination of the hard settings, alike in all easy ones; where that would keep an easy setting the same within each whole
+ * plot, one. null where one would do so too, with blocks, or without hard settings.
+ */
+function groupIntoPlots(brief: Brief, corners: readonly number[][]): Plots | null {
   const hard = brief.factors.flatMap((factor, index) => (factor.hardToChange ? [index] : []));
   if (hard.length === 0 || (brief.blocks?.count ?? 1) > 1) return null;
-  const groups = groupBy(all, (x) => hard.map((index) => x[index]).join(' '));
+  const easy = brief.factors.flatMap((factor, index) => (factor.hardToChange ? [] : [index]));
+  const groups = groupBy(corners, (x) => hard.map((index) => x[index]).join(' '));
+  const plots = [2, 1].map((parts) => splitGroups(brief, groups, parts));
+  return plots.find(({ rows }) => changeWithinPlots(rows, easy)) ?? null;
+}
+
+function splitGroups(brief: Brief, groups: readonly (readonly number[][])[], most: number): Plots {
   const rows: LayoutRow[] = [];
   let plots = 0;
   for (const corners of groups) {
-    const parts = corners.length >= 4 ? 2 : 1;
+    const parts = corners.length >= 4 ? most : 1;
     const split = splitEvenly(termColumns(brief, corners), corners.length, parts);
     for (const [row, x] of corners.entries())
       rows.push({ x, block: 1, wholePlot: plots + (split[row] ?? 0) + 1, center: false });
     plots += parts;
   }
   return { rows, wholePlots: { count: plots, judged: plots >= 2 * groups.length } };
+}
+
+/** Whether each of some settings changes within one whole plot or more. A setting that never does is hard to change, whatever it was called. */
+function changeWithinPlots(rows: readonly LayoutRow[], settings: readonly number[]): boolean {
+  const plots = groupBy(rows, (row) => row.wholePlot);
+  return (
+    plots.some((plot) => plot.length > 1) &&
+    settings.every((setting) =>
+      plots.some((plot) => plot.some((row) => row.x[setting] !== plot[0]?.x[setting])),
+    )
+  );
 }
 
 /** Main effects count more than pairs: their columns are given twice the weight. */

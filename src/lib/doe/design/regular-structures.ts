@@ -1,11 +1,12 @@
 import type { Brief } from '../brief.ts';
-import { spanChains } from './block-words.ts';
+import { fixesOtherSetting, spanChains } from './block-words.ts';
 import { catalogue } from './catalogue.ts';
 import { arrangeCorners } from './corner-rows.ts';
 import { isForbidden } from './forbidden.ts';
+import { reassignPair } from './reassign-letters.ts';
 import { buildRegularPlan, listAliases, type RegularPlan, writeDefiningWords } from './regular-plan.ts';
 import type { Structure } from './structure.ts';
-import { lengthOfWord, readWord, writeWord } from './words.ts';
+import { lengthOfWord, readWord, wordOf, writeWord } from './words.ts';
 
 const mostCorners = 32;
 
@@ -18,26 +19,53 @@ export function listRegularStructures(brief: Brief): Structure[] {
   const hard = brief.factors.flatMap((factor, index) => (factor.hardToChange ? [index] : []));
   return catalogue
     .filter((entry) => entry.k === k)
-    .flatMap((entry) => findAllowedPlan(brief, k, entry.generators) ?? [])
-    .flatMap((plan) =>
-      listReplicates(plan).flatMap((replicates) => {
-        const groupings = hard.length > 0 ? [[], hard] : [[]];
-        return groupings.flatMap((grouped) => describe({ brief, plan, replicates, grouped }) ?? []);
-      }),
-    );
+    .flatMap((entry) => {
+      const shuffled = findAllowedPlans(brief, [entry.generators]);
+      const grouped = findAllowedPlans(brief, listAssignments(k, entry.generators, hard)).filter(
+        (plan) => !fixesOtherSetting(plan, [], hard.map(wordOf)),
+      );
+      return listReplicates(entry.runs).flatMap((replicates) => [
+        ...shuffled.flatMap((plan) => describe({ brief, plan, replicates, grouped: [] }) ?? []),
+        ...chooseGrouped(
+          grouped.flatMap((plan) => describe({ brief, plan, replicates, grouped: hard }) ?? []),
+        ),
+      ]);
+    });
 }
 
-function listReplicates(plan: RegularPlan): number[] {
-  const most = mostCorners / plan.corners.length;
-  return [1, 2, 3, 4, 6, 8, 12, 16].filter(
-    (replicates) => replicates <= most && plan.corners.length * replicates >= 4,
-  );
+/** The columns that hard settings may have. One by itself stands as well in any; two must not make a third by their product. */
+function listAssignments(
+  k: number,
+  generators: readonly string[],
+  hard: readonly number[],
+): (readonly string[])[] {
+  const [first, second] = hard;
+  if (first === undefined) return [];
+  return second === undefined ? [generators] : reassignPair(k, generators, [first, second]);
+}
+
+/** Of one plan with its columns given out in different ways, the first that judges the hard settings, else the first. */
+function chooseGrouped(structures: readonly Structure[]): Structure[] {
+  const [first] = structures;
+  if (first === undefined) return [];
+  return [structures.find(({ wholePlots }) => wholePlots?.judged) ?? first];
+}
+
+function listReplicates(corners: number): number[] {
+  const most = mostCorners / corners;
+  return [1, 2, 3, 4, 6, 8, 12, 16].filter((replicates) => replicates <= most && corners * replicates >= 4);
 }
 
 // Plans depend on nothing but their generators, so each is built once a process.
 const builtPlans = new Map<string, RegularPlan>();
 
-function findAllowedPlan(brief: Brief, k: number, generators: readonly string[]): RegularPlan | null {
+/** Of each set of generators the plan with the first signs that no rule stands against. */
+function findAllowedPlans(brief: Brief, assignments: readonly (readonly string[])[]): RegularPlan[] {
+  return assignments.flatMap((generators) => findAllowedPlan(brief, generators) ?? []);
+}
+
+function findAllowedPlan(brief: Brief, generators: readonly string[]): RegularPlan | null {
+  const k = brief.factors.length;
   const choices = brief.forbidden.length === 0 ? 1 : 2 ** generators.length;
   for (let signs = 0; signs < choices; signs++) {
     const signed = generators.map((generator, index) =>

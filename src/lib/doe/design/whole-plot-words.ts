@@ -26,9 +26,10 @@ const enoughDf = 2;
  * How to group the corners of a regular plan so that hard settings change seldom: the fewest whole plots that leave two or more contrasts among them
  * for error; failing that, those that leave most.
  *
- * No main effect of an easy setting is ever put between whole plots, and as few pairs as possible.
+ * No main effect of an easy setting is ever put between whole plots, and as few pairs as possible. null where it cannot be helped, as where two hard
+ * settings multiply to a third, or where each whole plot would be a single run and nothing would be grouped.
  */
-export function chooseWholePlotWords(question: WholePlotQuestion): WholePlotWords {
+export function chooseWholePlotWords(question: WholePlotQuestion): WholePlotWords | null {
   const { plan, hard, blockWords } = question;
   const needed = independent(plan, [...hard, ...blockWords]);
   const free = plan.chains.map((chain) => chain[0] ?? 0);
@@ -44,7 +45,9 @@ export function chooseWholePlotWords(question: WholePlotQuestion): WholePlotWord
       if (better) best = { words, ...count };
     }
   }
-  return best === null ? { words: needed, judged: false } : { words: best.words, judged: true };
+  if (best !== null) return { words: best.words, judged: true };
+  const groupsNothing = 2 ** needed.length >= plan.corners.length;
+  return groupsNothing || fixesOtherSetting(plan, needed, hard) ? null : { words: needed, judged: false };
 }
 
 function independent(plan: RegularPlan, words: readonly Word[]): Word[] {

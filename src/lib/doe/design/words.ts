@@ -10,6 +10,11 @@ export function letterAt(index: number): Letter {
   return String.fromCharCode(firstLetter + index);
 }
 
+/** The word of one setting, by its index from 0. */
+export function wordOf(index: number): Word {
+  return 1 << index;
+}
+
 /** The letters of k settings: 'A', 'B', … */
 export function lettersUpTo(k: number): Letter[] {
   return Array.from({ length: k }, (_, index) => letterAt(index));
