@@ -41,6 +41,7 @@ export type {
   PlannedRun,
   Proposal,
 } from './design/proposal.ts';
+export { errorPlanSchema, proposalSchema } from './design/proposal-schema.ts';
 export { proposePlans } from './design/propose-plans.ts';
 export { countTimeAndMoney } from './design/time-and-money.ts';
 export * from './distributions/index.ts';
