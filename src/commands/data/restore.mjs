@@ -1,5 +1,5 @@
 // @ts-check
-import { copyFileSync, existsSync, renameSync, rmSync } from 'node:fs';
+import { copyFileSync, existsSync, linkSync, renameSync, rmSync } from 'node:fs';
 import { join, resolve } from 'node:path';
 import { Refusal, runCommand } from '../begin/refusal.mjs';
 import { leaveOnSignals } from '../machine/child.mjs';
@@ -53,8 +53,10 @@ function keepReplaced(dataFolder, databaseFile) {
   if (!existsSync(databaseFile)) return '';
   const stamp = new Date().toISOString().replace(/[:.]/g, '-');
   const kept = join(dataFolder, `trywell-replaced-${stamp}.sqlite`);
+  // A second name instead of a move: until the new file takes the old name, there is always a database under it.
   for (const ending of companions)
-    if (existsSync(databaseFile + ending)) renameSync(databaseFile + ending, kept + ending);
+    if (existsSync(databaseFile + ending)) linkSync(databaseFile + ending, kept + ending);
+  for (const ending of companions.slice(1)) rmSync(databaseFile + ending, { force: true });
   return kept;
 }
 

@@ -20,7 +20,17 @@ const columnWords: Readonly<Record<ImportColumn, readonly string[]>> = {
     'dien thoai',
     'so',
   ],
-  mail: ['mail', 'email', 'e mail', 'correo', 'poczta', 'adres mailowy', 'thu', 'dia chi thu'],
+  mail: [
+    'mail',
+    'email',
+    'e mail',
+    'correo',
+    'poczta',
+    'adres mailowy',
+    'thu',
+    'dia chi thu',
+    'dia chi email',
+  ],
   language: ['language', 'idioma', 'lengua', 'jezyk', 'ngon ngu', 'tieng'],
   roles: ['roles', 'role', 'funciones', 'funcion', 'role w zakladzie', 'rola', 'vai tro'],
   days: ['days', 'dias', 'dni', 'ngay'],
@@ -29,7 +39,7 @@ const columnWords: Readonly<Record<ImportColumn, readonly string[]>> = {
 };
 
 const roleWords: Readonly<Record<PersonRole, readonly string[]>> = {
-  operator: ['operator', 'operario', 'operaria', 'operador', 'nguoi van hanh', 'van hanh'],
+  operator: ['operator', 'operario', 'operaria', 'operador', 'operadora', 'nguoi van hanh', 'van hanh'],
   supervisor: [
     'supervisor',
     'supervisora',
