@@ -4,7 +4,7 @@ import { REGULARITIES } from '../../../src/lib/doe/advice/effect-regularities.ts
 import { calibrate, shareCalls } from './calibration.ts';
 import { simulateConfirmation, simulateNoGain } from './confirmation.ts';
 import { falseLikelyOfRejects } from './counts.ts';
-import { PLANS, WHOLE_PLOT_PLAN } from './plans.ts';
+import { PLANS, WHOLE_PLOT_PLANS } from './plans.ts';
 import { listProposals, simulatePromise } from './promises.ts';
 import { asShare, createRandomSource, markdownTable } from './simulation.ts';
 import { measureTimings } from './timing.ts';
@@ -95,7 +95,7 @@ function calibration(): void {
   const scenarios = [
     ...PLANS.flatMap((plan) => plan.active.map((active) => ({ plan, active, plotSd: 0 }))),
     ...[0.5, 2].flatMap((plotSd) =>
-      WHOLE_PLOT_PLAN.active.map((active) => ({ plan: WHOLE_PLOT_PLAN, active, plotSd })),
+      WHOLE_PLOT_PLANS.flatMap((plan) => plan.active.map((active) => ({ plan, active, plotSd }))),
     ),
   ];
   const rows = scenarios.map(({ plan, active, plotSd }) => {

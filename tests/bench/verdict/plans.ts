@@ -80,13 +80,28 @@ export const PLANS: SimulatedPlan[] = [
   { name: '2^(5-1)', rung: 'pseudo', runs: corners(4, [[0, 1, 2, 3]]), active: [0, 1, 3, 6] },
 ];
 
-/** A is hard to change: whole plots of two runs by the signs of A, BC and CD, four at each level of A. */
-export const WHOLE_PLOT_PLAN: SimulatedPlan = {
-  name: '2^4 in eight whole plots, A hard to change',
-  rung: 'strata',
-  runs: corners(4).map((run) => ({
-    ...run,
-    wholePlot: 4 * sign(run, [0]) + 2 * sign(run, [1, 2]) + sign(run, [2, 3]) + 1,
-  })),
-  active: [0, 3],
-};
+export const WHOLE_PLOT_PLANS: SimulatedPlan[] = [
+  {
+    // Whole plots of two runs by the signs of A, BC and CD, four at each level of A.
+    name: '2^4 in eight whole plots, A hard to change',
+    rung: 'strata',
+    runs: corners(4).map((run) => ({
+      ...run,
+      wholePlot: 4 * sign(run, [0]) + 2 * sign(run, [1, 2]) + sign(run, [2, 3]) + 1,
+    })),
+    active: [0, 3],
+  },
+  {
+    // Two whole plots at each level of A, and four middle runs in a whole plot of their own.
+    name: '2^(5-1) + 4 middles in five whole plots, A hard to change',
+    rung: 'strata',
+    runs: [
+      ...corners(4, [[0, 1, 2, 3]]).map((run) => ({
+        ...run,
+        wholePlot: 2 * sign(run, [0]) + sign(run, [1, 2, 3]) + 1,
+      })),
+      ...middles(5, 4).map((run) => ({ ...run, wholePlot: 5 })),
+    ],
+    active: [0, 5],
+  },
+];

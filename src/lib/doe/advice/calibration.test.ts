@@ -1,15 +1,16 @@
 import { describe, expect, it } from 'vitest';
 import { calibrate } from '../../../../tests/bench/verdict/calibration.ts';
 import { simulateConfirmation } from '../../../../tests/bench/verdict/confirmation.ts';
-import { PLANS, WHOLE_PLOT_PLAN } from '../../../../tests/bench/verdict/plans.ts';
+import { PLANS, WHOLE_PLOT_PLANS } from '../../../../tests/bench/verdict/plans.ts';
 import { createRandomSource } from '../../../../tests/bench/verdict/simulation.ts';
 import { measureWorth } from '../../../../tests/bench/verdict/worth.ts';
+import { REGULARITIES } from './effect-regularities.ts';
 
 // Short versions, with fixed seeds, of `npm run bench:verdict`; its tables stand in tests/reports. Bounds are the promise plus four standard errors.
-const EXPERIMENTS = 400;
+const EXPERIMENTS = 300;
 const atMost = (share: number) => share + 4 * Math.sqrt((share * (1 - share)) / EXPERIMENTS);
 
-const scenarios = [...PLANS, WHOLE_PLOT_PLAN]
+const scenarios = [...PLANS, ...WHOLE_PLOT_PLANS]
   .filter(({ runs }) => runs.length <= 20)
   .map((plan) => ({ plan, active: plan.active.at(-1) ?? 0 }));
 
@@ -33,16 +34,27 @@ describe('advice', () => {
   it('comes near the choice that knows noise and effect size, and beats acting on what is significant', () => {
     const { shares } = measureWorth({
       cell: { factors: 4, runs: 16, noise: 1 },
-      processes: 300,
+      processes: 200,
       random: createRandomSource(13),
     });
     expect(shares.bestBet).toBeGreaterThan(shares.shrunken - 0.03);
     expect(shares.bestBet).toBeGreaterThan(shares.significantOnly + 0.15);
   });
 
+  it('does not take interactions as large as main effects for noise', () => {
+    const { shares } = measureWorth({
+      cell: { factors: 5, runs: 16, noise: 0.25 },
+      processes: 150,
+      random: createRandomSource(19),
+      rules: { ...REGULARITIES, size: [0, 1, 1, 1] },
+    });
+    expect(shares.bestBet).toBeGreaterThan(shares.allEstimates - 0.03);
+  });
+
   it('predicts what check runs will show', () => {
-    const found = simulateConfirmation({ trials: 400, noise: 1, random: createRandomSource(17) });
+    const found = simulateConfirmation({ trials: 400, noise: 0.25, random: createRandomSource(17) });
     expect(found.covered / found.trials).toBeGreaterThan(0.91);
+    expect(found.covered / found.trials).toBeLessThan(0.99);
     expect(found.effectsCovered / found.effects).toBeGreaterThan(0.93);
   });
 });

@@ -1,5 +1,5 @@
 import { studentTTwoSided, studentTUpperQuantile } from '../distributions/student-t.ts';
-import type { RatioCell } from './effect-to-noise.ts';
+import type { BeliefCell } from './effect-to-noise.ts';
 import type { NuisanceSpace } from './nuisance-space.ts';
 
 export interface LeftOutReading {
@@ -14,22 +14,20 @@ export interface LeftOutReading {
  * (G y)_i / G_ii with variance 1 / G_ii times the noise (S. Sundararajan & S. S. Keerthi, 2001, Neural Computation 13).
  */
 export function leaveOneOut(known: {
-  eigenvalues: readonly number[];
-  vectors: readonly (readonly number[])[];
-  scores: readonly number[];
-  mixture: readonly RatioCell[];
+  cells: readonly BeliefCell[];
   df: number;
   priorSs: number;
   nuisance: NuisanceSpace;
   roots: readonly number[] | undefined;
   readings: readonly number[];
 }): LeftOutReading[] {
-  const { eigenvalues, vectors, scores, mixture, df, priorSs, nuisance, roots, readings } = known;
+  const { cells, df, priorSs, nuisance, roots, readings } = known;
   return readings.map((reading, row) => {
     let p = 0;
     let mean = 0;
     let halfWidth = 0;
-    for (const { r, weight } of mixture) {
+    for (const { structure, scores, r, weight } of cells) {
+      const { eigenvalues, vectors } = structure;
       let precision = -nuisance.leverage(row);
       let pulled = 0;
       let ss = priorSs;

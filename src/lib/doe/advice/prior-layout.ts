@@ -1,9 +1,9 @@
 import { EigenvalueDecomposition, Matrix } from 'ml-matrix';
 import type { Layout } from '../analysis/layout.ts';
 import { unitContrasts } from '../analysis/model-layout.ts';
-import { termColumn } from '../analysis/terms.ts';
+import { listTerms, termColumn } from '../analysis/terms.ts';
 import { dot } from '../linear-algebra/dot.ts';
-import { priorTerms } from './effect-regularities.ts';
+import { INTERACTION_SIZES, priorVariance } from './effect-regularities.ts';
 import { type NuisanceSpace, nuisanceSpace } from './nuisance-space.ts';
 
 /** Prior variance of the bend, in units of that of an active main effect: half its size. */
@@ -13,13 +13,22 @@ const BEND_VARIANCE = 0.25;
 export interface PriorLayout {
   /** Terms of up to three letters, then 'bend': by how much the middle lies off the surface through the corners. */
   terms: string[];
-  variances: number[];
   /** Each run's row of the columns, times the root of its weight. */
   columns: number[][];
   /** Roots of the weights; undefined: all 1. */
   roots: readonly number[] | undefined;
   /** Constant and blocks, of which nothing is known beforehand. */
   nuisance: NuisanceSpace;
+  /** One for each size that interactions may have against main effects. */
+  structures: PriorStructure[];
+}
+
+/** What effects are expected if interactions have a certain size against main effects. */
+export interface PriorStructure {
+  /** Prior probability. */
+  chance: number;
+  /** Of the coefficients, in units of the variance of an active main effect. */
+  variances: number[];
   /** Eigenvalues and eigenvectors of the prior covariance of the readings after the nuisance is projected out. */
   eigenvalues: number[];
   vectors: number[][];
@@ -36,30 +45,27 @@ function buildPrior({ letters, points, weights }: Layout): PriorLayout {
   const roots = weights?.map(Math.sqrt);
   const rooted = (column: readonly number[]) =>
     roots ? column.map((value, row) => value * (roots[row] ?? 1)) : [...column];
-  const prior = [
-    ...priorTerms(letters).map(({ term, variance }) => ({
-      term,
-      variance,
-      column: rooted(termColumn(term, letters, points)),
-    })),
-    { term: 'bend', variance: BEND_VARIANCE, column: rooted(points.map((point) => (point.center ? 1 : 0))) },
+  const terms = listTerms(letters, 3);
+  const columns = [
+    ...terms.map((term) => rooted(termColumn(term, letters, points))),
+    rooted(points.map((point) => (point.center ? 1 : 0))),
   ];
   const fixed = [points.map(() => 1), ...unitContrasts(points.map((point) => point.block))];
   const nuisance = nuisanceSpace(fixed.map(rooted));
-  const projected = prior.map(({ column }) => nuisance.projectOut(column));
-  const variances = prior.map(({ variance }) => variance);
-  const { eigenvalues, vectors } = decompose(projected, variances, points.length);
+  const projected = columns.map((column) => nuisance.projectOut(column));
   return {
-    terms: prior.map(({ term }) => term),
-    variances,
-    columns: prior.map(({ column }) => column),
+    terms: [...terms, 'bend'],
+    columns,
     roots,
     nuisance,
-    eigenvalues,
-    vectors,
-    loadings: projected.map((column, index) => {
-      const variance = variances[index] ?? 0;
-      return vectors.map((vector) => variance * dot(vector, column));
+    structures: INTERACTION_SIZES.map(({ chance, sizes }) => {
+      const variances = [...terms.map((term) => priorVariance(term, sizes)), BEND_VARIANCE];
+      const { eigenvalues, vectors } = decompose(projected, variances, points.length);
+      const loadings = projected.map((column, index) => {
+        const variance = variances[index] ?? 0;
+        return vectors.map((vector) => variance * dot(vector, column));
+      });
+      return { chance, variances, eigenvalues, vectors, loadings };
     }),
   };
 }

@@ -1,6 +1,6 @@
 import type { Analysis, AnalysisInput } from '../analysis/analysis.ts';
 import { selectMeasuredRuns } from '../analysis/measured-runs.ts';
-import { termValue } from '../analysis/terms.ts';
+import { lettersOf } from '../analysis/terms.ts';
 import type { Brief, ResponseSpec } from '../brief.ts';
 import { type BeliefMixture, beliefOf } from './belief.ts';
 import { type EffectPosterior, inferEffects } from './effect-posterior.ts';
@@ -40,8 +40,19 @@ export function modelResult(brief: Brief, result: ResultInput): ResultModel {
     noise: expectedNoise(brief, spec, analysis),
   });
   const numbers = input.factors.flatMap((factor, index) => (factor.kind === 'number' ? [index] : []));
-  const values = (x: readonly number[]) =>
-    posterior.terms.map((term) => (term === 'bend' ? offCorners(x, numbers) : termValue(term, letters, x)));
+  // Hundreds of settings are compared, so the letters of each term are looked up once.
+  const places = layout.remember('places of terms', () =>
+    posterior.terms.map((term) =>
+      term === 'bend' ? null : lettersOf(term).map((letter) => letters.indexOf(letter)),
+    ),
+  );
+  const valueAt = (factors: readonly number[] | null, x: readonly number[]) => {
+    if (factors === null) return offCorners(x, numbers);
+    let product = 1;
+    for (const factor of factors) product *= x[factor] ?? 0;
+    return product;
+  };
+  const values = (x: readonly number[]) => places.map((factors) => valueAt(factors, x));
   const scale = responseScale(analysis.scale);
   const partNoise = noiseOfPart(analysis, posterior.noiseVariance);
   return {
@@ -49,7 +60,12 @@ export function modelResult(brief: Brief, result: ResultInput): ResultModel {
     scale,
     posterior,
     partNoise,
-    expected: (x) => values(x).reduce((sum, value, index) => sum + value * (posterior.means[index] ?? 0), 0),
+    expected(x) {
+      let sum = 0;
+      for (let term = 0; term < places.length; term++)
+        sum += (posterior.means[term] ?? 0) * valueAt(places[term] ?? null, x);
+      return sum;
+    },
     level: (x) => posterior.level(values(x)),
     change(from, to) {
       const start = values(from);

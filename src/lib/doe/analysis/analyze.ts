@@ -13,14 +13,14 @@ import type {
 import { estimateCornerContrasts } from './corner-contrasts.ts';
 import { diagnose } from './diagnostics.ts';
 import { pureErrorOf } from './error-spread.ts';
-import { type ErrorFindings, estimateError, negligibleSpread } from './estimate-error.ts';
+import { type ErrorFindings, type ErrorQuestion, estimateError, negligibleSpread } from './estimate-error.ts';
 import { computeLenthLimits } from './lenth.ts';
 import { type MeasuredRun, selectMeasuredRuns } from './measured-runs.ts';
 import { layOutModel, type ModelLayout } from './model-layout.ts';
 import { spreadWithinRuns } from './spread-within-runs.ts';
 import { listTerms } from './terms.ts';
 import { tabulateVariance } from './variance-table.ts';
-import { limitOf, testEstimate, type Yardstick } from './yardstick.ts';
+import { type Family, limitOf, testEstimate, type Yardstick } from './yardstick.ts';
 
 /**
  * From readings to effects: least squares, the error they are judged by, tests and intervals, and the audit figures.
@@ -51,21 +51,20 @@ export function analyze(input: AnalysisInput): Analysis {
   const fit = model.model.fit(y);
   const pureError = pureErrorOf({ layout, y });
   const residual = { df: model.model.residualDf, ss: model.model.residualDf > 0 ? fit.residualSs : 0 };
-  const family = Math.max(1, model.terms.length + (withCurvature.hasCurvature ? 1 : 0));
+  const stratumOf = stratumFinder(runs, input.error, plan);
+  const familyOf = familyFinder(model, withCurvature, plan, stratumOf);
   const findings =
     input.error === 'residual'
-      ? residualFindings(residual, family, pureError)
+      ? residualFindings(residual, familyOf(undefined), pureError)
       : estimateError({
           layout,
           y,
           terms: [...new Set([...pairs, ...model.terms])],
           plan,
           theory: measured.theory,
-          family,
-          hasCurvature: withCurvature.hasCurvature,
+          familyOf,
         });
 
-  const stratumOf = stratumFinder(runs, findings.estimate);
   const curvature = withCurvature.hasCurvature
     ? estimateCurvature(withCurvature, withCurvature === model ? fit : withCurvature.model.fit(y), {
         findings,
@@ -188,15 +187,40 @@ function estimateCurvature(layout: ModelLayout, fit: LeastSquaresFit, context: T
 }
 
 /** Which stratum a column is judged in; undefined without whole plots. */
-function stratumFinder(runs: readonly MeasuredRun[], estimate: ErrorEstimate): TestContext['stratumOf'] {
-  if (estimate.strata === undefined) return () => undefined;
+function stratumFinder(
+  runs: readonly MeasuredRun[],
+  error: AnalysisInput['error'],
+  { strata }: ErrorPlan,
+): TestContext['stratumOf'] {
+  if (strata === undefined || error === 'residual') return () => undefined;
   const plots = indicatorColumns(runs.map((run) => run.wholePlot));
   return (column) => (isConstantWithin(plots, column) ? 'whole' : 'sub');
 }
 
+/** Which effects are judged together: all of the result, those of each stratum by that stratum's error. */
+function familyFinder(
+  model: ModelLayout,
+  withCurvature: ModelLayout,
+  plan: ErrorPlan,
+  stratumOf: TestContext['stratumOf'],
+): ErrorQuestion['familyOf'] {
+  const places = model.terms.map((term) => stratumOf(model.columns[model.columnOf(term)] ?? []));
+  const bend = withCurvature.hasCurvature
+    ? [stratumOf(withCurvature.columns[withCurvature.blockColumns + 1] ?? [])]
+    : [];
+  const isJudged = (stratum: StratumError['name'] | undefined) =>
+    plan.strata?.find(({ name }) => name === stratum)?.rung !== 'none';
+  const strata = new Set([...places, ...bend].filter(isJudged)).size;
+  return (stratum) => ({
+    tests: Math.max(1, [...places, ...bend].filter((place) => place === stratum).length),
+    hasCurvature: bend.includes(stratum),
+    strata: Math.max(1, strata),
+  });
+}
+
 function residualFindings(
   residual: { df: number; ss: number },
-  family: number,
+  family: Family,
   pureError: { df: number; ss: number },
 ): ErrorFindings {
   const { df, ss } = residual;

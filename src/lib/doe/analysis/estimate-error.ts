@@ -9,7 +9,7 @@ import {
   type SpreadQuestion,
 } from './error-spread.ts';
 import { estimatePseudoErrors } from './pseudo-error.ts';
-import type { Yardstick } from './yardstick.ts';
+import type { Family, Yardstick } from './yardstick.ts';
 
 /** What the readings say about error, and what each estimate is to be held against. */
 export interface ErrorFindings {
@@ -24,9 +24,8 @@ export interface ErrorQuestion extends SpreadQuestion {
   plan: ErrorPlan;
   /** Variance of a run by theory (rejects, flaws): a floor. */
   theory: number | null;
-  /** Effects judged together, curvature included. */
-  family: number;
-  hasCurvature: boolean;
+  /** Effects judged together: all, or those of one stratum. */
+  familyOf(stratum: StratumError['name'] | undefined): Family;
 }
 
 /** Error by the ladder; the rung comes from the plan, the spread from the readings. */
@@ -39,6 +38,7 @@ export function estimateError(question: ErrorQuestion): ErrorFindings {
     const rung = climb({
       question,
       rung: plan.rung,
+      family: question.familyOf(undefined),
       pureError,
       leftover: leftoverSpread(question),
       contrasts: () => estimateCornerContrasts(question),
@@ -54,6 +54,7 @@ export function estimateError(question: ErrorQuestion): ErrorFindings {
   const sub = climb({
     question,
     rung: rungOf('sub'),
+    family: question.familyOf('sub'),
     pureError: pureErrorOf(question, 'wholePlot'),
     leftover: leftoverSpread(question, 'wholePlot'),
     contrasts: () => estimateCornerContrasts(question, 'wholePlot'),
@@ -62,6 +63,7 @@ export function estimateError(question: ErrorQuestion): ErrorFindings {
   const whole = climb({
     question,
     rung: rungOf('whole'),
+    family: question.familyOf('whole'),
     pureError: between,
     leftover: between,
     contrasts: () => null,
@@ -98,11 +100,12 @@ interface Rung {
 function climb(step: {
   question: ErrorQuestion;
   rung: ErrorRung;
+  family: Family;
   pureError: Spread;
   leftover: Spread;
   contrasts: () => CornerContrasts | null;
 }): Rung {
-  const { question, rung, pureError, leftover } = step;
+  const { question, rung, family, pureError, leftover } = step;
   const floor = Math.sqrt(question.theory ?? 0);
   const negligible = negligibleSpread(question);
   const lifted = (sd: number) => Math.max(floor, sd <= negligible ? 0 : sd);
@@ -115,13 +118,13 @@ function climb(step: {
         source: rung,
         df,
         sd,
-        yardstickFor: () => ({ kind: 't', sd, df, family: question.family }),
+        yardstickFor: () => ({ kind: 't', sd, df, family }),
       };
     }
   }
   if (rung === 'pseudo' || rung === 'pseudo+replicates') {
     const contrasts = step.contrasts();
-    if (contrasts !== null) return pseudoRung({ question, rung, pureError, contrasts, lifted });
+    if (contrasts !== null) return pseudoRung({ rung, family, pureError, contrasts, lifted });
   }
   if (question.theory !== null && floor > 0)
     return { source: 'known', df: null, sd: floor, yardstickFor: () => ({ kind: 'known', sd: floor }) };
@@ -129,13 +132,13 @@ function climb(step: {
 }
 
 function pseudoRung(step: {
-  question: ErrorQuestion;
   rung: ErrorRung;
+  family: Family;
   pureError: Spread;
   contrasts: CornerContrasts;
   lifted: (sd: number) => number;
 }): Rung {
-  const { question, rung, pureError, contrasts, lifted } = step;
+  const { rung, family, pureError, contrasts, lifted } = step;
   // An effect is the difference of two means of half the corners, so its error is 2 / sqrt(corners) of a run's.
   const toRun = Math.sqrt(contrasts.runs) / 2;
   const errors = estimatePseudoErrors({
@@ -144,7 +147,6 @@ function pseudoRung(step: {
     replicateDf: pureError.df,
   });
   const plan = { contrasts: contrasts.effects.length, replicateDf: pureError.df };
-  const familyHasOutside = question.hasCurvature;
   const overall = lifted(errors.overall * toRun);
   return {
     source: rung,
@@ -153,9 +155,8 @@ function pseudoRung(step: {
     yardstickFor(column) {
       const place = column === null ? -1 : contrasts.placeOf(column);
       const leftOut = errors.leaveOneOut[place];
-      if (leftOut === undefined)
-        return { kind: 'pseudo', sd: overall, plan, outside: true, familyHasOutside };
-      return { kind: 'pseudo', sd: lifted(leftOut * toRun), plan, outside: false, familyHasOutside };
+      if (leftOut === undefined) return { kind: 'pseudo', sd: overall, plan, outside: true, family };
+      return { kind: 'pseudo', sd: lifted(leftOut * toRun), plan, outside: false, family };
     },
   };
 }

@@ -15,11 +15,20 @@ export type Yardstick =
   /** No error at all, or no spread in it. */
   | { kind: 'none' }
   /** A standard deviation with degrees of freedom. */
-  | { kind: 't'; sd: number; df: number; family: number }
+  | { kind: 't'; sd: number; df: number; family: Family }
   /** The typical contrast: `sd` is the error of a run according to the contrasts that count for this estimate. */
-  | { kind: 'pseudo'; sd: number; plan: PseudoErrorPlan; outside: boolean; familyHasOutside: boolean }
+  | { kind: 'pseudo'; sd: number; plan: PseudoErrorPlan; outside: boolean; family: Family }
   /** A variance known by theory: never judged together, as the theory is only a floor. */
   | { kind: 'known'; sd: number };
+
+/** Effects judged together because they share one error estimate. */
+export interface Family {
+  /** How many, curvature included. */
+  tests: number;
+  hasCurvature: boolean;
+  /** Strata whose effects are judged: families with independent errors, together one result's. */
+  strata: number;
+}
 
 const UNTESTED: Tested = { se: null, df: null, t: null, p: null, pFamily: null, ci: null };
 
@@ -64,15 +73,29 @@ function tailsOf(
   size: number,
 ): { p: number; pFamily: number | null } {
   if (yardstick.kind === 'known') return { p: 2 * normalUpperTail(size), pFamily: null };
+  const { family } = yardstick;
   if (yardstick.kind === 't') {
     const p = studentTTwoSided(size, yardstick.df);
-    const pFamily = studentizedMaximumModulusUpperTail(size, yardstick.family, yardstick.df);
-    return { p, pFamily: Math.min(1, Math.max(p, pFamily)) };
+    return {
+      p,
+      pFamily: overStrata(studentizedMaximumModulusUpperTail(size, family.tests, yardstick.df), p, family),
+    };
   }
-  const { plan, outside, familyHasOutside } = yardstick;
+  const { plan, outside } = yardstick;
   const p = pseudoErrorUpperTail(plan, outside ? 'outside' : 'single', size);
-  const pFamily = pseudoErrorUpperTail(plan, familyHasOutside ? 'familyAndOutside' : 'family', size);
-  return { p, pFamily: Math.min(1, Math.max(p, pFamily)) };
+  const pFamily = pseudoErrorUpperTail(plan, family.hasCurvature ? 'familyAndOutside' : 'family', size);
+  return { p, pFamily: overStrata(pFamily, p, family) };
+}
+
+/**
+ * From judged together within a stratum to judged together within the result.
+ *
+ * Errors of strata are independent, each with its own degrees of freedom, so one maximum over all terms has no tail of its own. The largest ratio of
+ * each stratum has one: if each of S strata is held to a tail p with 1 - (1 - p)^S = alpha, the chance that none is passed is (1 - p)^S = 1 - alpha.
+ */
+function overStrata(withinStratum: number, p: number, { strata }: Family): number {
+  const together = -Math.expm1(strata * Math.log1p(-Math.min(1, withinStratum)));
+  return Math.min(1, Math.max(p, together));
 }
 
 // Quantiles cost a hundred times what the rest of a test does, and a few of them serve all trials.
