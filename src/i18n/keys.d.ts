@@ -7,6 +7,8 @@ import type people from '../../locales/en/people.json';
 import type shop from '../../locales/en/shop.json';
 import type signIn from '../../locales/en/sign-in.json';
 import type texts from '../../locales/en/texts.json';
+import type wizard from '../../locales/en/wizard.json';
+import type wizardFrame from '../../locales/en/wizard-frame.json';
 
 // A key that is not in the English files, or a placeholder left out, is a type error.
 declare module 'i18next' {
@@ -22,6 +24,8 @@ declare module 'i18next' {
       people: typeof people;
       shop: typeof shop;
       texts: typeof texts;
+      wizard: typeof wizard;
+      'wizard-frame': typeof wizardFrame;
     };
   }
 }

@@ -9,6 +9,8 @@ export const namespaces = [
   'shop',
   'sign-in',
   'my-page',
+  'wizard',
+  'wizard-frame',
 ] as const;
 
 export type Namespace = (typeof namespaces)[number];

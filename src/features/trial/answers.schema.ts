@@ -200,6 +200,10 @@ export const questionSchemas = {
 export type QuestionName = keyof typeof questionSchemas;
 export const questionNames = Object.keys(questionSchemas) as [QuestionName, ...QuestionName[]];
 
+export function isQuestionName(text: string): text is QuestionName {
+  return Object.hasOwn(questionSchemas, text);
+}
+
 /** What was typed for one question. */
 export type AnswerOf<Name extends QuestionName> = z.output<(typeof questionSchemas)[Name]>;
 

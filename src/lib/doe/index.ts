@@ -17,6 +17,7 @@ export type * from './analysis/analysis.ts';
 export { AnalysisError } from './analysis/analysis.ts';
 export { analyze } from './analysis/analyze.ts';
 export { type BoxCox, fitBoxCox } from './analysis/box-cox.ts';
+export { checkGauge, type GaugeCheck } from './analysis/check-gauge.ts';
 export { type Prediction, predict } from './analysis/predict.ts';
 export { analyzeSteadiness } from './analysis/steadiness.ts';
 export { completeHierarchy } from './analysis/terms.ts';
@@ -43,6 +44,7 @@ export type {
 } from './design/proposal.ts';
 export { errorPlanSchema, proposalSchema } from './design/proposal-schema.ts';
 export { proposePlans } from './design/propose-plans.ts';
+export { suggestWorthHaving } from './design/suggest-worth-having.ts';
 export { countTimeAndMoney } from './design/time-and-money.ts';
 export * from './distributions/index.ts';
 export * from './facts.ts';

@@ -1,6 +1,6 @@
 import { createContext, useContext } from 'react';
 import type { Language } from '../../../i18n/languages.ts';
-import type { Brief, Fact, Proposal } from '../../../lib/doe/index.ts';
+import type { Brief, Fact, GaugeCheck, PlannedRun, Proposal } from '../../../lib/doe/index.ts';
 import type { AnswerOf, Answers, QuestionName } from '../answers.schema.ts';
 
 /** Somebody who may run, measure or be called. */
@@ -24,15 +24,31 @@ export interface WizardShop {
   people: readonly CrewMember[];
 }
 
+/** What is said of today's figures. */
+export interface TodaySoFar {
+  /** How far the result moves up or down by itself, about two standard deviations; null where nobody can say. */
+  swing: number | null;
+  /** Three differences worth a thought, smallest first; none where the swing is not known. */
+  suggestions: readonly number[];
+  /** Today's mean of past numbers. */
+  mean: number | null;
+  gauge: GaugeCheck | null;
+}
+
 /** What the answers mean so far, worked out beside the page: never an error, at most nothing yet. */
 export interface SoFar {
   brief: Brief | null;
   /** At most four, best first; empty while there is not enough to say, or when nothing fits. */
   proposals: readonly Proposal[];
+  /** Runs of the best proposal in an order as it might be; the real one is drawn at the start. */
+  runs: readonly PlannedRun[];
+  /** How many answers a plan still needs. */
+  missing: number;
   /** Why nothing fits, and what to relax by how much. */
   misfit: { code: string; field: string; need: number | string | null } | null;
   /** What an experienced eye would remark, as facts. */
   coaching: readonly Fact[];
+  today: TodaySoFar;
 }
 
 export interface WizardValue {

@@ -1,0 +1,63 @@
+/** A choice of the first pages that has a short word of its own (`chosen` in the words of the frame). */
+export const wordedChoices = [
+  'more',
+  'less',
+  'target',
+  'measured',
+  'scored',
+  'rejects',
+  'flaws',
+  'operator',
+  'other',
+  'atOnce',
+  'minutes',
+  'later',
+  'mean',
+  'part',
+  'low',
+  'high',
+  'neither',
+  'notSure',
+  'noLimit',
+  'hard',
+] as const;
+export type WordedChoice = (typeof wordedChoices)[number];
+
+/** One thing that stands differently in two answers: what was typed, a choice with a word, or some other choice. */
+export type Difference =
+  | { kind: 'typed'; text: string }
+  | { kind: 'choice'; name: WordedChoice }
+  | { kind: 'other choice' };
+
+/** Fields that hold one of a list of names instead of what somebody typed. */
+const choiceFields =
+  /(^|\.)(wish|kind|when|who|limitFor|harderEnd|starter|hazard|fate|way|next|decision|setting|end|picked|cautions|ticked|ways)(\.|$)/;
+/** Names of rows, which nobody sees. */
+const hiddenFields = /(^|\.)id$/;
+
+function leavesOf(content: unknown, path = ''): Map<string, unknown> {
+  if (typeof content !== 'object' || content === null) return new Map([[path, content]]);
+  const entries = Object.entries(content).flatMap(([name, value]) => [
+    ...leavesOf(value, path === '' ? name : `${path}.${name}`),
+  ]);
+  return new Map(entries.filter(([name, value]) => !hiddenFields.test(name) && value !== ''));
+}
+
+function describe(path: string, value: unknown): Difference {
+  const name = typeof value === 'boolean' ? path.slice(path.lastIndexOf('.') + 1) : String(value);
+  const isChoice =
+    typeof value === 'boolean' ||
+    choiceFields.test(path) ||
+    (/(^|\.)usual$/.test(path) && (name === 'low' || name === 'high'));
+  if (!isChoice) return { kind: 'typed', text: name };
+  const worded = wordedChoices.find((each) => each === name);
+  return worded ? { kind: 'choice', name: worded } : { kind: 'other choice' };
+}
+
+/** What stands in `one` and not, or otherwise, in `other`, in the order of the form. */
+export function differencesOf(one: unknown, other: unknown): Difference[] {
+  const others = leavesOf(other ?? {});
+  return [...leavesOf(one ?? {})]
+    .filter(([path, value]) => value !== undefined && value !== false && others.get(path) !== value)
+    .map(([path, value]) => describe(path, value));
+}

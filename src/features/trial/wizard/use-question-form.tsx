@@ -1,0 +1,78 @@
+import { createContext, useContext, useEffect, useState } from 'react';
+import { type DefaultValues, type FieldValues, type UseFormReturn, useForm } from 'react-hook-form';
+import { useTranslation } from 'react-i18next';
+import { schemaResolver } from '../../../components/island/schema-resolver.ts';
+import type { AnswerOf, QuestionName } from '../answers.schema.ts';
+import { finishedSchemas, untouched } from '../finished.schema.ts';
+import { tidy } from './stored-answers.ts';
+import { useWizard } from './wizard-context.ts';
+
+/** What the forms of a page share with its frame. */
+export interface WizardForms {
+  contentOf(question: QuestionName): unknown;
+  fill<Name extends QuestionName>(question: Name, content: AnswerOf<Name> | undefined): void;
+  onReplaced(hear: (question: QuestionName) => void): () => void;
+  /** Has the form checked along with the page; the first that is not content gets the focus. */
+  addCheck(check: (focus: boolean) => Promise<boolean>): () => void;
+}
+
+export const WizardFormsContext = createContext<WizardForms | null>(null);
+
+function useForms(): WizardForms {
+  const forms = useContext(WizardFormsContext);
+  if (!forms) throw new RangeError('useForms: no WizardFrame around it');
+  return forms;
+}
+
+/** Puts an answer into its form from outside it, as a starter does; it is saved like what was typed. */
+export function useFill(): WizardForms['fill'] {
+  return useForms().fill;
+}
+
+function toField(pointer: string): string {
+  return pointer.slice(2).replaceAll('/', '.');
+}
+
+/**
+ * The form of one question: begins with what was typed before, hands on every change, and says what is missing once a
+ * field was left or the page was checked. Fields that come from elsewhere meanwhile (another tab, the other text of two)
+ * are put in.
+ * @throws RangeError outside the wizard's frame
+ */
+export function useQuestionForm<Name extends QuestionName>(
+  question: Name,
+): UseFormReturn<AnswerOf<Name> & FieldValues> {
+  type Values = AnswerOf<Name> & FieldValues;
+  const { t } = useTranslation('errors');
+  const { change } = useWizard();
+  const forms = useForms();
+  const [first] = useState(() => (forms.contentOf(question) ?? untouched[question]) as DefaultValues<Values>);
+  const form = useForm<Values>({
+    defaultValues: first,
+    mode: 'onTouched',
+    resolver: schemaResolver<Values>({
+      schema: finishedSchemas[question],
+      toInput: tidy,
+      fieldOf: toField,
+      t: (key, values) => t(key.replace('errors:', '') as 'field.missing', values),
+    }),
+  });
+
+  useEffect(
+    () =>
+      form.subscribe({
+        formState: { values: true },
+        callback: ({ values }) => change(question, tidy(values) as AnswerOf<Name>),
+      }),
+    [form, change, question],
+  );
+  useEffect(
+    () =>
+      forms.onReplaced((replaced) => {
+        if (replaced === question) form.reset((forms.contentOf(question) ?? untouched[question]) as Values);
+      }),
+    [forms, form, question],
+  );
+  useEffect(() => forms.addCheck((focus) => form.trigger(undefined, { shouldFocus: focus })), [forms, form]);
+  return form;
+}
