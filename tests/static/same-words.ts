@@ -6,4 +6,8 @@ export const sameWords: SameWords = {
   'people:role.supervisor': ['es'],
   'people:role.operator': ['pl'],
   'shop:poster.word.problem': ['pl'],
+  'wizard-frame:step.problem': ['pl'],
+  'wizard-frame:step.plan': ['es', 'pl'],
+  'wizard-frame:step.start': ['pl'],
+  'wizard:problem.minutesUnit': ['es', 'pl'],
 };

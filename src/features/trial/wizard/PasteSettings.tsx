@@ -20,8 +20,12 @@ export function PasteSettings({ room, onAdd }: Props) {
 
   function add(pasted: string): void {
     const rows = readPastedSettings(pasted);
-    if (rows.length === 0) return setSaid({ error: t('settings.pasteNothing') });
-    if (rows.length > room) return setSaid({ error: t('settings.pasteTooMany', { count: room }) });
+    if (rows.length === 0 || rows.length > room) {
+      setSaid({
+        error: rows.length === 0 ? t('settings.pasteNothing') : t('settings.pasteTooMany', { count: room }),
+      });
+      return;
+    }
     onAdd(rows.map((row) => ({ ...row, id: crypto.randomUUID() })));
     setText('');
     setSaid({ added: t('settings.pasted', { count: rows.length }) });
