@@ -6,6 +6,7 @@ import type myPage from '../../locales/en/my-page.json';
 import type people from '../../locales/en/people.json';
 import type shop from '../../locales/en/shop.json';
 import type signIn from '../../locales/en/sign-in.json';
+import type starters from '../../locales/en/starters.json';
 import type texts from '../../locales/en/texts.json';
 import type wizard from '../../locales/en/wizard.json';
 import type wizardFrame from '../../locales/en/wizard-frame.json';
@@ -23,6 +24,7 @@ declare module 'i18next' {
       'sign-in': typeof signIn;
       people: typeof people;
       shop: typeof shop;
+      starters: typeof starters;
       texts: typeof texts;
       wizard: typeof wizard;
       'wizard-frame': typeof wizardFrame;

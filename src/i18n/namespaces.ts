@@ -11,6 +11,7 @@ export const namespaces = [
   'my-page',
   'wizard',
   'wizard-frame',
+  'starters',
 ] as const;
 
 export type Namespace = (typeof namespaces)[number];
