@@ -4,6 +4,7 @@ import type front from '../../locales/en/front.json';
 import type mail from '../../locales/en/mail.json';
 import type myPage from '../../locales/en/my-page.json';
 import type people from '../../locales/en/people.json';
+import type planFacts from '../../locales/en/plan-facts.json';
 import type shop from '../../locales/en/shop.json';
 import type signIn from '../../locales/en/sign-in.json';
 import type starters from '../../locales/en/starters.json';
@@ -23,6 +24,7 @@ declare module 'i18next' {
       'my-page': typeof myPage;
       'sign-in': typeof signIn;
       people: typeof people;
+      'plan-facts': typeof planFacts;
       shop: typeof shop;
       starters: typeof starters;
       texts: typeof texts;

@@ -12,6 +12,7 @@ export const namespaces = [
   'wizard',
   'wizard-frame',
   'starters',
+  'plan-facts',
 ] as const;
 
 export type Namespace = (typeof namespaces)[number];

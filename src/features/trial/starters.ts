@@ -30,7 +30,7 @@ const starters: Record<Exclude<StarterName, 'blank'>, (t: StarterWords) => Start
 };
 
 /** The usual answers of a common shop problem, in the reader's words, as if typed: examples to change. Blank gives none. */
-export function starterAnswers(name: StarterName, translate: StarterWords): Answers {
+export function starterAnswers(name: StarterName, t: StarterWords): Answers {
   if (name === 'blank') return {};
-  return typeStarter(starters[name](translate), translate('decimalMark'));
+  return typeStarter(starters[name](t), t('decimalMark'));
 }
