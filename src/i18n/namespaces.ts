@@ -3,6 +3,8 @@ export const namespaces = [
   'common',
   'errors',
   'front',
+  'starters',
+  'plan-facts',
   'texts',
   'mail',
   'people',
@@ -11,8 +13,6 @@ export const namespaces = [
   'my-page',
   'wizard',
   'wizard-frame',
-  'starters',
-  'plan-facts',
 ] as const;
 
 export type Namespace = (typeof namespaces)[number];
