@@ -1,5 +1,5 @@
 import { multiply, type WordStructure } from './regular-plan.ts';
-import { lengthOfWord, spanWords, type Word, writeWord } from './words.ts';
+import { lengthOfWord, spanWords, type Word, wordOf, writeWord } from './words.ts';
 
 /**
  * The words whose signs split a regular plan into 2 to the `count` blocks, chosen so that what differs between blocks matters least: never a main
@@ -30,8 +30,13 @@ export function fixesOtherSetting(
   words: readonly Word[],
   grouped: readonly Word[],
 ): boolean {
-  const fixed = spanChains(plan, [...words, ...grouped]).flat();
-  return fixed.some((word) => lengthOfWord(word) === 1 && !grouped.includes(word));
+  // Asked for every choice of words in a search: only the letters are looked at, never whole chains.
+  const span = spanIndices(plan, [...words, ...grouped]);
+  for (let index = 0; index < plan.k; index++) {
+    const letter = wordOf(index);
+    if (!grouped.includes(letter) && span.has(plan.chainOf[letter] ?? -1)) return true;
+  }
+  return false;
 }
 
 /**
@@ -45,9 +50,15 @@ export function listConfounded(plan: WordStructure, words: readonly Word[]): str
 }
 
 /** All chains in the span of some words, the mean left out. */
-export function spanChains({ chains, chainOf }: WordStructure, words: readonly Word[]): Word[][] {
-  const indices = new Set([...spanWords(words)].map((word) => chainOf[word] ?? -1));
-  return chains.filter((_, index) => indices.has(index));
+export function spanChains(plan: WordStructure, words: readonly Word[]): Word[][] {
+  const indices = spanIndices(plan, words);
+  return plan.chains.filter((_, index) => indices.has(index));
+}
+
+function spanIndices({ chainOf }: WordStructure, words: readonly Word[]): Set<number> {
+  const indices = new Set<number>();
+  for (const word of spanWords(words)) if (word !== 0) indices.add(chainOf[word] ?? -1);
+  return indices;
 }
 
 /** Which part of the plan a corner belongs to, from 0, by the signs of the words. */

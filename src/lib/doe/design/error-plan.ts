@@ -109,15 +109,27 @@ export function middleColumns(runs: readonly LayoutRun[]): number[][] {
 
 /** Average of a column over the runs of a whole plot. */
 export function averageOver(plot: readonly number[], column: readonly number[]): number {
-  const members = column.filter((_, row) => plot[row] === 1);
-  return members.reduce((sum, value) => sum + value, 0) / members.length;
+  let sum = 0;
+  let members = 0;
+  for (let row = 0; row < column.length; row++) {
+    if (plot[row] !== 1) continue;
+    sum += column[row] ?? 0;
+    members++;
+  }
+  return sum / members;
 }
 
 /** Whether a column does not change inside any of the units. */
 export function isConstantWithin(units: readonly (readonly number[])[], column: readonly number[]): boolean {
   return units.every((unit) => {
-    const members = column.filter((_, row) => unit[row] === 1);
-    return members.every((value) => Math.abs(value - (members[0] ?? 0)) < 1e-9);
+    let first: number | undefined;
+    for (let row = 0; row < column.length; row++) {
+      if (unit[row] !== 1) continue;
+      const value = column[row] ?? 0;
+      first ??= value;
+      if (Math.abs(value - first) >= 1e-9) return false;
+    }
+    return true;
   });
 }
 
