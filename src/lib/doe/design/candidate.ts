@@ -36,7 +36,7 @@ export function completeStructure(
   };
   const judge = (plan: Omit<Candidate, 'errorPlan'>): Candidate => ({
     ...plan,
-    errorPlan: decideErrorPlan(lettersUpTo(structure.k), plan.rows),
+    errorPlan: errorPlanOf(structure.k, plan.rows),
   });
 
   let best: Candidate | null = null;
@@ -52,6 +52,18 @@ export function completeStructure(
     if (plan !== null) return judge(plan);
   }
   return null;
+}
+
+// An error plan follows from the layout alone, and sliders lay out the same structures again and again.
+const knownErrorPlans = new Map<string, ErrorPlan>();
+const mostKnown = 500;
+
+function errorPlanOf(k: number, rows: readonly LayoutRow[]): ErrorPlan {
+  const key = rows.map((row) => `${row.x.join()} ${row.block} ${row.wholePlot} ${row.center}`).join(';');
+  const plan = knownErrorPlans.get(key) ?? decideErrorPlan(lettersUpTo(k), rows);
+  if (knownErrorPlans.size >= mostKnown) knownErrorPlans.clear();
+  knownErrorPlans.set(key, plan);
+  return structuredClone(plan);
 }
 
 /** Whether effects are judged on an error with degrees of freedom of its own, three or more; with whole plots, those of easy settings. */
