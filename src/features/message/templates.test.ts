@@ -13,6 +13,12 @@ const samples: { [Name in TemplateName]: TemplateParams<Name> } = {
   invitation: { shop: 'Harrow Lane Foods', inviter: 'Dana', link, days: 7 },
   reset: { link, minutes: 30 },
   emailChanged: { name: 'Dana', shop: 'Harrow Lane Foods' },
+  planWaiting: { asker: 'Dana', trial: 'Line 3 seals', link },
+  planSentBack: { reviewer: 'Sam', trial: 'Line 3 seals', link },
+  planApproved: { reviewer: 'Sam', trial: 'Line 3 seals', link },
+  planWaitingText: { shop: 'Harrow Lane Foods', asker: 'Dana', trial: 'Line 3 seals' },
+  planSentBackText: { shop: 'Harrow Lane Foods', reviewer: 'Sam', trial: 'Line 3 seals' },
+  planApprovedText: { shop: 'Harrow Lane Foods', reviewer: 'Sam', trial: 'Line 3 seals' },
 };
 
 describe.each(templateNames)('%s', (template) => {

@@ -55,6 +55,8 @@ function mail<Params extends Record<string, string | number>>(
 
 const none = z.strictObject({});
 const link = z.url({ protocol: /^https?$/ });
+const reviewed = z.strictObject({ reviewer: z.string(), trial: z.string(), link });
+const reviewedText = z.strictObject({ shop: z.string(), reviewer: z.string(), trial: z.string() });
 
 /** Every text and mail there is. A test writes each of them in each language. */
 export const templates = {
@@ -102,6 +104,42 @@ export const templates = {
       subject: t('mail:emailChanged.subject'),
       body: t('mail:emailChanged.body', params),
     }),
+  ),
+  planWaiting: mail(
+    {
+      version: 1,
+      holdsSecret: false,
+      params: z.strictObject({ asker: z.string(), trial: z.string(), link }),
+    },
+    (t, params) => ({
+      subject: t('mail:planWaiting.subject', params),
+      body: t('mail:planWaiting.body', params),
+    }),
+  ),
+  planSentBack: mail({ version: 1, holdsSecret: false, params: reviewed }, (t, params) => ({
+    subject: t('mail:planSentBack.subject', params),
+    body: t('mail:planSentBack.body', params),
+  })),
+  planApproved: mail({ version: 1, holdsSecret: false, params: reviewed }, (t, params) => ({
+    subject: t('mail:planApproved.subject', params),
+    body: t('mail:planApproved.body', params),
+  })),
+  planWaitingText: text(
+    {
+      version: 1,
+      audience: 'agreed',
+      answersText: false,
+      params: z.strictObject({ shop: z.string(), asker: z.string(), trial: z.string() }),
+    },
+    (t, params) => t('texts:planWaitingText', params),
+  ),
+  planSentBackText: text(
+    { version: 1, audience: 'agreed', answersText: false, params: reviewedText },
+    (t, params) => t('texts:planSentBackText', params),
+  ),
+  planApprovedText: text(
+    { version: 1, audience: 'agreed', answersText: false, params: reviewedText },
+    (t, params) => t('texts:planApprovedText', params),
   ),
 } as const;
 

@@ -33,6 +33,14 @@ export function erasedColumns(name: string): Record<string, unknown> {
   };
 }
 
+/** Blanks what a person remarked in reviews; that there was a remark, and where, stays. */
+export async function blankRemarksOfPerson(scope: ShopScope, personId: string): Promise<void> {
+  await scope
+    .db('review_comments')
+    .where({ shop_id: scope.shopId, written_by: personId })
+    .update({ words: '' });
+}
+
 /** Removes what served the person alone: sessions, links, tokens, roles. */
 export async function removeBelongings(scope: ShopScope, personId: string): Promise<void> {
   for (const table of ['sessions', 'links', 'api_tokens', 'person_roles']) {

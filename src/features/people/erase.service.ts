@@ -4,7 +4,12 @@ import { inTransaction } from '../../server/db/in-transaction.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
 import { forgetTextsOfPerson } from '../message/retention.service.ts';
 import { findShop } from '../shop/shop.repository.ts';
-import { erasedColumns, nextFormerNumber, removeBelongings } from './erase.repository.ts';
+import {
+  blankRemarksOfPerson,
+  erasedColumns,
+  nextFormerNumber,
+  removeBelongings,
+} from './erase.repository.ts';
 import { findPersonInReach } from './find-person.service.ts';
 import { holdsNoOpenRun, leavesAnAdmin, updatePerson } from './person.repository.ts';
 import { isOperatorOnly, type Person } from './person.ts';
@@ -38,6 +43,7 @@ export function erasePerson(
       throw await explainRefusedChange(inner, { ...which, leaves: true, reader });
     }
     await removeBelongings(inner, which.id);
+    await blankRemarksOfPerson(inner, which.id);
     return findPersonInReach(inner, which.id, { ...reader, reach: 'everybody' });
   });
 }

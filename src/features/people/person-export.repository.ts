@@ -64,6 +64,23 @@ export const personalTables: readonly PersonalTable[] = [
   },
   { table: 'trials', column: 'owner_id', fields: ['number', 'title', 'machine', 'state', 'created_at'] },
   { table: 'plans', column: 'chosen_by', fields: ['trial_id', 'n', 'created_at'] },
+  { table: 'answers', column: 'updated_by', fields: ['trial_id', 'version', 'updated_at'] },
+  { table: 'phrases', column: 'written_by', fields: ['purpose', 'texts', 'created_at'] },
+  {
+    table: 'reviews',
+    column: 'asked_by',
+    fields: ['trial_id', 'subject', 'round', 'state', 'asked_at'],
+  },
+  {
+    table: 'reviews',
+    column: 'decided_by',
+    fields: ['trial_id', 'subject', 'round', 'state', 'decided_at'],
+  },
+  {
+    table: 'review_comments',
+    column: 'written_by',
+    fields: ['review_id', 'place', 'words', 'created_at', 'settled_at'],
+  },
   { table: 'people', column: 'asked_by', fields: ['id'] },
 ];
 

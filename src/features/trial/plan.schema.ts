@@ -24,12 +24,24 @@ export const hardMixSchema = z.object({
 });
 export type HardMix = z.output<typeof hardMixSchema>;
 
+/**
+ * A proposal as it is sent; JSON has no word for a resolution without end. The server has checked it with the core's own
+ * schema, which would be a heavy load for a page.
+ */
+export const sentProposalSchema = z
+  .custom<Omit<Proposal, 'resolution'> & { resolution: number | null }>(
+    (value) => typeof value === 'object' && value !== null && 'layout' in value,
+  )
+  .transform(
+    (stored): Proposal => ({ ...stored, resolution: stored.resolution ?? Number.POSITIVE_INFINITY }),
+  );
+
 /** The chosen plan, as it is stored. */
 export const publicPlanSchema = z.object({
   /** Counts the plans that were chosen for this trial. */
   n: z.number(),
   proposalId: z.string(),
-  proposal: z.custom<Proposal>((value) => typeof value === 'object' && value !== null),
+  proposal: sentProposalSchema,
   /** The id of the setting behind each place of `coded`. */
   settingIds: z.array(z.string()),
   runs: z.array(publicRunSchema),

@@ -18,6 +18,13 @@ export const savedQuestionsSchema = z
   .partial();
 export type SavedQuestions = z.output<typeof savedQuestionsSchema>;
 
+/**
+ * Whether a second person must agree before the start: `alone`: one is needed, but this reader is the only one here who
+ * could, so the trial may start and says that nobody else checked it; `missing`: the shop has nobody who could.
+ */
+export const secondPersonStates = ['not needed', 'needed', 'alone', 'missing'] as const;
+export type SecondPerson = (typeof secondPersonStates)[number];
+
 /** GET /api/trials/:id/answers: all that the wizard and the engineer's page need of a trial. */
 export const publicAnswersSchema = z.object({
   trialId: z.string(),
@@ -34,8 +41,9 @@ export const publicAnswersSchema = z.object({
   questions: savedQuestionsSchema,
   plan: publicPlanSchema.nullable(),
   review: publicReviewSchema.nullable(),
-  /** Whether somebody else must agree before the start. */
+  /** Whether it goes to a second person before it starts. */
   reviewDue: z.boolean(),
+  secondPerson: z.enum(secondPersonStates),
 });
 export type PublicAnswers = z.output<typeof publicAnswersSchema>;
 

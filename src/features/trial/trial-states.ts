@@ -38,16 +38,22 @@ export const trialEvents = [
 export type TrialEvent = (typeof trialEvents)[number];
 
 /**
- * Who makes it happen: the permission that a person needs, anybody in the trial (board, phone page, text), or the
- * product itself.
+ * Who makes it happen: the permission that a person needs (`trial.hold`: anybody in the trial), being the shop's safety
+ * person, or the product itself.
  */
-export type TrialActor = 'trial.write' | 'trial.run' | 'decide' | 'review.decide' | 'trial.hold' | 'product';
+export type TrialActor =
+  | 'trial.write'
+  | 'trial.run'
+  | 'decide'
+  | 'review.decide'
+  | 'trial.hold'
+  | 'safety person'
+  | 'product';
 
 /** What must hold besides the state. Each is checked where the event is carried out. */
 export type TrialCondition =
   | 'complete, plan chosen'
   | 'no plan review due'
-  | 'plan review due'
   | 'as approved'
   | 'not the one who asked'
   | 'with a reason after held'
@@ -71,7 +77,7 @@ export const transitions: readonly Transition[] = [
     event: 'send for review',
     by: ['trial.write'],
     to: 'plan review',
-    when: ['complete, plan chosen', 'plan review due'],
+    when: ['complete, plan chosen'],
   },
   {
     from: 'draft',
@@ -85,14 +91,14 @@ export const transitions: readonly Transition[] = [
   {
     from: 'plan review',
     event: 'approve',
-    by: ['review.decide'],
+    by: ['review.decide', 'safety person'],
     to: 'ready',
     when: ['not the one who asked'],
   },
   {
     from: 'plan review',
     event: 'send back',
-    by: ['review.decide'],
+    by: ['review.decide', 'safety person'],
     to: 'draft',
     when: ['not the one who asked'],
   },
@@ -114,7 +120,7 @@ export const transitions: readonly Transition[] = [
   {
     from: 'held',
     event: 'resume',
-    by: ['trial.run', 'review.decide'],
+    by: ['trial.run', 'review.decide', 'safety person'],
     to: 'running',
     when: ['with a reason after held'],
   },

@@ -48,3 +48,4 @@ export { suggestWorthHaving } from './design/suggest-worth-having.ts';
 export { countTimeAndMoney } from './design/time-and-money.ts';
 export * from './distributions/index.ts';
 export * from './facts.ts';
+export { coreVersion } from './version.ts';

@@ -28,20 +28,24 @@ export async function uniqueWhere(
   await knex.raw(`create unique index "${index.name}" on "${index.table}" (${columns}) where ${index.where}`);
 }
 
-/** The only place where the two databases differ: triggers that refuse to change or delete rows of a table. */
-export async function refuseChanges(knex: Knex, table: string): Promise<void> {
+/**
+ * The only place where the two databases differ: triggers that refuse to change or delete rows of a table.
+ * @param onceSet a column: only rows in which it is set are refused
+ */
+export async function refuseChanges(knex: Knex, table: string, onceSet?: string): Promise<void> {
+  const when = onceSet === undefined ? '' : `when (old.${onceSet} is not null)`;
   if (knex.client.config.client === 'pg') {
     await knex.raw(
       `create function ${table}_refuse() returns trigger as $$ begin raise exception '${table} only grows'; end $$ language plpgsql`,
     );
     await knex.raw(
-      `create trigger ${table}_only_grows before update or delete on ${table} for each row execute function ${table}_refuse()`,
+      `create trigger ${table}_only_grows before update or delete on ${table} for each row ${when} execute function ${table}_refuse()`,
     );
     return;
   }
   for (const change of ['update', 'delete']) {
     await knex.raw(
-      `create trigger ${table}_no_${change} before ${change} on ${table} begin select raise(abort, '${table} only grows'); end`,
+      `create trigger ${table}_no_${change} before ${change} on ${table} ${when} begin select raise(abort, '${table} only grows'); end`,
     );
   }
 }
