@@ -17,7 +17,6 @@ export const statusOfCode = {
   'changed-meanwhile': 409,
   'not-now': 409,
   'no-reviewer': 409,
-  'answers-frozen': 409,
   'last-admin': 409,
   'open-runs': 409,
   'file-changed': 409,

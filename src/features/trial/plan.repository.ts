@@ -1,5 +1,11 @@
 import { z } from 'zod';
-import { type Brief, briefSchema, type PlannedRun, type Proposal, proposalSchema } from '../../lib/doe/index.ts';
+import {
+  type Brief,
+  briefSchema,
+  type PlannedRun,
+  type Proposal,
+  proposalSchema,
+} from '../../lib/doe/index.ts';
 import { now } from '../../server/clock.ts';
 import { jsonColumn, moment } from '../../server/db/columns.ts';
 import type { ShopScope } from '../../server/db/scope.ts';

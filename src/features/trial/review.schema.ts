@@ -43,9 +43,9 @@ export const publicReviewSchema = z.object({
 });
 export type PublicReview = z.output<typeof publicReviewSchema>;
 
-export const reviewParamsSchema = z.object({ id: z.uuidv7() });
+export const reviewParamsSchema = z.object({ id: z.string() });
 
-/** POST /api/reviews/:id/{approve,send-back,take-back}: the hash of what the reader saw is named. */
+/** POST /api/reviews/:id/{approve,send-back,take-back}: the round that the reader saw. */
 export const decideReviewSchema = z.strictObject({ round: z.number().int().positive() });
 
 /** POST /api/reviews/:id/comments. The id may be the client's own. */

@@ -2,7 +2,9 @@ import { z } from 'zod';
 import '../people/schema-settings.ts';
 import { trialStates } from './trial-states.ts';
 
-export const trialParamsSchema = z.object({ id: z.uuidv7() });
+export const trialParamsSchema = z.object({ id: z.string() });
+/** PUT makes one, so its id must be well formed. */
+export const newTrialParamsSchema = z.object({ id: z.uuidv7() });
 const revision = z.number().int().positive();
 
 /** A row of the trials list. Moments are milliseconds UTC. */

@@ -36,6 +36,8 @@ export interface Attempt {
   viewer: Viewer | null;
   params?: Record<string, string>;
   body?: { type: string; text: string } | undefined;
+  /** What stands behind the question mark of the address. */
+  query?: string | undefined;
 }
 
 /** Calls an endpoint as a visitor, without the network; the session is taken as read. */
@@ -43,7 +45,8 @@ export async function attempt(endpoint: KnownEndpoint, visit: Attempt): Promise<
   const method = endpoint.method === 'ALL' ? 'GET' : endpoint.method;
   const path = endpoint.path.replace(/\[(?:\.\.\.)?(\w+)\]/g, (_, name) => visit.params?.[name] ?? 'nothing');
   const url = new URL(path, 'http://127.0.0.1:4310');
-  const { body } = visit;
+  const { body, query } = visit;
+  if (query) url.search = query;
   const request = new Request(url, {
     method,
     ...(body && method !== 'GET' ? { body: body.text, headers: { 'content-type': body.type } } : {}),

@@ -8,6 +8,7 @@ import type { Access } from '../../../src/server/http/define-endpoint.ts';
 import { newId } from '../../../src/server/ids.ts';
 import { buildPerson, buildShop } from '../../builders/shop.ts';
 import { type Attempt, attempt, endpoints } from './endpoints.ts';
+import { buildReviewedTrial } from './trial-of-shop.ts';
 
 const json = (value: unknown) => ({ type: 'application/json', text: JSON.stringify(value) });
 
@@ -18,7 +19,25 @@ const bodies: Record<string, Attempt['body']> = {
   'POST /api/people/[id]/activate': json({ revision: 1 }),
   'POST /api/people/[id]/erase': json({ revision: 1 }),
   'POST /api/people/[id]/invite': json({}),
+  'PUT /api/trials/[id]': json({}),
+  'PATCH /api/trials/[id]': json({ revision: 1, putAway: true }),
+  'PATCH /api/trials/[id]/answers': json({
+    question: 'worth',
+    base: 0,
+    content: { change: '3' },
+    save: '6f1d2c3b-8a4e-4d5f-9b60-7c8d9e0f1a2b',
+  }),
+  'POST /api/trials/[id]/plan': json({ revision: 1, proposalId: 'any' }),
+  'POST /api/trials/[id]/events': json({ event: 'start', revision: 1 }),
+  'POST /api/reviews/[id]/approve': json({ round: 1 }),
+  'POST /api/reviews/[id]/send-back': json({ round: 1 }),
+  'POST /api/reviews/[id]/take-back': json({ round: 1 }),
+  'POST /api/reviews/[id]/comments': json({ id: newId(), place: '#/worth', words: 'From a stranger' }),
+  'PATCH /api/reviews/[id]/comments': json({ id: newId(), settled: true }),
 };
+
+/** What an endpoint that reads no body wants to know from the address. */
+const queries: Record<string, string> = { 'DELETE /api/trials/[id]': 'revision=1' };
 
 const needsPerson = (access: Access) => access !== 'public' && access !== 'signed';
 
@@ -79,12 +98,15 @@ beforeAll(async () => {
     expires_at: Number.MAX_SAFE_INTEGER,
     created_at: 0,
   });
-  params = { handle, id: operator, token: tokenId };
+  const supervisor = viewers.get('supervisor')?.personId ?? '';
+  const { trialId, reviewId } = await buildReviewedTrial(here, supervisor);
+  params = { handle, id: operator, token: tokenId, trial: trialId, review: reviewId };
 });
 
 function paramsFor(path: string): Record<string, string> {
-  const id = path.startsWith('/api/me/tokens') ? params['token'] : params['id'];
-  return { id: id ?? '', handle: params['handle'] ?? '' };
+  const [, kind] = /^\/api\/(me\/tokens|trials|reviews)\b/.exec(path) ?? [];
+  const name = { 'me/tokens': 'token', trials: 'trial', reviews: 'review' }[kind ?? ''] ?? 'id';
+  return { id: params[name] ?? '', handle: params['handle'] ?? '' };
 }
 
 const table = endpoints.map((endpoint) => ({ ...endpoint, name: `${endpoint.method} ${endpoint.path}` }));
@@ -139,6 +161,7 @@ describe.each(table.filter(({ access, path }) => access && needsPerson(access) &
         viewer: stranger,
         params: paramsFor(path),
         body: bodies[name],
+        query: queries[name],
       });
       expect(answer.status).toBe(404);
       expect(await readAll()).toBe(before);
