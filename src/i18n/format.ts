@@ -10,6 +10,8 @@ export interface Formats {
   time(moment: number): string;
   dateTime(moment: number): string;
   list(items: string[]): string;
+  /** Money in whole main units, for what is only about right. */
+  roughMoney(amount: number, currency: string): string;
 }
 
 /** @param timeZone the shop's IANA zone: every wall time on a page is the shop's, wherever the reader sits */
@@ -28,6 +30,10 @@ export function formatsFor(language: Language, timeZone: string): Formats {
     dateTime: (moment) =>
       new Intl.DateTimeFormat(language, { ...dateOptions, ...timeOptions, timeZone }).format(moment),
     list: (items) => new Intl.ListFormat(language, { type: 'conjunction' }).format(items),
+    roughMoney: (amount, currency) =>
+      new Intl.NumberFormat(language, { style: 'currency', currency, maximumFractionDigits: 0 }).format(
+        amount,
+      ),
   };
 }
 

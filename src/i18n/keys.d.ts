@@ -9,6 +9,7 @@ import type shop from '../../locales/en/shop.json';
 import type signIn from '../../locales/en/sign-in.json';
 import type starters from '../../locales/en/starters.json';
 import type texts from '../../locales/en/texts.json';
+import type verdict from '../../locales/en/verdict.json';
 import type wizard from '../../locales/en/wizard.json';
 import type wizardFrame from '../../locales/en/wizard-frame.json';
 
@@ -30,6 +31,7 @@ declare module 'i18next' {
       texts: typeof texts;
       wizard: typeof wizard;
       'wizard-frame': typeof wizardFrame;
+      verdict: typeof verdict;
     };
   }
 }

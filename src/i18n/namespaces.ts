@@ -13,6 +13,7 @@ export const namespaces = [
   'my-page',
   'wizard',
   'wizard-frame',
+  'verdict',
 ] as const;
 
 export type Namespace = (typeof namespaces)[number];

@@ -1,4 +1,5 @@
 // The only door into the statistics core: the rest of the product imports from here and from nowhere deeper.
+export { type AdviceFact, isAdviceFact } from './advice/advice-facts.ts';
 export { bestBet } from './advice/best-bet.ts';
 export { type CheckRuns, planCheckRuns } from './advice/check-runs.ts';
 export { judge } from './advice/judge.ts';

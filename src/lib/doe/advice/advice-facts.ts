@@ -170,3 +170,12 @@ export const adviceFacts = [
   ...reasons,
   ...confirmation,
 ] as const;
+
+export type AdviceFact = z.infer<(typeof adviceFacts)[number]>;
+
+const adviceKinds: ReadonlySet<string> = new Set(adviceFacts.map((fact) => fact.shape.kind.value));
+
+/** Whether a fact is one of what may be said after the runs. */
+export function isAdviceFact(fact: { kind: string }): fact is AdviceFact {
+  return adviceKinds.has(fact.kind);
+}
