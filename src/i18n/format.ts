@@ -18,9 +18,15 @@ export interface Formats {
 export function formatsFor(language: Language, timeZone: string): Formats {
   const dateOptions = { day: 'numeric', month: 'short', year: 'numeric' } as const;
   const timeOptions = { hour: '2-digit', minute: '2-digit', hourCycle: 'h23' } as const;
+  // A page writes hundreds of numbers, and to make a formatter takes far longer than to use it.
+  const byDigits = new Map<number, Intl.NumberFormat>();
+  const withDigits = (digits: number) => {
+    const known = byDigits.get(digits) ?? new Intl.NumberFormat(language, { maximumFractionDigits: digits });
+    byDigits.set(digits, known);
+    return known;
+  };
   return {
-    number: (value, digits = 3) =>
-      new Intl.NumberFormat(language, { maximumFractionDigits: digits }).format(value),
+    number: (value, digits = 3) => withDigits(digits).format(value),
     money(minorUnits, currency) {
       const format = new Intl.NumberFormat(language, { style: 'currency', currency });
       return format.format(minorUnits / 10 ** (format.resolvedOptions().maximumFractionDigits ?? 2));

@@ -35,8 +35,8 @@ describe.each(languages)('every fact of a verdict in %s', (language) => {
 
   it('names no figure of the result without its unit', () => {
     const wording = wordingIn(language);
-    // Counts of runs and the word "10" of "times in 10" have none.
-    const bare = /^(?:22|44|11|10|9)$/;
+    // Counts and numbers of runs have none, nor has the 10 of "times in 10".
+    const bare = /^(?:22|44|11|10|9|1|2)$/;
     for (const fact of everyAdviceFact({ figure: 6.2, interval: 'apart', count: 22 })) {
       if (fact.kind === 'steadier-matters' || fact.refs.results?.[0] === 1) continue;
       const words = sayFact(fact, wording)
