@@ -8,4 +8,8 @@ export { maskPhone } from './mask-phone.ts';
 export type { TextLanguage } from './plain-letter-tables.ts';
 export { toPlainLetters } from './plain-letters.ts';
 export { isPracticeNumber } from './practice-answer.ts';
+export { readReply } from './read-reply.ts';
+export type { ExpectedItem, Reply, ReplyExpectation, ReplyIntent } from './reply.ts';
+export { replyIntents } from './reply.ts';
 export { type ReservedMeaning, readReservedWord, reservedWords } from './reserved-words.ts';
+export { readRunChoice } from './run-mention.ts';
