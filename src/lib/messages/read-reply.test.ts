@@ -11,7 +11,7 @@ const settings = [
 ];
 const strength: ExpectedItem = { key: 'a', kind: 'measured', readings: 1, names: ['Strength', 'N'] };
 const burnt: ExpectedItem = { key: 'b', kind: 'rejects', readings: 1, lotSize: 50, names: ['burnt edges'] };
-const plausible: ReplyExpectation['plausible'] = { a: [25, 60] };
+const plausible = { a: [25, 60] } as const;
 
 function expects(items: ExpectedItem[], change: Partial<ReplyExpectation> = {}): ReplyExpectation {
   return { items, openRuns: [{ run: 4, state: 'make' }], settings, plausible, ...change };
