@@ -5,6 +5,7 @@ import type mail from '../../locales/en/mail.json';
 import type myPage from '../../locales/en/my-page.json';
 import type people from '../../locales/en/people.json';
 import type planFacts from '../../locales/en/plan-facts.json';
+import type runTexts from '../../locales/en/run-texts.json';
 import type shop from '../../locales/en/shop.json';
 import type signIn from '../../locales/en/sign-in.json';
 import type starters from '../../locales/en/starters.json';
@@ -26,6 +27,7 @@ declare module 'i18next' {
       'sign-in': typeof signIn;
       people: typeof people;
       'plan-facts': typeof planFacts;
+      'run-texts': typeof runTexts;
       shop: typeof shop;
       starters: typeof starters;
       texts: typeof texts;

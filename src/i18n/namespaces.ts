@@ -6,6 +6,7 @@ export const namespaces = [
   'starters',
   'plan-facts',
   'texts',
+  'run-texts',
   'mail',
   'people',
   'shop',
