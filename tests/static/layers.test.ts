@@ -16,7 +16,8 @@ function faultsOf(path: string, text: string) {
 }
 
 describe('imports follow the arrows of the layout', () => {
-  it('in every file', () => {
+  // Reads and parses the whole product, which takes its time on a busy machine.
+  it('in every file', { timeout: 180_000 }, () => {
     expect(findLayerFaults(readSources(), packages)).toEqual([]);
   });
 
