@@ -19,6 +19,7 @@ export { AnalysisError } from './analysis/analysis.ts';
 export { analyze } from './analysis/analyze.ts';
 export { type BoxCox, fitBoxCox } from './analysis/box-cox.ts';
 export { checkGauge, type GaugeCheck } from './analysis/check-gauge.ts';
+export { halfNormalScores, normalScores, type PlottingPosition } from './analysis/plot-scores.ts';
 export { type Prediction, predict } from './analysis/predict.ts';
 export { analyzeSteadiness } from './analysis/steadiness.ts';
 export { completeHierarchy } from './analysis/terms.ts';

@@ -4,7 +4,7 @@ import type { Fact } from '../facts.ts';
 import { type Belief, beliefOf } from './belief.ts';
 import { listCandidates } from './candidates.ts';
 import { chooseSettings } from './choose-settings.ts';
-import { type Failures, findFailures } from './failures.ts';
+import { type Failures, findFailures, joinFailures } from './failures.ts';
 import { modelResult, type ResultInput, type ResultModel } from './result-model.ts';
 import { usualSettings } from './usual-settings.ts';
 import type { BestBet, Outlook } from './verdict.ts';
@@ -45,7 +45,7 @@ export function betWithModels(
   if (result === undefined || main === undefined) throw new RangeError('bestBet: results must not be empty');
   const usual = usualSettings(brief);
   const runs = result.input.runs;
-  const failures = findFailures(runs);
+  const failures = joinFailures(results.map(({ input }) => findFailures(input.runs)));
   const tested = result.analysis.used.map((index) => runs[index]?.x ?? []);
   const bends = result.analysis.curvature?.ci ?? null;
   const onlyTested = bends !== null && (bends[0] > 0 || bends[1] < 0);

@@ -8,8 +8,8 @@ export interface SharedCause {
 export interface Failures {
   /** Places of the runs whose parts could not be made or measured. */
   runs: number[];
-  /** The fewest settings at levels that all failed runs share and no good run has; null: there is none. */
-  cause: SharedCause | null;
+  /** For each result with failures that have one: the fewest settings at levels that all its failed runs share and no good run has. */
+  causes: SharedCause[];
   /** Whether a combination is one of the failures or is likely to share their cause. */
   excludes(x: readonly number[]): boolean;
 }
@@ -23,18 +23,30 @@ export function findFailures(runs: readonly AnalysisRun[]): Failures {
     run.end === 'failed' || run.end === 'beyondGauge' ? [index] : [],
   );
   const bad = failed.map((index) => runs[index]?.x ?? []);
-  if (bad.length === 0) return { runs: [], cause: null, excludes: () => false };
+  if (bad.length === 0) return { runs: [], causes: [], excludes: () => false };
   const good = runs
     .filter((run) => (run.end ?? 'measured') === 'measured' && run.y !== null)
     .map((run) => run.x);
   const cause = findCause(bad, good);
-  if (cause !== null) return { runs: failed, cause, excludes: (x) => has(x, cause.settings) };
+  if (cause !== null) return { runs: failed, causes: [cause], excludes: (x) => has(x, cause.settings) };
   return {
     runs: failed,
-    cause: null,
+    causes: [],
     excludes: (x) =>
       bad.some((point) => differences(point, x) === 0) ||
       (bad.some((point) => differences(point, x) <= 1) && !good.some((point) => differences(point, x) === 0)),
+  };
+}
+
+/** Failures of several results of the same runs: settings must keep away from all of them. */
+export function joinFailures(found: readonly Failures[]): Failures {
+  const causes = new Map(
+    found.flatMap(({ causes: some }) => some).map((cause) => [JSON.stringify(cause), cause]),
+  );
+  return {
+    runs: [...new Set(found.flatMap(({ runs }) => runs))].sort((first, second) => first - second),
+    causes: [...causes.values()],
+    excludes: (x) => found.some(({ excludes }) => excludes(x)),
   };
 }
 

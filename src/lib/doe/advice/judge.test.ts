@@ -3,6 +3,7 @@ import { regularPlan } from '../../../../tests/builders/random-process.ts';
 import { kindsOf, middles, readTrial, wobble } from '../../../../tests/builders/read-trial.ts';
 import { buildBrief, buildInput, buildResult, planOf } from '../../../../tests/builders/simulated-trial.ts';
 import { createUniformSource } from '../random/random-numbers.ts';
+import { bestBet } from './best-bet.ts';
 import { judge } from './judge.ts';
 import { verdictSchema } from './verdict.ts';
 
@@ -76,9 +77,47 @@ describe('judge', () => {
     expect(verdict.trust).toContainEqual({
       kind: 'failed-together',
       values: { levels: [1, 1] },
-      refs: { factors: ['A', 'B'] },
+      refs: { factors: ['A', 'B'], results: [0] },
     });
     expect(bet.coded[0] === 1 && bet.coded[1] === 1).toBe(false);
+  });
+
+  it('keeps away from where a watched figure could not be read, and judges the main result all the same', () => {
+    const noise = wobble(17, 0.1);
+    const points = [...regularPlan(3, [[0, 1, 2]]), ...middles(4, 4)];
+    const spec = { name: 'flash', unit: 'mm', kind: 'measured' as const, goal: 'less' as const };
+    const brief = buildBrief(4, { watch: [spec] });
+    const input = buildInput(
+      brief,
+      points.map((x) => ({ x, y: 35 + 2 * (x[0] ?? 0) + 2 * (x[1] ?? 0) + noise() })),
+    );
+    const watched = buildInput(
+      brief,
+      points.map((x) =>
+        x[0] === 1 && x[1] === 1
+          ? { x, y: null, end: 'beyondGauge' as const }
+          : { x, y: 1 + (x[0] ?? 0) + 0.1 * noise() },
+      ),
+    );
+    const results = [buildResult(brief.response, input), buildResult(spec, watched)];
+    const verdict = judge(brief, planOf(input), results);
+    expect(kindsOf(verdict.settings).slice(0, 2)).toEqual(['matters', 'matters']);
+    expect(verdict.headline.kind).toBe('clear-gain');
+    expect(verdict.trust).toContainEqual({
+      kind: 'runs-failed',
+      values: { end: 'beyondGauge', runs: 2 },
+      refs: { runs: [3, 7], results: [1] },
+    });
+    expect(verdict.trust).toContainEqual({
+      kind: 'failed-together',
+      values: { levels: [1, 1] },
+      refs: { factors: ['A', 'B'], results: [1] },
+    });
+    expect(kindsOf(verdict.next)).toContain('narrow-range');
+    expect(verdict.watched).toEqual([]);
+    const bet = bestBet(brief, results);
+    expect(bet.coded[0] === 1 && bet.coded[1] === 1).toBe(false);
+    expect(kindsOf(bet.reasons)).toContain('away-from-failures');
   });
 
   it('asks for a re-measurement of a reading that all others make unlikely', () => {

@@ -4,7 +4,7 @@ import type { PlannedRun } from '../design/proposal.ts';
 import type { Fact } from '../facts.ts';
 import { betWithModels } from './best-bet.ts';
 import { type CallContext, callFact, callOf, decideCall, uncalledFact } from './calls.ts';
-import { findFailures } from './failures.ts';
+import { findFailures, joinFailures } from './failures.ts';
 import { chooseHeadline } from './headline.ts';
 import { listNextSteps } from './next-steps.ts';
 import { dependsOnPartner, likeliestMember, pairCorners } from './pairs.ts';
@@ -18,7 +18,8 @@ import { runsToSettle } from './would-settle.ts';
  * What the trial says, as facts without words: a call for each setting and pair of the main result, what speaks for and against them, what watched results
  * do, what cannot be told and what comes next.
  *
- * Failed runs are the strongest readings of all and have no figure, so with them there are no calls by least squares.
+ * Failed runs are the strongest readings of all and have no figure, so there are no calls by least squares of a result with failures. Settings keep away
+ * from the failures of every result.
  *
  * @param plan the runs as they were planned, in run order
  * @param results main result first
@@ -30,7 +31,8 @@ export function judge(brief: Brief, plan: readonly PlannedRun[], results: readon
   const models = results.map((result) => modelResult(brief, result));
   const [model] = models;
   if (model === undefined) throw new RangeError('judge: results must not be empty');
-  const failures = findFailures(main.input.runs);
+  const failuresOf = results.map(({ input }) => findFailures(input.runs));
+  const failures = failuresOf[0] ?? joinFailures([]);
   const missing = missingRuns(main, failures);
   const worthHaving = model.scale.worthHaving(main.spec, main.analysis.intercept.coefficient) ?? 0;
   const context: CallContext = {
@@ -46,7 +48,7 @@ export function judge(brief: Brief, plan: readonly PlannedRun[], results: readon
   const settings = judged ? callSettings(brief, context) : [];
   const pairs = judged ? callPairs(context) : [];
   const details = judged ? listDetails(context) : [];
-  const trust = listTrust({ brief, plan, result: main, model, context, failures });
+  const trust = listTrust({ brief, plan, result: main, results, model, context, failures: failuresOf });
   const calls = [...settings, ...pairs];
   return {
     headline: chooseHeadline({
@@ -61,10 +63,10 @@ export function judge(brief: Brief, plan: readonly PlannedRun[], results: readon
     pairs,
     details,
     trust,
-    watched: listWatched(results, models),
+    watched: listWatched(results, models, failuresOf),
     steadier: judged ? judgeSteadiness(main) : [],
     cannotTell: listLimits(context, main),
-    next: listNextSteps({ brief, bet, failures, missing, calls, details, trust }),
+    next: listNextSteps({ brief, bet, failures: joinFailures(failuresOf), missing, calls, details, trust }),
   };
 }
 

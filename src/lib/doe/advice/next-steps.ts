@@ -26,7 +26,9 @@ export function listNextSteps(question: NextStepQuestion): Fact[] {
 function mendTrial({ failures, missing, trust, brief }: NextStepQuestion): Fact[] {
   const facts: Fact[] = [];
   if (failures.runs.length > 0) {
-    const factors = failures.cause?.settings.map(({ place }) => letterOf(place)) ?? [];
+    const factors = [
+      ...new Set(failures.causes.flatMap(({ settings }) => settings.map(({ place }) => letterOf(place)))),
+    ].sort();
     const numbers = factors.filter((letter) => kindOf(brief, letter) === 'number');
     facts.push({ kind: 'narrow-range', values: {}, refs: { factors: numbers, runs: failures.runs } });
   }

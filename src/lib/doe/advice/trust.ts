@@ -14,7 +14,9 @@ export interface TrustQuestion {
   result: ResultInput;
   model: ResultModel;
   context: CallContext;
-  failures: Failures;
+  /** Of each result, main first. */
+  failures: readonly Failures[];
+  results: readonly ResultInput[];
 }
 
 /** What speaks for and against the verdict: runs that came in, noise, bend, drift, odd readings, small counts, scale. */
@@ -32,40 +34,44 @@ export function listTrust(question: TrustQuestion): Fact[] {
 }
 
 /** Places of planned runs without a reading that did not fail either. */
-export function missingRuns({ input, analysis }: ResultInput, failures: Failures): number[] {
+export function missingRuns({ input, analysis }: ResultInput, failures: Pick<Failures, 'runs'>): number[] {
   return input.runs.flatMap((_, index) =>
     analysis.used.includes(index) || failures.runs.includes(index) ? [] : [index],
   );
 }
 
 function runsIn({ plan, result, failures }: TrustQuestion): Fact[] {
-  const missing = missingRuns(result, failures);
+  const ofMain = failures[0]?.runs ?? [];
+  const missing = missingRuns(result, { runs: ofMain });
   const planned = Math.max(plan.length, result.input.runs.length);
   const absent = missing.length + planned - result.input.runs.length;
   if (absent > 0)
     return [{ kind: 'runs-missing', values: { missing: absent, planned }, refs: { runs: missing } }];
-  return failures.runs.length > 0
-    ? []
-    : [{ kind: 'all-runs-in', values: { runs: result.analysis.n }, refs: {} }];
+  return ofMain.length > 0 ? [] : [{ kind: 'all-runs-in', values: { runs: result.analysis.n }, refs: {} }];
 }
 
-function failed({ result, failures }: TrustQuestion): Fact[] {
-  const ends = (['failed', 'beyondGauge'] as const).flatMap((end): Fact[] => {
-    const runs = failures.runs.filter((index) => result.input.runs[index]?.end === end);
-    return runs.length === 0
-      ? []
-      : [{ kind: 'runs-failed', values: { end, runs: runs.length }, refs: { runs } }];
+/** Failures of every result: a run whose watched figure could not be read is as telling as one that could not be made. */
+function failed({ results, failures }: TrustQuestion): Fact[] {
+  return results.flatMap(({ input }, place) => {
+    const { runs: all = [], causes = [] } = failures[place] ?? {};
+    const ends = (['failed', 'beyondGauge'] as const).flatMap((end): Fact[] => {
+      const runs = all.filter((index) => input.runs[index]?.end === end);
+      return runs.length === 0
+        ? []
+        : [{ kind: 'runs-failed', values: { end, runs: runs.length }, refs: { runs, results: [place] } }];
+    });
+    const together = causes.map(
+      ({ settings }): Fact => ({
+        kind: 'failed-together',
+        values: { levels: settings.map(({ level }) => level) },
+        refs: {
+          factors: settings.map((setting) => input.factors[setting.place]?.letter ?? ''),
+          results: [place],
+        },
+      }),
+    );
+    return [...ends, ...together];
   });
-  if (failures.cause === null) return ends;
-  const { settings } = failures.cause;
-  return [
-    ...ends,
-    {
-      kind: 'failed-together',
-      values: { levels: settings.map(({ level }) => level) },
-      refs: { factors: settings.map(({ place }) => result.input.factors[place]?.letter ?? '') },
-    },
-  ];
 }
 
 /** With fewer than 2.5 in a hundred for so much more, or less, noise than was said, the difference is named. */
