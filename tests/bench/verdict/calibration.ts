@@ -2,6 +2,7 @@ import { decideCall } from '../../../src/lib/doe/advice/calls.ts';
 import type { Analysis } from '../../../src/lib/doe/analysis/analysis.ts';
 import { analyze } from '../../../src/lib/doe/analysis/analyze.ts';
 import { termValue } from '../../../src/lib/doe/analysis/terms.ts';
+import { drawProcess } from '../../builders/random-process.ts';
 import type { SimulatedPlan } from './plans.ts';
 import { type RandomSource, shuffle } from './simulation.ts';
 
@@ -102,6 +103,37 @@ function count(
     if (isActive && term.term === truth.shown && (term.p ?? 1) < 0.05) found.seen++;
   }
   if (anyClear) found.anyFalseClear++;
+}
+
+/** Share of intervals that hold the true effect, its ties included, over processes drawn by the published regularities. */
+export function coverProcesses(question: {
+  plan: SimulatedPlan;
+  /** Standard deviation of noise over that of an active main effect. */
+  noise: number;
+  experiments: number;
+  random: RandomSource;
+}): { covered: number; intervals: number } {
+  const { plan, noise, experiments, random } = question;
+  const letters = [...'ABCDEFG'].slice(0, plan.runs[0]?.x.length ?? 0);
+  const factors = letters.map((letter) => ({ letter, kind: 'number' as const }));
+  const found = { covered: 0, intervals: 0 };
+  for (let experiment = 0; experiment < experiments; experiment++) {
+    const process = drawProcess(letters, random);
+    const y = plan.runs.map((run) => process.valueAt(run.x) + noise * random.normal());
+    const { terms, aliases } = analyzeAt(plan, factors, y);
+    for (const { term, ci } of terms) {
+      if (ci === null) continue;
+      const tied = aliases.find((alias) => alias.term === term)?.with ?? [];
+      const truth = [{ term, coefficient: 1 }, ...tied].reduce(
+        (sum, member) =>
+          sum + 2 * member.coefficient * (process.coefficients[process.terms.indexOf(member.term)] ?? 0),
+        0,
+      );
+      found.intervals++;
+      if (ci[0] <= truth && truth <= ci[1]) found.covered++;
+    }
+  }
+  return found;
 }
 
 /** Shares of the four calls about one effect whose true size is known. */
