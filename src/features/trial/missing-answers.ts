@@ -1,8 +1,8 @@
 import type { Language } from '../../i18n/languages.ts';
 import { type AnswerProblem, readFinished } from './answer-problem.ts';
 import type { Answers } from './answers.schema.ts';
+import { readBriefAnswers } from './brief/brief-answers.ts';
 import { questionsInOrder } from './finished.schema.ts';
-import { toBrief } from './to-brief.ts';
 
 /**
  * All that keeps the answers from being complete, in the order of the pages: what is missing or does not fit, and
@@ -13,7 +13,7 @@ export function missingAnswers(answers: Answers): AnswerProblem[] {
     const read = readFinished(answers, question);
     return 'problems' in read ? read.problems : [];
   });
-  const brief = toBrief(answers);
+  const brief = readBriefAnswers(answers);
   const between = 'problems' in brief ? brief.problems : [];
   const known = new Set(single.map(keyOf));
   return [...single, ...between.filter((problem) => !known.has(keyOf(problem)))].sort(

@@ -1,22 +1,5 @@
 import type { ResponseSpec } from '../../../lib/doe/index.ts';
-import { fitsScale, scoreRange } from '../finished/problem.schema.ts';
-import type { FinishedOf } from '../finished.schema.ts';
-
-interface SpokenResult {
-  name: string;
-  unit: string;
-  wish: ResponseSpec['goal'];
-  target: number | null;
-  kind: FinishedOf<'result'>['kind'];
-  lotSize: number | null;
-}
-
-interface SpokenLimits {
-  atLeast: number | null;
-  atMost: number | null;
-  limitFor: 'mean' | 'part';
-  noLimit: boolean;
-}
+import type { SpokenLimits, SpokenResult } from './result-scale.ts';
 
 /** People score in whole points unless they say otherwise. */
 const scoreStep = 1;
@@ -33,17 +16,6 @@ export function present<Fields extends Record<string, unknown>>(
 /** A figure as it was said: bad ones out of the lot are a share to the core. */
 export function toCoreFigure(figure: number, result: Pick<SpokenResult, 'kind' | 'lotSize'>): number {
   return result.kind === 'rejects' && result.lotSize !== null ? figure / result.lotSize : figure;
-}
-
-/** Limits that no figure of the result could ever pass or miss. */
-export function limitsOffScale(
-  result: SpokenResult,
-  limits: Pick<SpokenLimits, 'atLeast' | 'atMost'>,
-): ('atLeast' | 'atMost')[] {
-  return (['atLeast', 'atMost'] as const).filter((side) => {
-    const limit = limits[side];
-    return limit !== null && !fitsScale(limit, result);
-  });
 }
 
 /** A result as the core reads it. Scores are measured numbers from 0 to 10 to it. */
@@ -80,10 +52,4 @@ export function toResponse(
       worthHaving: toCore(worth),
     }),
   };
-}
-
-/** The widest change that a result's scale has room for; null: no end. */
-export function widestChange(result: Pick<SpokenResult, 'kind' | 'lotSize'>): number | null {
-  if (result.kind === 'scored') return scoreRange.most - scoreRange.least;
-  return result.kind === 'rejects' ? result.lotSize : null;
 }
