@@ -10,9 +10,11 @@ import type shop from '../../locales/en/shop.json';
 import type signIn from '../../locales/en/sign-in.json';
 import type starters from '../../locales/en/starters.json';
 import type texts from '../../locales/en/texts.json';
+import type trials from '../../locales/en/trials.json';
 import type verdict from '../../locales/en/verdict.json';
 import type wizard from '../../locales/en/wizard.json';
 import type wizardFrame from '../../locales/en/wizard-frame.json';
+import type wizardPlan from '../../locales/en/wizard-plan.json';
 
 // A key that is not in the English files, or a placeholder left out, is a type error.
 declare module 'i18next' {
@@ -31,9 +33,11 @@ declare module 'i18next' {
       shop: typeof shop;
       starters: typeof starters;
       texts: typeof texts;
+      trials: typeof trials;
       wizard: typeof wizard;
       'wizard-frame': typeof wizardFrame;
       verdict: typeof verdict;
+      'wizard-plan': typeof wizardPlan;
     };
   }
 }

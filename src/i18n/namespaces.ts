@@ -5,6 +5,8 @@ export const namespaces = [
   'front',
   'starters',
   'plan-facts',
+  'trials',
+  'wizard-plan',
   'texts',
   'run-texts',
   'mail',

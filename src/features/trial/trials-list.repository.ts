@@ -81,3 +81,12 @@ export async function countTrials(scope: ShopScope): Promise<number> {
   const [row] = await scope.db('trials').where({ shop_id: scope.shopId }).count({ count: '*' });
   return Number(row?.['count'] ?? 0);
 }
+
+/** How many trials somebody has begun. */
+export async function countTrialsOf(scope: ShopScope, ownerId: string): Promise<number> {
+  const [row] = await scope
+    .db('trials')
+    .where({ shop_id: scope.shopId, owner_id: ownerId })
+    .count({ count: '*' });
+  return Number(row?.['count'] ?? 0);
+}

@@ -32,8 +32,8 @@ async function wordsOf(answer: Response): Promise<string> {
 describe('signing in', () => {
   it('sends each role to its own start page', async () => {
     for (const [person, start] of [
-      [dana, '/people'],
-      [sam, '/activity'],
+      [dana, '/trials'],
+      [sam, '/trials'],
       [robin, '/people'],
     ] as const) {
       const visitor = newVisitor();

@@ -82,6 +82,7 @@ function Frame({ step, children, lastAction, ...page }: FrameProps) {
       answers,
       mayWrite,
       change: store.change,
+      flush: store.flush,
       soFar: soFar ?? nothingYet,
       shop,
     }),

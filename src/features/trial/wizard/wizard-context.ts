@@ -58,6 +58,8 @@ export interface WizardValue {
   mayWrite: boolean;
   /** Takes over what was typed; it is saved a moment later. */
   change<Name extends QuestionName>(question: Name, content: AnswerOf<Name>): void;
+  /** Saves what is not saved yet, for what needs it on the server; done when each save has got its answer. */
+  flush(): Promise<void>;
   soFar: SoFar;
   shop: WizardShop;
 }

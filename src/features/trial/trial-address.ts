@@ -1,0 +1,20 @@
+import type { TrialState } from './trial-states.ts';
+
+/** The page on which a trial in this state goes on. */
+const pageOf = {
+  draft: 'problem',
+  'plan review': 'start',
+  ready: 'start',
+  running: 'start',
+  paused: 'start',
+  held: 'start',
+  'readings in': 'start',
+  'verdict review': 'start',
+  deciding: 'start',
+  'adoption review': 'start',
+  closed: 'start',
+} as const satisfies Record<TrialState, string>;
+
+export function trialAddress({ id, state }: { id: string; state: TrialState }): string {
+  return `/trials/${id}/${pageOf[state]}`;
+}

@@ -1,0 +1,61 @@
+import { useMemo } from 'react';
+import { useTranslation } from 'react-i18next';
+import { Disclosure } from '../../../../components/ui/Disclosure.tsx';
+import type { SettingMarkKind } from '../../../../components/ui/SettingMark.tsx';
+import { SmallTag } from '../../../../components/ui/SmallTag.tsx';
+import { formatsFor } from '../../../../i18n/format.ts';
+import type { Language } from '../../../../i18n/languages.ts';
+import {
+  type Brief,
+  type FactorSpec,
+  layOutRuns,
+  type PlannedRun,
+  type Proposal,
+} from '../../../../lib/doe/index.ts';
+
+interface Props {
+  readonly brief: Brief;
+  readonly proposal: Proposal;
+}
+
+const mostTags = 4;
+const mostSettings = 5;
+/** The real order is drawn when the plan is taken; a fixed one keeps the rack still until then. */
+const sketchSeed = 1;
+
+function markOf(factor: FactorSpec, coded: number): SettingMarkKind {
+  if (factor.kind === 'choice') return coded > 0 ? 'second' : 'first';
+  if (coded === 0) return 'middle';
+  return coded > 0 ? 'high' : 'low';
+}
+
+/** The runs of a plan as small tags with the shop's own names: a few in view, all when opened. */
+export function PlanRack({ brief, proposal }: Props) {
+  const { t, i18n } = useTranslation('wizard-plan');
+  const { number, list } = formatsFor(i18n.language as Language, 'UTC');
+  const runs = useMemo(() => layOutRuns(brief, proposal, sketchSeed), [brief, proposal]);
+  const { factors } = brief;
+
+  const tag = (run: PlannedRun) => {
+    const settings = factors.slice(0, mostSettings).map((factor, place) => ({
+      name: factor.name,
+      mark: markOf(factor, run.coded[place] ?? 0),
+    }));
+    const spoken = factors.map((factor, place) => {
+      const value = run.actual[place] ?? '';
+      return `${factor.name} ${typeof value === 'number' ? number(value) : value}`;
+    });
+    const name = t('plan.tag', { number: run.order, settings: list(spoken) });
+    return <SmallTag key={run.order} number={String(run.order)} name={name} settings={settings} />;
+  };
+  return (
+    <div className="grid gap-1">
+      <div className="small-rack">{runs.slice(0, mostTags).map(tag)}</div>
+      {runs.length > mostTags && (
+        <Disclosure summary={t('plan.moreRuns', { count: runs.length - mostTags })}>
+          <div className="small-rack">{runs.slice(mostTags).map(tag)}</div>
+        </Disclosure>
+      )}
+    </div>
+  );
+}
