@@ -1,9 +1,11 @@
 // The only door into the statistics core: the rest of the product imports from here and from nowhere deeper.
 export { type AdviceFact, isAdviceFact } from './advice/advice-facts.ts';
 export { bestBet } from './advice/best-bet.ts';
+export { type CheckRunReading, readCheckRuns } from './advice/check-readings.ts';
 export { type CheckRuns, planCheckRuns } from './advice/check-runs.ts';
 export { judge } from './advice/judge.ts';
 export { type CheckReadings, judgeConfirmation } from './advice/judge-confirmation.ts';
+export { checkGroups, layOutCheckRuns } from './advice/lay-out-check-runs.ts';
 export type { ResultInput } from './advice/result-model.ts';
 export {
   type BestBet,
