@@ -5,6 +5,7 @@ import { catchUp } from './catch-up-texts.ts';
 import { checkLog } from './check-log.ts';
 import { mailGateway, textGateway } from './gateways.ts';
 import type { Job } from './loop.ts';
+import { makeVerdicts } from './make-verdicts.ts';
 import { readInbox } from './read-inbox.ts';
 import { retention } from './retention.ts';
 import { sendMails, sendTexts } from './send-messages.ts';
@@ -14,6 +15,7 @@ import { settleUnsure } from './settle-unsure.ts';
 export const jobs: Job[] = [
   beat,
   readInbox,
+  makeVerdicts,
   sendTexts(textGateway, () => config().texts.perSecond),
   sendMails(mailGateway),
   settleUnsure(textGateway),

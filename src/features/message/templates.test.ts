@@ -17,6 +17,7 @@ const samples: { [Name in TemplateName]: TemplateParams<Name> } = {
   planWaiting: { asker: 'Dana', trial: 'Line 3 seals', link },
   planSentBack: { reviewer: 'Sam', trial: 'Line 3 seals', link },
   planApproved: { reviewer: 'Sam', trial: 'Line 3 seals', link },
+  verdictReady: { trial: 'Line 3 seals', link },
   planWaitingText: { shop: 'Harrow Lane Foods', asker: 'Dana', trial: 'Line 3 seals' },
   planSentBackText: { shop: 'Harrow Lane Foods', reviewer: 'Sam', trial: 'Line 3 seals' },
   planApprovedText: { shop: 'Harrow Lane Foods', reviewer: 'Sam', trial: 'Line 3 seals' },

@@ -75,6 +75,13 @@ export const templates = {
     subject: t('mail:planApproved.subject', params),
     body: t('mail:planApproved.body', params),
   })),
+  verdictReady: mail(
+    { version: 1, holdsSecret: false, params: z.strictObject({ trial: z.string(), link }) },
+    (t, params) => ({
+      subject: t('mail:verdictReady.subject', params),
+      body: t('mail:verdictReady.body', params),
+    }),
+  ),
   planWaitingText: text(
     {
       version: 1,

@@ -39,19 +39,23 @@ export interface StoredPlan {
   hash: string;
 }
 
-/** The plan that was chosen last, if any. */
-export async function findLatestPlan(scope: ShopScope, trialId: string): Promise<StoredPlan | null> {
+/** The plan that was chosen last, if any; of one phase where that is named. */
+export async function findLatestPlan(
+  scope: ShopScope,
+  trialId: string,
+  phase?: StoredPlan['phase'],
+): Promise<StoredPlan | null> {
   const row: unknown = await scope
     .db('plans')
-    .where({ shop_id: scope.shopId, trial_id: trialId })
+    .where({ shop_id: scope.shopId, trial_id: trialId, ...(phase ? { phase } : {}) })
     .orderBy('n', 'desc')
     .first();
   if (!row) return null;
-  const { id, n, phase, seed, core_version, brief, proposal, hash } = planRow.parse(row);
+  const { id, n, seed, core_version, brief, proposal, hash, ...stored } = planRow.parse(row);
   return {
     id,
     n,
-    phase,
+    phase: stored.phase,
     seed,
     coreVersion: core_version,
     brief: brief.brief,

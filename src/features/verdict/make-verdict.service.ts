@@ -1,0 +1,110 @@
+import { recordActivity } from '../../server/db/activity-log.ts';
+import { inTransaction } from '../../server/db/in-transaction.ts';
+import type { ShopScope } from '../../server/db/scope.ts';
+import { config } from '../../server/env.ts';
+import { newId } from '../../server/ids.ts';
+import { queueMessage } from '../message/message.service.ts';
+import { findShop } from '../shop/shop.repository.ts';
+import { readStoredAnswers } from '../trial/answers.repository.ts';
+import { findLatestPlan } from '../trial/plan.repository.ts';
+import { findLatestReview, insertReview } from '../trial/review.repository.ts';
+import { findTrial, updateTrial } from '../trial/trial.repository.ts';
+import type { Trial } from '../trial/trial.ts';
+import { type Judgement, judgeTrial, type TrialToJudge } from './judge-trial.ts';
+import { findVerdict, findVerdictOfInput, insertVerdict } from './verdict.repository.ts';
+import { listVerdictRuns } from './verdict-runs.repository.ts';
+
+/** What the verdict of a trial rests on; null before it was started. */
+export async function readTrialToJudge(scope: ShopScope, trialId: string): Promise<TrialToJudge | null> {
+  const plan = await findLatestPlan(scope, trialId, 'main');
+  if (!plan) return null;
+  return {
+    brief: plan.brief,
+    proposal: plan.proposal,
+    runs: await listVerdictRuns(scope, trialId, 'main'),
+    checkRuns: await listVerdictRuns(scope, trialId, 'check'),
+  };
+}
+
+/** Whether an engineer must agree before anybody acts on the verdict. */
+async function isReviewDue(scope: ShopScope, trialId: string): Promise<boolean> {
+  const { verdictReview } = await findShop(scope);
+  if (verdictReview !== 'hazard') return verdictReview === 'always';
+  const { answers } = await readStoredAnswers(scope, trialId);
+  return (answers.hazards?.ticked.length ?? 0) > 0;
+}
+
+/**
+ * Makes the verdict of a trial whose readings are in: works it out, keeps it as the next one, moves the trial on and
+ * tells its owner. The same readings never make a second verdict.
+ * @returns whether the trial was moved on; false where nothing was measured, or somebody was faster
+ */
+export async function makeVerdict(scope: ShopScope, trialId: string): Promise<boolean> {
+  const trial = await findTrial(scope, trialId);
+  if (trial?.state !== 'readings in') return false;
+  const input = await readTrialToJudge(scope, trialId);
+  const judgement = input && judgeTrial(input);
+  if (!judgement) return false;
+  const reviewDue = await isReviewDue(scope, trialId);
+  return inTransaction(scope, (inner) => keepVerdict(inner, trial, judgement, reviewDue));
+}
+
+async function keepVerdict(
+  scope: ShopScope,
+  trial: Trial,
+  judgement: Judgement,
+  reviewDue: boolean,
+): Promise<boolean> {
+  const moved = await updateTrial(
+    scope,
+    { id: trial.id, from: ['readings in'], revision: trial.revision },
+    { state: reviewDue ? 'verdict review' : 'deciding' },
+  );
+  if (!moved) return false;
+  const { inputHash, coreVersion, facts, results } = judgement;
+  const known = await findVerdictOfInput(scope, { trialId: trial.id, inputHash, coreVersion });
+  const n = known?.n ?? ((await findVerdict(scope, trial.id))?.n ?? 0) + 1;
+  if (!known) {
+    await insertVerdict(scope, {
+      id: newId(),
+      trialId: trial.id,
+      n,
+      inputHash,
+      coreVersion,
+      facts,
+      analysis: results,
+    });
+  }
+  await recordActivity(scope, {
+    kind: 'verdict.made',
+    subjectId: trial.id,
+    trialId: trial.id,
+    details: { n, inputHash, coreVersion },
+  });
+  if (reviewDue) await askForReview(scope, trial, inputHash);
+  await tellOwner(scope, trial, n);
+  return true;
+}
+
+async function askForReview(scope: ShopScope, trial: Trial, subjectHash: string): Promise<void> {
+  const last = await findLatestReview(scope, trial.id, 'verdict');
+  await insertReview(scope, {
+    id: newId(),
+    trial_id: trial.id,
+    subject: 'verdict',
+    subject_hash: subjectHash,
+    round: (last?.round ?? 0) + 1,
+    state: 'asked',
+    asked_by: trial.ownerId,
+  });
+}
+
+async function tellOwner(scope: ShopScope, trial: Trial, n: number): Promise<void> {
+  await queueMessage(scope, {
+    personId: trial.ownerId,
+    template: 'verdictReady',
+    params: { trial: trial.title, link: `${config().appUrl}/trials/${trial.id}/verdict` },
+    dedupe: `verdict-ready:${trial.id}:${n}`,
+    trialId: trial.id,
+  });
+}
