@@ -44,6 +44,7 @@ export const fieldCodes = [
   'person-gone',
   'decide-mix',
   'choose-plan',
+  'check-first',
   'no-plan-fits',
   'unknown-field',
   'does-not-fit',

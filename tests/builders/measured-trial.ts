@@ -1,6 +1,6 @@
-import { insertPlan, insertRuns } from '../../src/features/trial/plan.repository.ts';
 import { insertAnswers } from '../../src/features/trial/answers.repository.ts';
 import type { Answers } from '../../src/features/trial/answers.schema.ts';
+import { insertPlan, insertRuns } from '../../src/features/trial/plan.repository.ts';
 import { hashOf } from '../../src/features/trial/reviewed-hash.service.ts';
 import { toBrief } from '../../src/features/trial/to-brief.ts';
 import { insertTrial } from '../../src/features/trial/trial.repository.ts';
@@ -18,7 +18,9 @@ export type ReadRun = (run: Pick<PlannedRun, 'order' | 'coded' | 'group'>) => nu
 /** Gives every run of a phase that waits its figure, as if it had been typed on the board. */
 export async function measureRuns(scope: ShopScope, trialId: string, read: ReadRun): Promise<void> {
   const { db, shopId } = scope;
-  const rows = await db('runs').where({ shop_id: shopId, trial_id: trialId, state: 'waiting' }).orderBy('number');
+  const rows = await db('runs')
+    .where({ shop_id: shopId, trial_id: trialId, state: 'waiting' })
+    .orderBy('number');
   for (const row of rows) {
     const value = read({ order: row.place, coded: JSON.parse(row.coded).x, group: row.group_key });
     const at = builtAt + row.place * runMilliseconds;
@@ -48,7 +50,8 @@ export async function buildMeasuredTrial(
   scope: ShopScope,
   about: { ownerId: string; read: ReadRun; answers?: Answers; seed?: number },
 ): Promise<string> {
-  const answers = finishedAnswers(about.answers);
+  const shift = { id: 'day', name: 'Day', from: '06:00', to: '14:00', runs: about.ownerId };
+  const answers = finishedAnswers({ crew: { shifts: [shift] }, ...about.answers });
   const read = toBrief(answers);
   if ('problems' in read) throw new RangeError(`buildMeasuredTrial: ${JSON.stringify(read.problems)}`);
   const [proposal] = proposePlans(read.brief);
@@ -75,4 +78,3 @@ export async function buildMeasuredTrial(
   await scope.db('trials').where({ shop_id: scope.shopId, id }).update({ state: 'readings in' });
   return id;
 }
-

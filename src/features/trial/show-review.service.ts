@@ -2,6 +2,7 @@ import { rolesMay } from '../../server/auth/permissions.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
 import { AppError } from '../../server/errors.ts';
 import { readNames } from '../people/people.repository.ts';
+import { findVerdict } from '../verdict/verdict.repository.ts';
 import { readStoredAnswers } from './answers.repository.ts';
 import { findLatestPlan } from './plan.repository.ts';
 import { findReview, listComments, type StoredReview } from './review.repository.ts';
@@ -19,7 +20,7 @@ export async function findReviewOf(scope: ShopScope, id: string): Promise<Stored
 
 /** The hash of what stands now under a review's subject. */
 export async function presentHash(scope: ShopScope, review: StoredReview): Promise<string> {
-  if (review.subject !== 'plan') throw new RangeError('presentHash: review.subject has no hash here');
+  if (review.subject !== 'plan') return (await findVerdict(scope, review.trial_id))?.inputHash ?? '';
   const { answers } = await readStoredAnswers(scope, review.trial_id);
   return hashOfReviewed(answers, await findLatestPlan(scope, review.trial_id));
 }

@@ -14,7 +14,7 @@ import type { Trial } from './trial.ts';
 import { changedMeanwhile, findStep, type TrialReader, takeStep } from './trial-reader.service.ts';
 
 /** Who runs and who measures, where it is the same on every shift; else it is decided when a run's turn comes. */
-function onePersonFor(answers: Answers): { personId: string | null; measurerId: string | null } {
+export function onePersonFor(answers: Answers): { personId: string | null; measurerId: string | null } {
   const shifts = answers.crew?.shifts ?? [];
   const only = (ids: string[]) => (new Set(ids).size === 1 ? (ids[0] ?? null) : null);
   const runners = shifts.map(({ runs }) => runs?.trim() ?? '');

@@ -1,5 +1,7 @@
 import { inTransaction } from '../../server/db/in-transaction.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
+import { planChecks } from '../verdict/check-runs.service.ts';
+import { adopt, leaveAsIs, openAgain } from '../verdict/decide.service.ts';
 import { sendForReview } from './review.service.ts';
 import { startTrial } from './start.service.ts';
 import type { TrialEventBody } from './trial.schema.ts';
@@ -19,6 +21,10 @@ type Handler<Event extends TrialEventBody['event']> = (
 const handlers: { [Event in TrialEventBody['event']]: Handler<Event> } = {
   'send for review': sendForReview,
   start: startTrial,
+  adopt,
+  'not now': leaveAsIs,
+  'plan check runs': planChecks,
+  'open again': openAgain,
 };
 
 /**

@@ -53,22 +53,34 @@ export function isReaderAllowed(
 }
 
 /**
- * The step that an event means for a trial in its state, if this reader may take it.
+ * The steps that an event may mean for a trial in its state, if this reader may take them: at least one, several where a
+ * condition tells them apart.
  * @throws AppError `forbidden` for who may never do it; `not-now` where the state has no such step
  */
+export async function findSteps(
+  scope: ShopScope,
+  trial: Trial,
+  event: TrialEvent,
+  reader: TrialReader,
+): Promise<[Transition, ...Transition[]]> {
+  const isReviewer = (await listReviewers(scope)).includes(reader.personId);
+  const may = ({ by }: Transition) => isReaderAllowed(reader, by, isReviewer);
+  if (!transitions.some((step) => step.event === event && may(step))) {
+    throw new AppError('forbidden', { detail: `may not ${event}` });
+  }
+  const [step, ...others] = transitionsOf(trial.state, event).filter(may);
+  if (!step) throw new AppError('not-now', { detail: `${event} in ${trial.state}` });
+  return [step, ...others];
+}
+
+/** The step of an event that means one thing only. @throws AppError as `findSteps` */
 export async function findStep(
   scope: ShopScope,
   trial: Trial,
   event: TrialEvent,
   reader: TrialReader,
 ): Promise<Transition> {
-  const isReviewer = (await listReviewers(scope)).includes(reader.personId);
-  const may = ({ by }: Transition) => isReaderAllowed(reader, by, isReviewer);
-  if (!transitions.some((step) => step.event === event && may(step))) {
-    throw new AppError('forbidden', { detail: `may not ${event}` });
-  }
-  const step = transitionsOf(trial.state, event).find(may);
-  if (!step) throw new AppError('not-now', { detail: `${event} in ${trial.state}` });
+  const [step] = await findSteps(scope, trial, event, reader);
   return step;
 }
 

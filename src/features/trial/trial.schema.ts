@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import '../people/schema-settings.ts';
+import { verdictEventSchemas } from '../verdict/decision.schema.ts';
 import { trialStates } from './trial-states.ts';
 
 export const trialParamsSchema = z.object({ id: z.string() });
@@ -78,5 +79,6 @@ export type ChoosePlan = z.output<typeof choosePlanSchema>;
 export const trialEventSchema = z.discriminatedUnion('event', [
   z.strictObject({ event: z.literal('send for review'), revision }),
   z.strictObject({ event: z.literal('start'), revision }),
+  ...verdictEventSchemas,
 ]);
 export type TrialEventBody = z.output<typeof trialEventSchema>;

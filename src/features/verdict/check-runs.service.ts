@@ -1,6 +1,5 @@
 import { randomInt } from 'node:crypto';
-import { layOutCheckRuns, planCheckRuns } from '../../lib/doe/index.ts';
-import { coreVersion } from '../../lib/doe/version.ts';
+import { coreVersion, layOutCheckRuns, planCheckRuns } from '../../lib/doe/index.ts';
 import { recordActivity } from '../../server/db/activity-log.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
 import { AppError } from '../../server/errors.ts';

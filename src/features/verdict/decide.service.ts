@@ -7,9 +7,9 @@ import { namesHazard } from '../trial/missing-answers.ts';
 import { openReview } from '../trial/review.service.ts';
 import type { Trial } from '../trial/trial.ts';
 import { findStep, findSteps, type TrialReader, takeStep } from '../trial/trial-reader.service.ts';
-import type { DecisionOutcome } from './decision.ts';
 import { insertDecision } from './decision.repository.ts';
 import type { Adopt, NotNow, OpenAgain } from './decision.schema.ts';
+import type { DecisionOutcome } from './decision.ts';
 import type { StoredVerdict } from './stored-verdict.ts';
 import { findVerdict } from './verdict.repository.ts';
 
@@ -32,7 +32,13 @@ function refuseField(pointer: string, code: string): AppError {
 
 async function keepDecision(
   scope: ShopScope,
-  decision: { trial: Trial; verdict: StoredVerdict; outcome: DecisionOutcome; note: string; personId: string },
+  decision: {
+    trial: Trial;
+    verdict: StoredVerdict;
+    outcome: DecisionOutcome;
+    note: string;
+    personId: string;
+  },
 ): Promise<void> {
   const { trial, verdict, outcome, note, personId } = decision;
   await insertDecision(scope, {

@@ -1,17 +1,16 @@
-import { createHash } from 'node:crypto';
 import {
   AnalysisError,
   type Brief,
   bestBet,
   type ConfirmationVerdict,
+  coreVersion,
   judge,
   judgeConfirmation,
   type Proposal,
   type ResultInput,
   readCheckRuns,
 } from '../../lib/doe/index.ts';
-import { coreVersion } from '../../lib/doe/version.ts';
-import { type ActivityDetail, canonicalJson } from '../../server/db/activity-log.ts';
+import { hashOf } from '../trial/reviewed-hash.service.ts';
 import type { JudgedRun, VerdictFacts } from './stored-verdict.ts';
 import { figureOf, toPlannedRuns, toResultInputs } from './verdict-input.ts';
 import type { VerdictRun } from './verdict-runs.ts';
@@ -50,16 +49,17 @@ function toJudgedRun(run: VerdictRun, results: number): JudgedRun {
 /** Equal where the same plan has the same readings: row ids and moments do not count. */
 export function hashInput({ brief, proposal, runs, checkRuns }: TrialToJudge): string {
   const bare = (list: readonly VerdictRun[]) =>
-    list.map(({ id: _, readings, ...run }) => ({ ...run, readings: readings.map((reading) => ({ ...reading })) }));
-  const input = {
+    list.map(({ id: _, readings, ...run }) => ({
+      ...run,
+      readings: readings.map((reading) => ({ ...reading })),
+    }));
+  return hashOf({
     brief,
     errorPlan: proposal.errorPlan,
     terms: proposal.terms,
     runs: bare(runs),
     checkRuns: bare(checkRuns),
-  };
-  const plain: ActivityDetail = JSON.parse(JSON.stringify(input));
-  return createHash('sha256').update(canonicalJson(plain)).digest('hex');
+  });
 }
 
 function judgeChecks(

@@ -6,8 +6,9 @@ import { newId } from '../../server/ids.ts';
 import { queueMessage } from '../message/message.service.ts';
 import { findShop } from '../shop/shop.repository.ts';
 import { readStoredAnswers } from '../trial/answers.repository.ts';
+import { namesHazard } from '../trial/missing-answers.ts';
 import { findLatestPlan } from '../trial/plan.repository.ts';
-import { findLatestReview, insertReview } from '../trial/review.repository.ts';
+import { openReview } from '../trial/review.service.ts';
 import { findTrial, updateTrial } from '../trial/trial.repository.ts';
 import type { Trial } from '../trial/trial.ts';
 import { type Judgement, judgeTrial, type TrialToJudge } from './judge-trial.ts';
@@ -30,8 +31,7 @@ export async function readTrialToJudge(scope: ShopScope, trialId: string): Promi
 async function isReviewDue(scope: ShopScope, trialId: string): Promise<boolean> {
   const { verdictReview } = await findShop(scope);
   if (verdictReview !== 'hazard') return verdictReview === 'always';
-  const { answers } = await readStoredAnswers(scope, trialId);
-  return (answers.hazards?.ticked.length ?? 0) > 0;
+  return namesHazard((await readStoredAnswers(scope, trialId)).answers);
 }
 
 /**
@@ -81,22 +81,17 @@ async function keepVerdict(
     trialId: trial.id,
     details: { n, inputHash, coreVersion },
   });
-  if (reviewDue) await askForReview(scope, trial, inputHash);
+  if (reviewDue) {
+    await openReview(scope, {
+      trial_id: trial.id,
+      subject: 'verdict',
+      subject_hash: inputHash,
+      state: 'asked',
+      personId: trial.ownerId,
+    });
+  }
   await tellOwner(scope, trial, n);
   return true;
-}
-
-async function askForReview(scope: ShopScope, trial: Trial, subjectHash: string): Promise<void> {
-  const last = await findLatestReview(scope, trial.id, 'verdict');
-  await insertReview(scope, {
-    id: newId(),
-    trial_id: trial.id,
-    subject: 'verdict',
-    subject_hash: subjectHash,
-    round: (last?.round ?? 0) + 1,
-    state: 'asked',
-    asked_by: trial.ownerId,
-  });
 }
 
 async function tellOwner(scope: ShopScope, trial: Trial, n: number): Promise<void> {

@@ -1,15 +1,15 @@
 import { rolesMay } from '../../server/auth/permissions.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
+import { findShop } from '../shop/shop.repository.ts';
 import { readFinished } from '../trial/answer-problem.ts';
 import { readStoredAnswers } from '../trial/answers.repository.ts';
 import type { Answers } from '../trial/answers.schema.ts';
 import { findLatestPlan } from '../trial/plan.repository.ts';
 import { findTrialOf, type TrialReader } from '../trial/trial-reader.service.ts';
-import { findShop } from '../shop/shop.repository.ts';
 import { listDecisions } from './decision.repository.ts';
-import type { VerdictView } from './verdict-view.ts';
-import { findVerdict } from './verdict.repository.ts';
 import { readTrialSpan } from './trial-span.repository.ts';
+import { findVerdict } from './verdict.repository.ts';
+import type { VerdictView } from './verdict-view.ts';
 
 function safetyOf(answers: Answers) {
   const hazards = readFinished(answers, 'hazards');

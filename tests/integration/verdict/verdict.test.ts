@@ -80,8 +80,14 @@ describe('a verdict', () => {
     const scene = await setTheScene({ verdict_review: 'always' });
     const id = await buildMeasuredTrial(scene.scope, { ownerId: scene.ownerId, read: hotter });
     await makeVerdict(scene.scope, id);
-    expect(await look(scene, id)).toMatchObject({ state: 'verdict review', reviewDue: true, mayDecide: false });
-    expect(await codeOf(act(scene, id, { event: 'adopt', unchecked: true, note: 'no time' }))).toBe('not-now');
+    expect(await look(scene, id)).toMatchObject({
+      state: 'verdict review',
+      reviewDue: true,
+      mayDecide: false,
+    });
+    expect(await codeOf(act(scene, id, { event: 'adopt', unchecked: true, note: 'no time' }))).toBe(
+      'not-now',
+    );
   });
 
   it('is not made where nothing was measured', async () => {
@@ -116,7 +122,10 @@ describe('after a verdict', () => {
     expect(waiting.filter(({ group_key }) => group_key === 'best')).toHaveLength(waiting.length / 2);
     // A bad day: all readings 3 N lower; the gain stays.
     await measureRuns(scene.scope, id, (run) => (hotter(run) ?? 0) - 3);
-    await scene.scope.db('trials').where({ shop_id: scene.scope.shopId, id }).update({ state: 'readings in' });
+    await scene.scope
+      .db('trials')
+      .where({ shop_id: scene.scope.shopId, id })
+      .update({ state: 'readings in' });
     await makeVerdict(scene.scope, id);
     const view = await look(scene, id);
     expect(view).toMatchObject({ n: 2, state: 'deciding', confirmation: { outcome: 'held' } });
@@ -151,6 +160,9 @@ describe('after a verdict', () => {
     await act(scene, id, { event: 'not now', keepToday: true });
     expect((await look(scene, id)).state).toBe('closed');
     await act(scene, id, { event: 'open again', reason: 'The film changed', note: undefined });
-    expect(await look(scene, id)).toMatchObject({ state: 'deciding', decisions: [{ outcome: 'opened again' }, {}] });
+    expect(await look(scene, id)).toMatchObject({
+      state: 'deciding',
+      decisions: [{ outcome: 'opened again' }, {}],
+    });
   });
 });
