@@ -64,6 +64,7 @@ export const personalTables: readonly PersonalTable[] = [
   },
   { table: 'trials', column: 'owner_id', fields: ['number', 'title', 'machine', 'state', 'created_at'] },
   { table: 'plans', column: 'chosen_by', fields: ['trial_id', 'n', 'created_at'] },
+  { table: 'decisions', column: 'decided_by', fields: ['trial_id', 'outcome', 'note', 'decided_at'] },
   { table: 'answers', column: 'updated_by', fields: ['trial_id', 'version', 'updated_at'] },
   { table: 'phrases', column: 'written_by', fields: ['purpose', 'texts', 'created_at'] },
   {

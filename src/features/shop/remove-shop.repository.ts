@@ -3,6 +3,8 @@ import type { ShopScope } from '../../server/db/scope.ts';
 
 /** Every table with rows of a shop, children before parents. A test reads the schema and refuses one that is missing. */
 export const shopTables = [
+  'decisions',
+  'verdicts',
   'review_comments',
   'reviews',
   'phrases',
@@ -28,11 +30,11 @@ export const shopTables = [
 export async function deleteShopRows(scope: ShopScope): Promise<void> {
   const { db, shopId } = scope;
   if (!db.isTransaction) throw new RangeError('deleteShopRows: scope must hold a transaction');
-  // The log only grows and answers freeze, save here: their guards are lifted for this transaction and back before it ends.
-  await allowChanges(db, 'activity');
+  // The log and verdicts only grow and answers freeze, save here: their guards are lifted for this transaction only.
+  for (const grown of ['activity', 'verdicts']) await allowChanges(db, grown);
   await allowChanges(db, 'answers');
   for (const table of shopTables) await db(table).where({ shop_id: shopId }).delete();
-  await refuseChanges(db, 'activity');
+  for (const grown of ['activity', 'verdicts']) await refuseChanges(db, grown);
   await refuseChanges(db, 'answers', 'frozen_hash');
   await db('shops').where({ id: shopId }).delete();
 }
