@@ -92,16 +92,13 @@ export const WHOLE_PLOT_PLANS: SimulatedPlan[] = [
     active: [0, 3],
   },
   {
-    // Two whole plots at each level of A, and four middle runs in a whole plot of their own.
-    name: '2^(5-1) + 4 middles in five whole plots, A hard to change',
+    // One whole plot at each level of A; two of middle runs, whose difference is all the error there is for A.
+    name: '2^(4-1) + 6 middles in four whole plots, A hard to change',
     rung: 'strata',
     runs: [
-      ...corners(4, [[0, 1, 2, 3]]).map((run) => ({
-        ...run,
-        wholePlot: 2 * sign(run, [0]) + sign(run, [1, 2, 3]) + 1,
-      })),
-      ...middles(5, 4).map((run) => ({ ...run, wholePlot: 5 })),
+      ...corners(3, [[0, 1, 2]]).map((run) => ({ ...run, wholePlot: sign(run, [0]) + 1 })),
+      ...middles(4, 6).map((run, place) => ({ ...run, wholePlot: 3 + (place % 2) })),
     ],
-    active: [0, 5],
+    active: [0, 3],
   },
 ];

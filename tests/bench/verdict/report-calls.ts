@@ -34,7 +34,7 @@ export function reportCalibration(): void {
   report(
     'calibration',
     'False calls, coverage, power',
-    `${experiments} experiments a row, seed ${SEED + 4}; active effects of three run-to-run standard deviations from low to high, drawn anew among all contrasts in each experiment.`,
+    `${experiments} experiments a row, seed ${SEED + 4}; active effects of three run-to-run standard deviations from low to high, drawn anew among all contrasts in each experiment. Pseudo error and its sub strata are cautious with many active: their limits promise at most 5 %.`,
     markdownTable(
       ['plan', 'error', 'active', 'likely of a null', 'any clear of nulls', 'coverage', 'power'],
       rows,

@@ -7,7 +7,7 @@ import { measureWorth } from '../../../../tests/bench/verdict/worth.ts';
 import { REGULARITIES } from './effect-regularities.ts';
 
 // Short versions, with fixed seeds, of `npm run bench:verdict`; its tables stand in tests/reports. Bounds are the promise plus four standard errors.
-const EXPERIMENTS = 300;
+const EXPERIMENTS = 200;
 const atMost = (share: number) => share + 4 * Math.sqrt((share * (1 - share)) / EXPERIMENTS);
 
 const scenarios = [...PLANS, ...WHOLE_PLOT_PLANS]
@@ -34,7 +34,7 @@ describe('advice', () => {
   it('comes near the choice that knows noise and effect size, and beats acting on what is significant', () => {
     const { shares } = measureWorth({
       cell: { factors: 4, runs: 16, noise: 1 },
-      processes: 200,
+      processes: 120,
       random: createRandomSource(13),
     });
     expect(shares.bestBet).toBeGreaterThan(shares.shrunken - 0.03);
@@ -44,7 +44,7 @@ describe('advice', () => {
   it('does not take interactions as large as main effects for noise', () => {
     const { shares } = measureWorth({
       cell: { factors: 5, runs: 16, noise: 0.25 },
-      processes: 150,
+      processes: 100,
       random: createRandomSource(19),
       rules: { ...REGULARITIES, size: [0, 1, 1, 1] },
     });
@@ -52,8 +52,8 @@ describe('advice', () => {
   });
 
   it('predicts what check runs will show', () => {
-    const found = simulateConfirmation({ trials: 400, noise: 0.25, random: createRandomSource(17) });
-    expect(found.covered / found.trials).toBeGreaterThan(0.91);
+    const found = simulateConfirmation({ trials: 200, noise: 0.25, random: createRandomSource(17) });
+    expect(found.covered / found.trials).toBeGreaterThan(0.89);
     expect(found.covered / found.trials).toBeLessThan(0.99);
     expect(found.effectsCovered / found.effects).toBeGreaterThan(0.93);
   });
