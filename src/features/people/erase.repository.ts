@@ -33,12 +33,21 @@ export function erasedColumns(name: string): Record<string, unknown> {
   };
 }
 
-/** Blanks what a person remarked in reviews; that there was a remark, and where, stays. */
+/** Where a person's own words stand, beside the column that says whose they are. */
+const ownWords = [
+  { table: 'review_comments', by: 'written_by' },
+  { table: 'notes', by: 'written_by' },
+  { table: 'problems', by: 'raised_by' },
+] as const;
+
+/** Blanks what a person remarked in reviews and on runs; that there was a remark, and where, stays. */
 export async function blankRemarksOfPerson(scope: ShopScope, personId: string): Promise<void> {
-  await scope
-    .db('review_comments')
-    .where({ shop_id: scope.shopId, written_by: personId })
-    .update({ words: '' });
+  for (const { table, by } of ownWords) {
+    await scope
+      .db(table)
+      .where({ shop_id: scope.shopId, [by]: personId })
+      .update({ words: '' });
+  }
 }
 
 /** Removes what served the person alone: sessions, links, tokens, roles. */

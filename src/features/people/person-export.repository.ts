@@ -82,6 +82,13 @@ export const personalTables: readonly PersonalTable[] = [
     column: 'written_by',
     fields: ['review_id', 'place', 'words', 'created_at', 'settled_at'],
   },
+  { table: 'notes', column: 'written_by', fields: ['trial_id', 'run_id', 'words', 'created_at'] },
+  {
+    table: 'problems',
+    column: 'raised_by',
+    fields: ['trial_id', 'run_id', 'words', 'raised_at', 'settled_at'],
+  },
+  { table: 'problems', column: 'settled_by', fields: ['trial_id', 'run_id', 'settled_at'] },
   { table: 'people', column: 'asked_by', fields: ['id'] },
 ];
 

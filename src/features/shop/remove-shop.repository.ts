@@ -5,6 +5,8 @@ import type { ShopScope } from '../../server/db/scope.ts';
 export const shopTables = [
   'decisions',
   'verdicts',
+  'notes',
+  'problems',
   'review_comments',
   'reviews',
   'phrases',

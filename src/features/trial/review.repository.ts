@@ -69,6 +69,24 @@ export async function decideAskedReview(
   return changed > 0;
 }
 
+/**
+ * What these subjects rest on has changed: agreements no longer hold, and what is asked is asked about something old.
+ * @returns how many reviews that touched
+ */
+export async function reopenReviews(
+  scope: ShopScope,
+  trialId: string,
+  subjects: readonly Subject[],
+): Promise<number> {
+  const own = () =>
+    scope
+      .db('reviews')
+      .where({ shop_id: scope.shopId, trial_id: trialId })
+      .whereIn('subject', [...subjects]);
+  const reopened = await own().where({ state: 'approved' }).update({ state: 'reopened' });
+  return reopened + (await own().where({ state: 'asked' }).update({ state: 'taken back' }));
+}
+
 /** Remarks of all rounds of a subject, oldest first. */
 export async function listComments(
   scope: ShopScope,

@@ -1,5 +1,10 @@
 import { inTransaction } from '../../server/db/in-transaction.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
+import { endEarly } from '../run/end-early.service.ts';
+import { holdTrialAs } from '../run/hold-trial.service.ts';
+import { pauseTrial } from '../run/pause-trial.service.ts';
+import { raiseProblemAs, sayChange, settleProblem } from '../run/problem.service.ts';
+import { resumeTrial } from '../run/resume-trial.service.ts';
 import { planChecks } from '../verdict/check-runs.service.ts';
 import { adopt, leaveAsIs, openAgain } from '../verdict/decide.service.ts';
 import { sendForReview } from './review.service.ts';
@@ -25,6 +30,13 @@ const handlers: { [Event in TrialEventBody['event']]: Handler<Event> } = {
   'not now': leaveAsIs,
   'plan check runs': planChecks,
   'open again': openAgain,
+  pause: pauseTrial,
+  hold: holdTrialAs,
+  resume: resumeTrial,
+  judge: endEarly,
+  'raise a problem': raiseProblemAs,
+  'settle a problem': settleProblem,
+  'something changed': sayChange,
 };
 
 /**

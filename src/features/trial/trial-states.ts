@@ -30,6 +30,7 @@ export const trialEvents = [
   'verdict made',
   'repeat a run',
   'put back a run',
+  'reading corrected',
   'plan check runs',
   'adopt',
   'not now',
@@ -115,6 +116,8 @@ export const transitions: readonly Transition[] = [
   { from: 'running', event: 'hold', by: ['trial.hold'], to: 'held' },
   { from: 'running', event: 'last run closed', by: ['product'], to: 'readings in' },
   { from: 'running', event: 'judge', by: ['trial.run'], to: 'readings in' },
+  // A stop for safety tells those on shift, which a pause does not.
+  { from: 'paused', event: 'hold', by: ['trial.hold'], to: 'held' },
   { from: 'paused', event: 'resume', by: ['trial.run'], to: 'running' },
   { from: 'paused', event: 'judge', by: ['trial.run'], to: 'readings in' },
   {
@@ -127,6 +130,11 @@ export const transitions: readonly Transition[] = [
   { from: 'held', event: 'judge', by: ['trial.run'], to: 'readings in' },
   { from: 'readings in', event: 'verdict made', by: ['product'], to: 'deciding', when: ['no review due'] },
   { from: 'readings in', event: 'verdict made', by: ['product'], to: 'verdict review', when: ['review due'] },
+  // A figure that was put right makes the next verdict, and what was agreed to is asked about anew.
+  { from: 'readings in', event: 'reading corrected', by: ['product'], to: 'readings in' },
+  { from: 'verdict review', event: 'reading corrected', by: ['product'], to: 'readings in' },
+  { from: 'deciding', event: 'reading corrected', by: ['product'], to: 'readings in' },
+  { from: 'adoption review', event: 'reading corrected', by: ['product'], to: 'readings in' },
   { from: 'readings in', event: 'repeat a run', by: ['trial.run'], to: 'running' },
   { from: 'readings in', event: 'put back a run', by: ['trial.run'], to: 'running' },
   {

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import '../people/schema-settings.ts';
+import { runTrialEventSchemas } from '../run/trial-run-event.schema.ts';
 import { verdictEventSchemas } from '../verdict/decision.schema.ts';
 import { trialStates } from './trial-states.ts';
 
@@ -80,5 +81,6 @@ export const trialEventSchema = z.discriminatedUnion('event', [
   z.strictObject({ event: z.literal('send for review'), revision }),
   z.strictObject({ event: z.literal('start'), revision }),
   ...verdictEventSchemas,
+  ...runTrialEventSchemas,
 ]);
 export type TrialEventBody = z.output<typeof trialEventSchema>;

@@ -3,6 +3,7 @@ import { publicAnswersSchema } from '../../../../features/trial/saved-answers.sc
 import { trialEventSchema, trialParamsSchema } from '../../../../features/trial/trial.schema.ts';
 import { carryOutEvent } from '../../../../features/trial/trial-event.service.ts';
 import { defineEndpoint } from '../../../../server/http/define-endpoint.ts';
+import { wakeWorker } from '../../../../server/wake.ts';
 
 /** Who may do what is in the table of states, which is asked for each event. */
 export const POST = defineEndpoint(
@@ -14,6 +15,7 @@ export const POST = defineEndpoint(
   },
   async ({ scope, viewer, params, body }) => {
     await carryOutEvent(scope, { trialId: params.id, body }, viewer);
+    wakeWorker();
     return readAnswers(scope, params.id, viewer);
   },
 );
