@@ -3,14 +3,14 @@ import { ButtonLink } from '../../../components/ui/ButtonLink.tsx';
 import { Choice } from '../../../components/ui/Choice.tsx';
 import { type StarterName, starterNames } from '../answer-choices.ts';
 import { QuestionPart } from './QuestionPart.tsx';
-import { useFill } from './use-question-form.tsx';
+import { useStarter } from './use-starter.ts';
 import { useWizard } from './wizard-context.ts';
 
 /** The nearest job, whose usual answers are a beginning; or none, or an earlier trial. */
 export function JobPart() {
   const { t } = useTranslation('wizard');
   const { answers } = useWizard();
-  const fill = useFill();
+  const begin = useStarter();
   return (
     <QuestionPart>
       <Choice
@@ -20,9 +20,7 @@ export function JobPart() {
         help={t('problem.starterHelp')}
         options={starterNames.map((name) => ({ value: name, label: t(`problem.starters.${name}`) }))}
         value={answers.job?.starter ?? ''}
-        onChange={(event) =>
-          fill('job', { ...answers.job, starter: event.currentTarget.value as StarterName })
-        }
+        onChange={(event) => begin(event.currentTarget.value as StarterName)}
       />
       <div>
         <ButtonLink kind="quiet" href="/trials" icon="copy">
