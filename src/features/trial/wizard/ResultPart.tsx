@@ -9,7 +9,7 @@ import { BlankSentence } from './BlankSentence.tsx';
 import { QuestionPart } from './QuestionPart.tsx';
 import { useQuestionForm } from './use-question-form.tsx';
 
-const marks = { machine: '[1]', result: '[2]' } as const;
+const marks = { machine: '<1>', result: '<2>' } as const;
 
 /** The machine and the result in one sentence, which way is better, and how one knows. */
 export function ResultPart() {

@@ -1,3 +1,4 @@
+import { memo } from 'react';
 import { type UseFormReturn, useFormState, useWatch } from 'react-hook-form';
 import { useTranslation } from 'react-i18next';
 import { ActionMenu } from '../../../components/ui/ActionMenu.tsx';
@@ -8,7 +9,7 @@ import { ChoiceFields } from './ChoiceFields.tsx';
 import { CoachLines } from './CoachLines.tsx';
 import { NumberFields } from './NumberFields.tsx';
 import { SettingManners } from './SettingManners.tsx';
-import { useWizard } from './wizard-context.ts';
+import { useForms } from './use-question-form.tsx';
 
 export type SettingsForm = UseFormReturn<AnswerOf<'settings'>>;
 
@@ -22,9 +23,9 @@ interface Props {
 }
 
 /** One setting: its name here and on the panel, its two ends and today's value, and under More how it behaves. */
-export function SettingCard({ form, place, last, onRemove, onMove }: Props) {
+export const SettingCard = memo(function SettingCard({ form, place, last, onRemove, onMove }: Props) {
   const { t } = useTranslation('wizard');
-  const { mayWrite } = useWizard();
+  const { mayWrite } = useForms();
   const { register, control } = form;
   const setting = useWatch({ control, name: `settings.${place}` });
   const { errors } = useFormState({ control, name: `settings.${place}` });
@@ -93,7 +94,7 @@ export function SettingCard({ form, place, last, onRemove, onMove }: Props) {
       <SettingManners form={form} place={place} />
     </section>
   );
-}
+});
 
 /** Remarks that stand at the field once it was left. */
 const saidAtFields = ['low-not-below-high', 'end-beyond-machine', 'usual-outside-range'] as const;

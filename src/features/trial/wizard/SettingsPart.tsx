@@ -1,4 +1,4 @@
-import { useEffect, useState } from 'react';
+import { useCallback, useEffect, useState } from 'react';
 import { useFieldArray } from 'react-hook-form';
 import { useTranslation } from 'react-i18next';
 import { Button } from '../../../components/ui/Button.tsx';
@@ -9,8 +9,7 @@ import type { SettingAnswer } from '../answers.schema.ts';
 import { CoachLines } from './CoachLines.tsx';
 import { PasteSettings } from './PasteSettings.tsx';
 import { SettingCard } from './SettingCard.tsx';
-import { useQuestionForm } from './use-question-form.tsx';
-import { useWizard } from './wizard-context.ts';
+import { useForms, useQuestionForm } from './use-question-form.tsx';
 
 const mostSettings = 7;
 
@@ -22,7 +21,7 @@ interface Removed {
 /** One to seven settings as cards in the order of the shop; each can be moved, taken away, and brought back. */
 export function SettingsPart() {
   const { t } = useTranslation('wizard');
-  const { mayWrite } = useWizard();
+  const { mayWrite } = useForms();
   const form = useQuestionForm('settings');
   const { control, getValues, formState } = form;
   // The form's own key must not take the place of the setting's id.
@@ -38,29 +37,31 @@ export function SettingsPart() {
     if (moved) document.getElementById(`setting-${moved.id}`)?.focus();
   }, [moved]);
 
-  function nameOf(place: number): string {
-    return getValues(`settings.${place}.name`) || t('settings.unnamed', { number: place + 1 });
-  }
   function add(kind: 'number' | 'choice'): void {
     const id = crypto.randomUUID();
     append({ kind, id } as SettingAnswer, { focusName: `settings.${fields.length}.name` });
     setRemoved(null);
   }
-  function takeAway(place: number): void {
-    setRemoved({ setting: getValues(`settings.${place}`), place });
-    remove(place);
-  }
+  const takeAway = useCallback(
+    (place: number): void => {
+      setRemoved({ setting: getValues(`settings.${place}`), place });
+      remove(place);
+    },
+    [getValues, remove],
+  );
+  const moveTo = useCallback(
+    (from: number, to: number): void => {
+      const { id, name = '' } = getValues(`settings.${from}`);
+      const count = getValues('settings').length;
+      setMoved({ id, words: t('settings.moved', { name, place: to + 1, count }) });
+      move(from, to);
+    },
+    [getValues, move, t],
+  );
   function bringBack({ setting, place }: Removed): void {
     insert(Math.min(place, fields.length), setting, { focusName: `settings.${place}.name` });
     setRemoved(null);
   }
-  function moveTo(from: number, to: number): void {
-    const words = t('settings.moved', { name: nameOf(from), place: to + 1, count: fields.length });
-    const { id } = getValues(`settings.${from}`);
-    move(from, to);
-    setMoved({ id, words });
-  }
-
   const isFull = fields.length >= mostSettings;
   return (
     <div className="grid grid-cols-[minmax(0,1fr)] gap-4">

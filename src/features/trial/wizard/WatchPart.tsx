@@ -3,16 +3,15 @@ import { useTranslation } from 'react-i18next';
 import { Button } from '../../../components/ui/Button.tsx';
 import { Disclosure } from '../../../components/ui/Disclosure.tsx';
 import { QuestionPart } from './QuestionPart.tsx';
-import { useQuestionForm } from './use-question-form.tsx';
+import { useForms, useQuestionForm } from './use-question-form.tsx';
 import { WatchedResult } from './WatchedResult.tsx';
-import { useWizard } from './wizard-context.ts';
 
 const mostWatched = 3;
 
 /** Up to three results to keep an eye on, so that a better one is not bought with a worse other. */
 export function WatchPart() {
   const { t } = useTranslation('wizard');
-  const { mayWrite } = useWizard();
+  const { mayWrite } = useForms();
   const form = useQuestionForm('watch');
   // The form's own key must not take the place of the result's id.
   const { fields, append, remove } = useFieldArray({

@@ -37,11 +37,13 @@ const nothingYet: SoFar = {
 type Check = Parameters<WizardForms['addCheck']>[0];
 
 /** The forms of the page, so that all can be checked at once and the first that is not content gets the focus. */
-function useForms(store: AnswersStore) {
+function useChecks(store: AnswersStore, mayWrite: boolean) {
   const [checks] = useState(() => new Set<Check>());
   const forms = useMemo(
     (): WizardForms => ({
+      mayWrite,
       contentOf: store.contentOf,
+      change: store.change,
       fill: store.fill,
       onReplaced: store.onReplaced,
       addCheck(check) {
@@ -49,7 +51,7 @@ function useForms(store: AnswersStore) {
         return () => checks.delete(check);
       },
     }),
-    [store, checks],
+    [store, checks, mayWrite],
   );
   const check = useCallback(async (): Promise<void> => {
     let isContent = true;
@@ -66,7 +68,7 @@ function Frame({ step, children, lastAction, ...page }: FrameProps) {
   const soFar = useSoFar(answers);
   const shown = useShownSteps(trialId, step);
   const seen = useMemo(() => seenSteps(answers, step, shown), [answers, step, shown]);
-  const { forms, check } = useForms(store);
+  const { forms, check } = useChecks(store, mayWrite);
   const top = useRef<HTMLDivElement>(null);
 
   useEffect(() => tellHead({ save, steps: stepStatesOf(answers, seen) }), [save, answers, seen]);

@@ -11,7 +11,9 @@ export interface HeadNews {
 let news: HeadNews | null = null;
 const readers = new Set<() => void>();
 
+/** Nothing new is no news: the head is not drawn again for each key. */
 export function tellHead(next: HeadNews): void {
+  if (JSON.stringify(news) === JSON.stringify(next)) return;
   news = next;
   for (const read of readers) read();
 }

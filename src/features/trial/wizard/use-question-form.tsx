@@ -5,11 +5,12 @@ import { schemaResolver } from '../../../components/island/schema-resolver.ts';
 import type { AnswerOf, QuestionName } from '../answers.schema.ts';
 import { finishedSchemas, untouched } from '../finished.schema.ts';
 import { tidy } from './stored-answers.ts';
-import { useWizard } from './wizard-context.ts';
 
 /** What the forms of a page share with its frame. */
 export interface WizardForms {
+  mayWrite: boolean;
   contentOf(question: QuestionName): unknown;
+  change<Name extends QuestionName>(question: Name, content: AnswerOf<Name>): void;
   fill<Name extends QuestionName>(question: Name, content: AnswerOf<Name> | undefined): void;
   onReplaced(hear: (question: QuestionName) => void): () => void;
   /** Has the form checked along with the page; the first that is not content gets the focus. */
@@ -18,7 +19,8 @@ export interface WizardForms {
 
 export const WizardFormsContext = createContext<WizardForms | null>(null);
 
-function useForms(): WizardForms {
+/** Stays the same while somebody types, so that what leans on it alone is not drawn again. @throws RangeError outside the wizard's frame */
+export function useForms(): WizardForms {
   const forms = useContext(WizardFormsContext);
   if (!forms) throw new RangeError('useForms: no WizardFrame around it');
   return forms;
@@ -44,8 +46,8 @@ export function useQuestionForm<Name extends QuestionName>(
 ): UseFormReturn<AnswerOf<Name> & FieldValues> {
   type Values = AnswerOf<Name> & FieldValues;
   const { t } = useTranslation('errors');
-  const { change } = useWizard();
   const forms = useForms();
+  const { change } = forms;
   const [first] = useState(() => (forms.contentOf(question) ?? untouched[question]) as DefaultValues<Values>);
   const form = useForm<Values>({
     defaultValues: first,

@@ -1,4 +1,4 @@
-import { useEffect, useRef, useState } from 'react';
+import { startTransition, useEffect, useRef, useState } from 'react';
 import type { Answers } from '../answers.schema.ts';
 import type { SoFar } from './wizard-context.ts';
 
@@ -25,7 +25,7 @@ export function useSoFar(answers: Answers): SoFar | null {
         const next = waiting;
         waiting = null;
         ask(next);
-      } else setSoFar(data);
+      } else startTransition(() => setSoFar(data));
     });
     beside.current = { ask };
     return () => worker.terminate();
