@@ -43,7 +43,7 @@ function useChecks(store: AnswersStore, mayWrite: boolean) {
     (): WizardForms => ({
       mayWrite,
       contentOf: store.contentOf,
-      change: store.change,
+      change: store.changeSoon,
       fill: store.fill,
       onReplaced: store.onReplaced,
       addCheck(check) {

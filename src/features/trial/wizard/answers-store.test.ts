@@ -19,6 +19,7 @@ function surroundings(kept = new Map<QuestionName, KeptAnswer>()) {
       remove: (question) => void kept.delete(question),
     },
     tell: (question) => void told.push(question),
+    soon: (work) => work(),
     later(milliseconds, work) {
       timer = { milliseconds, work };
       return () => {
@@ -67,7 +68,7 @@ describe('the answers of a page', () => {
   it('are shown and kept at once, and saved once after a pause', async () => {
     const { store, saving, kept, open, told, pass, answer } = begin();
     store.change('worth', { change: '3' });
-    store.change('worth', { change: '3,5' });
+    store.changeSoon('worth', { change: '3,5' });
     expect(store.getSnapshot().answers.worth).toEqual({ change: '3,5' });
     expect(kept.get('worth')).toEqual({ base: 0, content: { change: '3,5' } });
     expect(open).toEqual([]);

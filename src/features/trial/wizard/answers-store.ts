@@ -1,7 +1,7 @@
 import type { AnswerOf, QuestionName } from '../answers.schema.ts';
 import { questionNames } from '../answers.schema.ts';
 import { untouched } from '../finished.schema.ts';
-import { createAnswerBook } from './answer-book.ts';
+import { type ContentSource, createAnswerBook } from './answer-book.ts';
 import type { AnswerKeep } from './kept-answers.ts';
 import {
   isDue,
@@ -29,6 +29,8 @@ export interface AnswersSurroundings {
   tell(question: QuestionName, stored: StoredAnswer): void;
   /** Calls back after so many milliseconds; answers how to call it off. */
   later(milliseconds: number, work: () => void): () => void;
+  /** Calls back once the key that is being handled has been answered. */
+  soon(work: () => void): void;
 }
 
 const pauseAfterTyping = 600;
@@ -126,12 +128,13 @@ export function createAnswersStore(first: StoredAnswers) {
     return sending;
   }
 
-  function take(question: QuestionName, content: unknown, from: 'its form' | 'elsewhere'): void {
+  /** @returns whether it is anything new */
+  function take(question: QuestionName, content: unknown, from: ContentSource): boolean {
     const { refused: _, ...rest } = stateOf(question);
-    if (sameContent(rest.content, content)) return;
+    if (sameContent(rest.content, content)) return false;
     put(question, { ...rest, content, typedHere: true }, from);
     sendLater(pauseAfterTyping);
-    show();
+    return true;
   }
 
   return {
@@ -151,11 +154,15 @@ export function createAnswersStore(first: StoredAnswers) {
     },
     /** Takes over what was typed into the question's form. */
     change<Name extends QuestionName>(question: Name, content: AnswerOf<Name>): void {
-      take(question, content, 'its form');
+      if (take(question, content, 'its form')) show();
+    },
+    /** The same for a form that shows its fields by itself: the rest of the page follows after the key. */
+    changeSoon<Name extends QuestionName>(question: Name, content: AnswerOf<Name>): void {
+      if (take(question, content, 'its form')) around?.soon(show);
     },
     /** The same from elsewhere than the question's own form, which then shows it: a starter, a copy. */
     fill<Name extends QuestionName>(question: Name, content: AnswerOf<Name> | undefined): void {
-      take(question, content ?? untouched[question], 'elsewhere');
+      if (take(question, content ?? untouched[question], 'elsewhere')) show();
     },
     flush,
     /** The requests to send while the page is being left, when nothing can be waited for. */

@@ -35,6 +35,7 @@ function connect(store: AnswersStore, trialId: string, readerId: string): () => 
     keep: keepIn(localStorage, trialId, readerId),
     tell: (question, stored) => tabs.postMessage({ question, stored } satisfies Saved),
     later,
+    soon: (work) => void later(0, work),
   });
   const leave = () => {
     for (const request of store.leaving()) void saveAnswer(trialId, request, { keepalive: true });
