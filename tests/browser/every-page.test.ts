@@ -11,14 +11,15 @@ import {
   takeShot,
   type WatchedPage,
 } from '../setup/browser.ts';
+import { addDraft } from '../setup/draft-trial.ts';
 import { type RunningApp, startApp } from '../setup/running-app.ts';
 import { signIn } from '../setup/sign-in.ts';
 
-/** Who opens the page, and at which address; `:personId` stands for somebody of the demo shop. */
+/** Who opens the page, and at which address; `:personId` stands for somebody of the demo shop, `:trialId` for a draft. */
 interface Visit {
   file: string;
   path: string;
-  as: 'nobody' | 'admin';
+  as: 'nobody' | 'admin' | 'supervisor';
   /** The status to expect where it is not 200. */
   status?: number;
   /** Paper of a fixed size, which a narrow window scrolls. */
@@ -47,6 +48,9 @@ const visits: Visit[] = [
   { file: 'shop/texts-check.astro', path: '/shop/texts-check', as: 'admin' },
   { file: 'shop/poster.astro', path: '/shop/poster', as: 'admin' },
   { file: 'activity.astro', path: '/activity', as: 'admin' },
+  { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/problem', as: 'supervisor' },
+  { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/today', as: 'supervisor' },
+  { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/settings', as: 'supervisor' },
 ];
 
 /** Pages with no look of their own: one only answers a form, one shows when the product itself fails. */
@@ -63,21 +67,34 @@ const views = [
 let running: RunningApp;
 let browser: Browser;
 let visitors: Record<Visit['as'], WatchedPage>;
+let trialId: string;
 beforeAll(async () => {
   running = await startApp({ standIns: true });
   browser = await launchBrowser();
-  visitors = { nobody: await openPage(browser), admin: await openPage(browser) };
+  visitors = {
+    nobody: await openPage(browser),
+    admin: await openPage(browser),
+    supervisor: await openPage(browser),
+  };
   await signIn(visitors.admin.page, running.url, 'admin');
+  await signIn(visitors.supervisor.page, running.url, 'supervisor');
+  trialId = await addDraft(visitors.supervisor.page, running.url);
 });
 afterAll(async () => {
   await browser?.close();
   await running?.stop();
 });
 
+/** What its pictures are called. */
+function nameOf({ file, path }: Visit): string {
+  const step = file.includes('[step]') ? path.split('/').pop() : '';
+  return `${file.replace(/\W+/g, '-')}${step}`;
+}
+
 /** Opens the page as its visitor and answers the status. */
 async function open(visit: Visit): Promise<number | undefined> {
   const { page } = visitors[visit.as];
-  let path = visit.path;
+  let path = visit.path.replace(':trialId', trialId);
   if (path.includes(':personId')) {
     await page.goto(`${running.url}/people`);
     path = (await page.locator('a[href^="/people/0"]').first().getAttribute('href')) ?? path;
@@ -90,7 +107,7 @@ describe('every page', () => {
     const files = readdirSync(pagesFolder, { recursive: true, encoding: 'utf8' }).filter((file) =>
       file.endsWith('.astro'),
     );
-    expect(files.sort()).toEqual([...unseen, ...visits.map((visit) => visit.file)].sort());
+    expect(files.sort()).toEqual([...new Set([...unseen, ...visits.map((visit) => visit.file)])].sort());
   });
 
   it.each(visits)('$path is open to everybody who sees, hears or only uses keys', async (visit) => {
@@ -105,7 +122,7 @@ describe('every page', () => {
         () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
       );
       if (!visit.isPaper) expect(sticksOut, `${width} px`).toBeLessThanOrEqual(0);
-      await takeShot(page, `${visit.file.replace(/\W+/g, '-')}-${width}-${colorScheme}`);
+      await takeShot(page, `${nameOf(visit)}-${width}-${colorScheme}`);
     }
     expect(complaints.splice(0)).toEqual([]);
   });
