@@ -50,14 +50,18 @@ function Stand({
     soFar,
     shop,
   };
+  const { mayWrite, change } = value;
+  const [stillChange] = useState(() => change);
   const forms = useMemo(
     () => ({
+      mayWrite,
+      change: stillChange,
       contentOf: (question: QuestionName) => told.answers[question],
       fill: () => undefined,
       onReplaced: () => () => undefined,
       addCheck: () => () => undefined,
     }),
-    [told],
+    [told, mayWrite, stillChange],
   );
   return (
     <WizardFormsContext value={forms}>
