@@ -5,7 +5,9 @@ import type mail from '../../locales/en/mail.json';
 import type myPage from '../../locales/en/my-page.json';
 import type people from '../../locales/en/people.json';
 import type planFacts from '../../locales/en/plan-facts.json';
+import type planReview from '../../locales/en/plan-review.json';
 import type runTexts from '../../locales/en/run-texts.json';
+import type safety from '../../locales/en/safety.json';
 import type shop from '../../locales/en/shop.json';
 import type signIn from '../../locales/en/sign-in.json';
 import type starters from '../../locales/en/starters.json';
@@ -15,12 +17,16 @@ import type verdict from '../../locales/en/verdict.json';
 import type wizard from '../../locales/en/wizard.json';
 import type wizardFrame from '../../locales/en/wizard-frame.json';
 import type wizardPlan from '../../locales/en/wizard-plan.json';
+import type wizardSafety from '../../locales/en/wizard-safety.json';
 
 // A key that is not in the English files, or a placeholder left out, is a type error.
 declare module 'i18next' {
   interface CustomTypeOptions {
     defaultNS: 'common';
     resources: {
+      'wizard-safety': typeof wizardSafety;
+      safety: typeof safety;
+      'plan-review': typeof planReview;
       common: typeof common;
       errors: typeof errors;
       front: typeof front;

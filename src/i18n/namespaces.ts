@@ -17,6 +17,9 @@ export const namespaces = [
   'wizard',
   'wizard-frame',
   'verdict',
+  'plan-review',
+  'safety',
+  'wizard-safety',
 ] as const;
 
 export type Namespace = (typeof namespaces)[number];
