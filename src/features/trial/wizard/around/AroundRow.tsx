@@ -11,11 +11,13 @@ interface Props {
   readonly thing: AroundThing;
   readonly answer: ThingAnswer;
   readonly errorAt: (pointer: string) => string | undefined;
+  /** What is wrong with it beside another thing. */
+  readonly fault?: string | undefined;
   readonly onChange: (next: ThingAnswer) => void;
 }
 
 /** One thing that may change meanwhile, with the ways that are open to it. Crews are never compared. */
-export function AroundRow({ thing, answer, errorAt, onChange }: Props) {
+export function AroundRow({ thing, answer, errorAt, fault, onChange }: Props) {
   const { t } = useTranslation('wizard-safety');
   const ways: readonly AroundWay[] = waysFor[thing];
   const { way } = answer;
@@ -29,7 +31,7 @@ export function AroundRow({ thing, answer, errorAt, onChange }: Props) {
         options={ways.map((value) => ({ value, label: t(`around.way.${value}`) }))}
         value={way ?? ''}
         onChange={({ target }) => onChange({ ...answer, way: ways.find((each) => each === target.value) })}
-        error={errorAt(`#/${thing}/way`)}
+        error={fault ?? errorAt(`#/${thing}/way`)}
       />
       {way === 'split' && (thing === 'batch' || thing === 'shift' || thing === 'machine') && (
         <SplitFields thing={thing} answer={answer} errorAt={errorAt} onChange={onChange} />

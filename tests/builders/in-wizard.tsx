@@ -1,0 +1,109 @@
+import { type RenderResult, render } from '@testing-library/react';
+import { type ReactNode, useMemo, useState } from 'react';
+import { IslandRoot } from '../../src/components/island/IslandRoot.tsx';
+import type { Answers } from '../../src/features/trial/answers.schema.ts';
+import { type WizardForms, WizardFormsContext } from '../../src/features/trial/wizard/use-question-form.tsx';
+import {
+  type CrewMember,
+  type SoFar,
+  WizardContext,
+  type WizardShop,
+} from '../../src/features/trial/wizard/wizard-context.ts';
+import { wordsFor } from '../../src/i18n/resources.ts';
+
+export const nothingSoFar: SoFar = {
+  brief: null,
+  proposals: [],
+  runs: [],
+  missing: 0,
+  misfit: null,
+  coaching: [],
+  today: { swing: null, suggestions: [], mean: null, gauge: null },
+};
+
+export function crewMember(more: Partial<CrewMember> & Pick<CrewMember, 'id'>): CrewMember {
+  return {
+    kind: 'person',
+    name: more.id,
+    language: 'en',
+    roles: ['operator'],
+    safetyPerson: false,
+    consent: 'agreed',
+    consentAt: 0,
+    ...more,
+  };
+}
+
+export function wizardShop(more: Partial<WizardShop> = {}): WizardShop {
+  return {
+    name: 'Test shop',
+    currency: 'EUR',
+    timeZone: 'Europe/Warsaw',
+    planReview: 'hazard',
+    people: [crewMember({ id: 'ana', name: 'Ana' })],
+    ...more,
+  };
+}
+
+interface Around {
+  answers?: Answers;
+  shop?: WizardShop;
+  soFar?: SoFar;
+  mayWrite?: boolean;
+}
+
+interface Kept {
+  answers: Answers;
+  checks: Set<(focus: boolean) => Promise<boolean>>;
+}
+
+/** Keeps the answers in memory, where the test can look at them. */
+function MemoryFrame(props: Required<Omit<Around, 'answers'>> & { kept: Kept; children: ReactNode }) {
+  const { kept, children, shop, soFar, mayWrite } = props;
+  const [answers, setAnswers] = useState(kept.answers);
+  kept.answers = answers;
+  const forms = useMemo(
+    (): WizardForms => ({
+      contentOf: (question) => kept.answers[question],
+      fill: (question, content) => setAnswers((before) => ({ ...before, [question]: content })),
+      onReplaced: () => () => undefined,
+      addCheck(check) {
+        kept.checks.add(check);
+        return () => kept.checks.delete(check);
+      },
+      flush: async () => undefined,
+    }),
+    [kept],
+  );
+  return (
+    <WizardContext value={{ trialId: 'trial', answers, mayWrite, soFar, shop, change: forms.fill }}>
+      <WizardFormsContext value={forms}>
+        <fieldset disabled={!mayWrite}>{children}</fieldset>
+      </WizardFormsContext>
+    </WizardContext>
+  );
+}
+
+/** Renders what a page of the wizard asks with all that it leans on, and tells what was answered. */
+export function renderInWizard(
+  children: ReactNode,
+  { answers = {}, shop = wizardShop(), soFar = nothingSoFar, mayWrite = true }: Around = {},
+): RenderResult & { answers: () => Answers; check: () => Promise<void> } {
+  const kept: Kept = { answers, checks: new Set() };
+  const words = wordsFor('en', ['wizard-frame', 'wizard-safety', 'safety', 'errors']);
+  const rendered = render(
+    <IslandRoot language="en" words={words}>
+      <MemoryFrame kept={kept} shop={shop} soFar={soFar} mayWrite={mayWrite}>
+        {children}
+      </MemoryFrame>
+    </IslandRoot>,
+  );
+  return {
+    ...rendered,
+    answers: () => kept.answers,
+    async check() {
+      let isContent = true;
+      for (const each of kept.checks) isContent = (await each(isContent)) && isContent;
+    },
+  };
+}
