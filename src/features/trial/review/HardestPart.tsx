@@ -2,8 +2,9 @@ import { useTranslation } from 'react-i18next';
 import { JobTagSettings } from '../../../components/ui/JobTagSettings.tsx';
 import { formatsFor } from '../../../i18n/format.ts';
 import type { Language } from '../../../i18n/languages.ts';
+import { decisionOn } from '../readiness.ts';
 import { mixParts } from '../wizard/setting-words.ts';
-import { decisionOf, mixKey, ruledOutMixes } from '../wizard/start/look-mixes.ts';
+import { mixKey, ruledOutMixes } from '../wizard/start/look-mixes.ts';
 import { tagSettingsOf } from '../wizard/tag-settings.tsx';
 import { Lines } from './Lines.tsx';
 import { ReviewLine } from './ReviewLine.tsx';
@@ -23,7 +24,7 @@ export function HardestPart() {
   return (
     <ReviewPart title={t('part.hardest')}>
       {plan.hardest.map(({ order, ends }) => {
-        const decision = decisionOf(answers.look, ends);
+        const decision = decisionOn(answers, { ends });
         const said = decision ? tWizard(`start.decision.${decision}`) : t('undecided');
         return (
           <ReviewLine

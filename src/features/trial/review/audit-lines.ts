@@ -72,8 +72,7 @@ function sizeWords(detectable: Detectable, { t, formats, unit }: AuditInput): st
 export function auditLines(proposal: Proposal, input: AuditInput): AuditLine[] {
   const { t, formats, worth } = input;
   const { resolution, generators, definingWords, aliases, confoundedWithBlocks, errorPlan } = proposal;
-  // A stored plan writes the infinite resolution of a full factorial as null.
-  const isFull = (resolution as number | null) === null || !Number.isFinite(resolution);
+  const isFull = !Number.isFinite(resolution);
   const power = proposal.powerAtWorthHaving;
   const lines: AuditLine[] = [
     { key: 'design', label: t('audit.design'), lines: designWords(proposal, input) },

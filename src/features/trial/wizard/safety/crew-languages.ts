@@ -1,5 +1,6 @@
 import type { Language } from '../../../../i18n/languages.ts';
 import type { Answers } from '../../answers.schema.ts';
+import { crewOf } from '../../readiness.ts';
 import type { CrewMember } from '../wizard-context.ts';
 
 /**
@@ -7,8 +8,7 @@ import type { CrewMember } from '../wizard-context.ts';
  * named, of everybody who could run.
  */
 export function crewLanguages(answers: Answers, people: readonly CrewMember[]): Language[] {
-  const shifts = answers.crew?.shifts ?? [];
-  const named = new Set(shifts.flatMap(({ runs, measures }) => [runs, measures]));
+  const named = new Set(crewOf(answers).map(({ id }) => id));
   const onCrew = people.filter(({ id }) => named.has(id));
   const couldRun = people.filter(({ roles }) => roles.includes('operator'));
   const readers = onCrew.length > 0 ? onCrew : couldRun;

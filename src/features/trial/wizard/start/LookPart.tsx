@@ -4,9 +4,11 @@ import { Callout } from '../../../../components/ui/Callout.tsx';
 import { formatsFor } from '../../../../i18n/format.ts';
 import type { Language } from '../../../../i18n/languages.ts';
 import type { HardMix } from '../../plan.schema.ts';
+import { decisionOn } from '../../readiness.ts';
 import { QuestionPart } from '../QuestionPart.tsx';
 import { mixParts } from '../setting-words.ts';
 import { useAnswer } from '../use-answer.tsx';
+import { useFlush } from '../use-question-form.tsx';
 import { useWizard } from '../wizard-context.ts';
 import { HardRun } from './HardRun.tsx';
 import { decideMix, type LookedMix, mixKey, ruledOutMixes } from './look-mixes.ts';
@@ -35,7 +37,8 @@ function RemakeNews({ remake }: { readonly remake: Remake }) {
 export function LookPart({ isChecked }: Props) {
   const { t, i18n } = useTranslation('wizard-safety');
   const { mayWrite, answers, shop } = useWizard();
-  const { now } = useStanding();
+  const { now, refresh } = useStanding();
+  const flush = useFlush();
   const { plan } = now;
   const { content, set } = useAnswer('look');
   const { remake, ask } = useRemake();
@@ -46,9 +49,11 @@ export function LookPart({ isChecked }: Props) {
   const mixWords = (ends: LookedMix['ends']) => list(mixParts(ends, answers.settings?.settings ?? []));
 
   function decide(decided: LookedMix): void {
-    const before = content.mixes.find(({ ends }) => mixKey(ends) === mixKey(decided.ends))?.decision;
+    const before = decisionOn(answers, decided);
     set(decideMix(content, hardest, decided));
     if ((before === 'ruledOut') !== (decided.decision === 'ruledOut')) ask(decided);
+    // What is left to the engineer may make a second person due.
+    else void flush().then(refresh);
   }
 
   return (
@@ -60,7 +65,7 @@ export function LookPart({ isChecked }: Props) {
               key={mixKey(mix.ends)}
               mix={mix}
               plan={plan}
-              decision={content.mixes.find(({ ends }) => mixKey(ends) === mixKey(mix.ends))?.decision}
+              decision={decisionOn(answers, mix)}
               isChecked={isChecked}
               isBusy={remake === 'working'}
               onDecide={(decision) => decide({ ends: mix.ends, decision })}

@@ -2,7 +2,6 @@ import { useTranslation } from 'react-i18next';
 import { Callout } from '../../../../components/ui/Callout.tsx';
 import { formatsFor } from '../../../../i18n/format.ts';
 import type { Language } from '../../../../i18n/languages.ts';
-import { namesHazard } from '../../missing-answers.ts';
 import { takesAnswers } from '../../trial-states.ts';
 import { useWizard, type WizardShop } from '../wizard-context.ts';
 import { useStanding } from './standing.tsx';
@@ -12,7 +11,7 @@ const mostNames = 2;
 /** Who may look at the plan, by name while they are few. */
 function checkersOf({ people }: WizardShop, readerId: string): string[] {
   const names = people
-    .filter(({ id, roles }) => id !== readerId && roles.includes('engineer'))
+    .filter(({ id, roles, safetyPerson }) => id !== readerId && (roles.includes('engineer') || safetyPerson))
     .map(({ name }) => name);
   return names.length <= mostNames ? names : [];
 }
@@ -20,9 +19,9 @@ function checkersOf({ people }: WizardShop, readerId: string): string[] {
 /** Where the plan is: with the engineer, sent back, agreed to, started, or checked by nobody else. */
 export function StandingCallout() {
   const { t, i18n } = useTranslation('wizard-safety');
-  const { answers, shop } = useWizard();
+  const { shop } = useWizard();
   const { now, readerId } = useStanding();
-  const { review, state, reviewDue } = now;
+  const { review, state, secondPerson } = now;
   const language = i18n.language as Language;
   const { dateTime } = formatsFor(language, shop.timeZone);
   const decided = { who: review?.decidedBy ?? '', time: dateTime(review?.decidedAt ?? 0) };
@@ -63,8 +62,14 @@ export function StandingCallout() {
       </Callout>
     );
   }
-  const isWished = shop.planReview === 'always' || (shop.planReview === 'hazard' && namesHazard(answers));
-  if (!isWished || reviewDue) return null;
+  if (secondPerson === 'missing') {
+    return (
+      <Callout tone="caution" title={t('start.nobodyTitle')}>
+        {t('start.nobodyWords')}
+      </Callout>
+    );
+  }
+  if (secondPerson !== 'alone') return null;
   return (
     <Callout tone="caution" title={t('start.uncheckedTitle')}>
       {t('start.uncheckedWords')}

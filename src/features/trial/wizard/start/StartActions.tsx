@@ -6,7 +6,7 @@ import { decideReviewCall, readAnswersCall, trialEventCall } from '../../trial.q
 import { takesAnswers } from '../../trial-states.ts';
 import { useFlush } from '../use-question-form.tsx';
 import { useWizard } from '../wizard-context.ts';
-import { useStanding } from './standing.tsx';
+import { goesToEngineer, useStanding } from './standing.tsx';
 import { listGaps } from './start-gaps.ts';
 
 const firstGap =
@@ -19,7 +19,7 @@ export function StartActions() {
   const { now, isPlanner, work, run, setChecked } = useStanding();
   const flush = useFlush();
   const [asking, setAsking] = useState(false);
-  const { state, review, reviewDue } = now;
+  const { state } = now;
   if (!isPlanner) return null;
 
   if (state === 'plan review') {
@@ -36,14 +36,14 @@ export function StartActions() {
   }
   if (!takesAnswers(state)) return null;
 
-  const isSending = reviewDue && !(review?.state === 'approved' && review.holds);
+  const isSending = goesToEngineer(now);
   const event = isSending ? 'send for review' : 'start';
   const words = isSending
     ? { now: t('start.send'), busy: t('start.sending') }
     : { now: t('start.start'), busy: t('start.starting') };
 
   function press(): void {
-    if (listGaps(answers, now.plan, shop.people).length > 0) {
+    if (listGaps(answers, { plan: now.plan, people: shop.people, isSending }).length > 0) {
       setChecked(true);
       requestAnimationFrame(() => document.querySelector<HTMLElement>(firstGap)?.focus());
       return;

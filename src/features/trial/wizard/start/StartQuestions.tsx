@@ -6,7 +6,7 @@ import { ReadyPart } from './ReadyPart.tsx';
 import { StandingCallout } from './StandingCallout.tsx';
 import { StartFault } from './StartFault.tsx';
 import { StartSummary } from './StartSummary.tsx';
-import { useStanding } from './standing.tsx';
+import { goesToEngineer, useStanding } from './standing.tsx';
 import { listGaps } from './start-gaps.ts';
 
 /** All answers on one page, the hardest runs, and what must be ready. */
@@ -14,7 +14,7 @@ export function StartQuestions() {
   const { t } = useTranslation('wizard-safety');
   const { answers, shop } = useWizard();
   const { now, isChecked } = useStanding();
-  const gaps = listGaps(answers, now.plan, shop.people);
+  const gaps = listGaps(answers, { plan: now.plan, people: shop.people, isSending: goesToEngineer(now) });
   return (
     <>
       <StepHead title={t('start.title')} help={t('start.help')} />

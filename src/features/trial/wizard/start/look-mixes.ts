@@ -15,10 +15,6 @@ export function mixKey(ends: Ends): string {
     .join(' ');
 }
 
-export function decisionOf(look: LookAnswer | undefined, ends: Ends): LookedMix['decision'] {
-  return look?.mixes.find((mix) => mixKey(mix.ends) === mixKey(ends))?.decision;
-}
-
 /** Mixes that were ruled out and are in no plan any more. */
 export function ruledOutMixes(look: LookAnswer, hardest: readonly HardMix[]): LookedMix[] {
   const present = new Set(hardest.map(({ ends }) => mixKey(ends)));

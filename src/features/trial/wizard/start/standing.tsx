@@ -1,4 +1,4 @@
-import { createContext, useContext, useEffect, useState } from 'react';
+import { createContext, useCallback, useContext, useEffect, useState } from 'react';
 import { type SubmissionFault, useSubmission } from '../../../../components/island/use-submission.ts';
 import type { PublicAnswers } from '../../saved-answers.schema.ts';
 import { readAnswersCall } from '../../trial.queries.ts';
@@ -18,6 +18,8 @@ export interface Standing {
   /** Whether a start was tried with something still to do. */
   isChecked: boolean;
   setChecked(checked: boolean): void;
+  /** Asks the server where the trial stands; without an answer what was known stays. */
+  refresh(): Promise<void>;
   /** Does one thing at a time; what comes back is what stands from then on. Answers whether it was done. */
   run(work: StartWork, call: (now: PublicAnswers) => Promise<PublicAnswers>): Promise<boolean>;
 }
@@ -29,6 +31,11 @@ export function useStanding(): Standing {
   const standing = useContext(StandingContext);
   if (!standing) throw new RangeError('useStanding: not on the last page');
   return standing;
+}
+
+/** Whether the next step is to let the engineer look, not to start. */
+export function goesToEngineer({ reviewDue, review }: PublicAnswers): boolean {
+  return reviewDue && !(review?.state === 'approved' && review.holds);
 }
 
 /** How often the page looks whether the plan was agreed to. */
@@ -45,16 +52,15 @@ export function useStandingOf(
   const { fault, submit } = useSubmission();
   const { trialId, state } = now;
 
+  const refresh = useCallback(() => readAnswersCall(trialId).then(setNow, () => undefined), [trialId]);
   useEffect(() => {
     if (state !== 'plan review') return;
     const look = () => {
-      if (document.visibilityState === 'hidden') return;
-      // A look that fails is made good by the next one.
-      readAnswersCall(trialId).then(setNow, () => undefined);
+      if (document.visibilityState !== 'hidden') void refresh();
     };
     const timer = setInterval(look, lookAgainMilliseconds);
     return () => clearInterval(timer);
-  }, [trialId, state]);
+  }, [refresh, state]);
 
   async function run(
     name: StartWork,
@@ -72,5 +78,5 @@ export function useStandingOf(
     return isDone;
   }
 
-  return { now, ...reader, work, fault, isChecked, setChecked, run };
+  return { now, ...reader, work, fault, isChecked, setChecked, refresh, run };
 }

@@ -3,22 +3,27 @@ import type { Answers, QuestionName } from '../../answers.schema.ts';
 import { missingAnswers, missingVersions } from '../../missing-answers.ts';
 import type { PublicPlan } from '../../plan.schema.ts';
 import { stepOf, type WizardStep } from '../../questions.ts';
+import { undecidedMixes } from '../../readiness.ts';
 import { crewLanguages } from '../safety/crew-languages.ts';
 import type { CrewMember } from '../wizard-context.ts';
-import { decisionOf } from './look-mixes.ts';
 
 const planGap: AnswerProblem = { question: 'spare', pointer: '#', code: 'choose-plan' };
 
-/** All that stands between the answers and a start, in the order of the pages, each once. */
-export function listGaps(
-  answers: Answers,
-  plan: PublicPlan | null,
-  people: readonly CrewMember[],
-): AnswerProblem[] {
+interface Asked {
+  plan: PublicPlan | null;
+  people: readonly CrewMember[];
+  /** An engineer looks before the machine is made ready. */
+  isSending: boolean;
+}
+
+/** All that stands between the answers and a start, or sending them, in the order of the pages. */
+export function listGaps(answers: Answers, { plan, people, isSending }: Asked): AnswerProblem[] {
   const versions = missingVersions(answers, crewLanguages(answers, people));
-  const undecided = plan?.hardest.filter(({ ends }) => decisionOf(answers.look, ends) === undefined) ?? [];
+  const undecided = undecidedMixes(answers, plan?.hardest ?? []);
   return [
-    ...missingAnswers(answers).filter(({ question }) => question !== 'look'),
+    ...missingAnswers(answers).filter(
+      ({ question }) => question !== 'look' && !(isSending && question === 'ready'),
+    ),
     ...versions,
     ...(plan?.fits ? [] : [planGap]),
     ...undecided.map(
