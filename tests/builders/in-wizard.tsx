@@ -72,8 +72,10 @@ function MemoryFrame(props: Required<Omit<Around, 'answers'>> & { kept: Kept; ch
         return () => kept.checks.delete(check);
       },
       flush: async () => undefined,
+      mayWrite,
+      change: (question, content) => setAnswers((before) => ({ ...before, [question]: content })),
     }),
-    [kept],
+    [kept, mayWrite],
   );
   return (
     <WizardContext value={{ trialId: 'trial', answers, mayWrite, soFar, shop, change: forms.fill }}>
