@@ -44,7 +44,7 @@ async function tabTo(page: Page, wanted: string): Promise<void> {
     const isThere = await page.evaluate((name) => {
       const active = document.activeElement;
       if (!(active instanceof HTMLElement) || active === document.body) return false;
-      const words = active instanceof HTMLInputElement ? active.labels?.[0]?.innerText : active.innerText;
+      const words = active instanceof HTMLInputElement ? active.labels?.[0]?.textContent : active.textContent;
       return active.id === name || (words ?? '').replace(/\s+/g, ' ').trim().startsWith(name);
     }, wanted);
     if (isThere) return;
@@ -145,7 +145,7 @@ function readAnswers(page: Page, trialId: string): Promise<PublicAnswers> {
 /** Takes the plan that is recommended for what is saved. */
 async function choosePlan(page: Page, trialId: string): Promise<void> {
   const { revision, questions } = await readAnswers(page, trialId);
-  const typed = Object.fromEntries(Object.entries(questions).map(([name, { content }]) => [name, content]));
+  const typed = Object.fromEntries(Object.entries(questions).map(([name, saved]) => [name, saved?.content]));
   const read = toBrief(typed);
   if ('problems' in read) throw new Error(JSON.stringify(read.problems));
   const [first] = proposePlans(read.brief);

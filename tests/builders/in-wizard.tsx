@@ -57,6 +57,9 @@ interface Kept {
   checks: Set<(focus: boolean) => Promise<boolean>>;
 }
 
+/** There is nobody to save to. */
+async function flush(): Promise<void> {}
+
 /** Keeps the answers in memory, where the test can look at them. */
 function MemoryFrame(props: Required<Omit<Around, 'answers'>> & { kept: Kept; children: ReactNode }) {
   const { kept, children, shop, soFar, mayWrite } = props;
@@ -71,14 +74,13 @@ function MemoryFrame(props: Required<Omit<Around, 'answers'>> & { kept: Kept; ch
         kept.checks.add(check);
         return () => kept.checks.delete(check);
       },
-      flush: async () => undefined,
       mayWrite,
       change: (question, content) => setAnswers((before) => ({ ...before, [question]: content })),
     }),
     [kept, mayWrite],
   );
   return (
-    <WizardContext value={{ trialId: 'trial', answers, mayWrite, soFar, shop, change: forms.fill }}>
+    <WizardContext value={{ trialId: 'trial', answers, mayWrite, soFar, shop, change: forms.fill, flush }}>
       <WizardFormsContext value={forms}>
         <fieldset disabled={!mayWrite}>{children}</fieldset>
       </WizardFormsContext>

@@ -39,21 +39,23 @@ export function AddRemark({ label, place }: Props) {
 
   if (!isOpen) {
     return (
-      <Button
-        kind="quiet"
-        icon="edit"
-        onClick={() => {
-          setOpen(true);
-          requestAnimationFrame(() => document.getElementById(id)?.focus());
-        }}
-      >
-        {t('remark.open')}
-        <span className="sr-only"> {label}</span>
-      </Button>
+      <dd className="review-open">
+        <Button
+          kind="quiet"
+          icon="edit"
+          onClick={() => {
+            setOpen(true);
+            requestAnimationFrame(() => document.getElementById(id)?.focus());
+          }}
+        >
+          {t('remark.open')}
+          <span className="sr-only"> {label}</span>
+        </Button>
+      </dd>
     );
   }
   return (
-    <div className="review-add">
+    <dd className="review-add">
       <TextArea
         id={id}
         label={t('remark.label', { line: label })}
@@ -69,6 +71,6 @@ export function AddRemark({ label, place }: Props) {
           {t('remark.add')}
         </Button>
       </div>
-    </div>
+    </dd>
   );
 }

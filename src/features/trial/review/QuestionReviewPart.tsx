@@ -20,10 +20,20 @@ export function QuestionReviewPart() {
   const { t, i18n } = useTranslation('plan-review');
   const { t: tWizard } = useTranslation('wizard-safety');
   const { t: tSafety } = useTranslation('safety');
+  const { t: tFrame } = useTranslation('wizard-frame');
   const { answers, shop, trial } = useReview();
   const language = i18n.language as Language;
   const { list } = formatsFor(language, shop.timeZone);
-  const input: SummaryInput = { answers, plan: trial.plan, shop, t: tWizard, tSafety, list, language };
+  const input: SummaryInput = {
+    answers,
+    plan: trial.plan,
+    shop,
+    t: tWizard,
+    tSafety,
+    tFrame,
+    list,
+    language,
+  };
   return (
     <>
       <ReviewPart title={t('part.question')}>

@@ -35,8 +35,8 @@ export function ReviewLine({ label, place, children }: Props) {
             </span>
           </p>
         ))}
-        {review?.mayDecide && review.state === 'asked' && <AddRemark label={label} place={place} />}
       </dd>
+      {review?.mayDecide && review.state === 'asked' && <AddRemark label={label} place={place} />}
     </div>
   );
 }

@@ -11,7 +11,7 @@ export function ReviewStanding() {
   const { dateTime } = formatsFor(i18n.language as Language, shop.timeZone);
   const decided = { who: review?.decidedBy ?? '', time: dateTime(review?.decidedAt ?? 0) };
   return (
-    <div role="status" className="grid gap-2">
+    <div role="status" className="grid gap-2 empty:hidden">
       {review?.state === 'asked' && (
         <p>{t('asked', { who: review.askedBy, time: dateTime(review.askedAt), round: review.round })}</p>
       )}

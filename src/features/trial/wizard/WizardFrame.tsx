@@ -46,7 +46,6 @@ function useChecks(store: AnswersStore, mayWrite: boolean) {
       change: store.changeSoon,
       fill: store.fill,
       onReplaced: store.onReplaced,
-      flush: store.flush,
       addCheck(check) {
         checks.add(check);
         return () => checks.delete(check);

@@ -15,8 +15,6 @@ export interface WizardForms {
   onReplaced(hear: (question: QuestionName) => void): () => void;
   /** Has the form checked along with the page; the first that is not content gets the focus. */
   addCheck(check: (focus: boolean) => Promise<boolean>): () => void;
-  /** Saves what is still unsaved. */
-  flush(): Promise<void>;
 }
 
 export const WizardFormsContext = createContext<WizardForms | null>(null);
@@ -31,11 +29,6 @@ export function useForms(): WizardForms {
 /** Puts an answer into its form from outside it, as a starter does; it is saved like what was typed. */
 export function useFill(): WizardForms['fill'] {
   return useForms().fill;
-}
-
-/** Saves what is still unsaved, before the server is asked to work with the answers. */
-export function useFlush(): WizardForms['flush'] {
-  return useForms().flush;
 }
 
 function toField(pointer: string): string {

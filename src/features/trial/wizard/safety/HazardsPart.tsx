@@ -63,7 +63,7 @@ export function HazardsPart() {
             onChange={(next) => set({ ticked: ticked.map((each) => (each === hazard ? next : each)) })}
           />
         ))}
-        <div className="grid gap-2" role="status">
+        <div className="grid gap-2 empty:hidden" role="status">
           {ticked.length > 0 && (
             <>
               <Callout tone="caution">

@@ -43,7 +43,9 @@ export function NeverRunPart() {
             onRemove={mayWrite ? () => replace(mix, null) : undefined}
           />
         ))}
-        <div role="status">{allGone && <Callout tone="caution">{t('safety.allGone')}</Callout>}</div>
+        <div role="status" className="empty:hidden">
+          {allGone && <Callout tone="caution">{t('safety.allGone')}</Callout>}
+        </div>
         {mixes.length === 0 && (
           <p className="text-steel">
             {settings.length < 2 ? t('safety.neverRunFirst') : t('safety.neverRunNone')}

@@ -59,7 +59,7 @@ export function OwnStopRule({ own, onChange, errorAt }: Props) {
             error={errorAt(`#/own/${language}`)}
           />
         ))}
-        <div role="status">
+        <div role="status" className="empty:hidden">
           {missing.length > 0 && (
             <Callout
               tone="caution"

@@ -8,7 +8,6 @@ import { decisionOn } from '../../readiness.ts';
 import { QuestionPart } from '../QuestionPart.tsx';
 import { mixParts } from '../setting-words.ts';
 import { useAnswer } from '../use-answer.tsx';
-import { useFlush } from '../use-question-form.tsx';
 import { useWizard } from '../wizard-context.ts';
 import { HardRun } from './HardRun.tsx';
 import { decideMix, type LookedMix, mixKey, ruledOutMixes } from './look-mixes.ts';
@@ -25,7 +24,7 @@ const noHardest: readonly HardMix[] = [];
 function RemakeNews({ remake }: { readonly remake: Remake }) {
   const { t } = useTranslation('wizard-safety');
   return (
-    <div role="status">
+    <div role="status" className="empty:hidden">
       {remake === 'working' && <Callout tone="info">{t('start.remaking')}</Callout>}
       {remake === 'done' && <Callout tone="good">{t('start.remade')}</Callout>}
       {remake === 'failed' && <Callout tone="caution">{t('start.remakeFailed')}</Callout>}
@@ -36,9 +35,8 @@ function RemakeNews({ remake }: { readonly remake: Remake }) {
 /** The hardest runs of the chosen plan, each to be decided on; ruling one out makes the plan again. */
 export function LookPart({ isChecked }: Props) {
   const { t, i18n } = useTranslation('wizard-safety');
-  const { mayWrite, answers, shop } = useWizard();
+  const { mayWrite, answers, shop, flush } = useWizard();
   const { now, refresh } = useStanding();
-  const flush = useFlush();
   const { plan } = now;
   const { content, set } = useAnswer('look');
   const { remake, ask } = useRemake();

@@ -4,7 +4,6 @@ import { Button } from '../../../../components/ui/Button.tsx';
 import { ConfirmDialog } from '../../../../components/ui/ConfirmDialog.tsx';
 import { decideReviewCall, readAnswersCall, trialEventCall } from '../../trial.queries.ts';
 import { takesAnswers } from '../../trial-states.ts';
-import { useFlush } from '../use-question-form.tsx';
 import { useWizard } from '../wizard-context.ts';
 import { goesToEngineer, useStanding } from './standing.tsx';
 import { listGaps } from './start-gaps.ts';
@@ -15,9 +14,8 @@ const firstGap =
 /** What leads on from the last page: to the engineer, to the machine, or back from the engineer. */
 export function StartActions() {
   const { t } = useTranslation('wizard-safety');
-  const { answers, shop, trialId } = useWizard();
+  const { answers, shop, trialId, flush } = useWizard();
   const { now, isPlanner, work, run, setChecked } = useStanding();
-  const flush = useFlush();
   const [asking, setAsking] = useState(false);
   const { state } = now;
   if (!isPlanner) return null;

@@ -12,9 +12,10 @@ import { listGaps } from './start-gaps.ts';
 /** All answers on one page, the hardest runs, and what must be ready. */
 export function StartQuestions() {
   const { t } = useTranslation('wizard-safety');
-  const { answers, shop } = useWizard();
+  const { answers, shop, mayWrite } = useWizard();
   const { now, isChecked } = useStanding();
-  const gaps = listGaps(answers, { plan: now.plan, people: shop.people, isSending: goesToEngineer(now) });
+  const isSending = goesToEngineer(now);
+  const gaps = listGaps(answers, { plan: now.plan, people: shop.people, isSending });
   return (
     <>
       <StepHead title={t('start.title')} help={t('start.help')} />
@@ -22,7 +23,7 @@ export function StartQuestions() {
         <StandingCallout />
         <StartSummary gaps={gaps} />
         <LookPart isChecked={isChecked} />
-        <ReadyPart isChecked={isChecked} />
+        <ReadyPart isChecked={isChecked && mayWrite && !isSending} />
         <StartFault gapCount={gaps.length} />
       </div>
     </>

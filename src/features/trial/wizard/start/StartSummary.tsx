@@ -21,6 +21,7 @@ const summedUp = wizardSteps.filter((step) => step !== 'start');
 export function StartSummary({ gaps }: Props) {
   const { t, i18n } = useTranslation('wizard-safety');
   const { t: tSafety } = useTranslation('safety');
+  const { t: tFrame } = useTranslation('wizard-frame');
   const { answers, shop } = useWizard();
   const { now } = useStanding();
   const language = i18n.language as Language;
@@ -37,7 +38,7 @@ export function StartSummary({ gaps }: Props) {
         <SummaryLine
           key={step}
           step={step}
-          words={summaryOf(step, { answers, plan: now.plan, shop, t, tSafety, list, language })}
+          words={summaryOf(step, { answers, plan: now.plan, shop, t, tSafety, tFrame, list, language })}
           gaps={gapsOfStep(gaps, step)}
           remarks={remarksOf(step)}
         />

@@ -5,6 +5,7 @@ import type { Answers, SettingAnswer } from '../../answers.schema.ts';
 import type { PublicPlan } from '../../plan.schema.ts';
 import type { WizardStep } from '../../questions.ts';
 import { endValueOf, panelNameOf } from '../setting-words.ts';
+import { aboutTime } from '../so-far-words.ts';
 import type { WizardShop } from '../wizard-context.ts';
 
 export interface SummaryInput {
@@ -13,6 +14,7 @@ export interface SummaryInput {
   shop: WizardShop;
   t: TFunction<'wizard-safety'>;
   tSafety: TFunction<'safety'>;
+  tFrame: TFunction<'wizard-frame'>;
   list: (items: string[]) => string;
   language: Language;
 }
@@ -94,12 +96,12 @@ function aroundWords({ answers, t, list }: SummaryInput): string[] {
     });
 }
 
-function planWords({ plan, t, list }: SummaryInput): string[] {
+function planWords({ plan, t, tFrame, list, language }: SummaryInput): string[] {
   if (!plan) return [t('start.planNone')];
   const { runs, minutes } = plan.proposal;
   const facts = [
     t('start.plan', { count: runs }),
-    ...(minutes === undefined ? [] : [t('start.planMinutes', { count: Math.ceil(minutes / 10) * 10 })]),
+    ...(minutes === undefined ? [] : [aboutTime(minutes, tFrame, language)]),
   ];
   return [list(facts), ...(plan.fits ? [] : [t('start.planStale')])];
 }

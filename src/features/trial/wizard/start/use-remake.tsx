@@ -1,6 +1,5 @@
 import { useEffect, useState } from 'react';
 import { choosePlanCall } from '../../trial.queries.ts';
-import { useFlush } from '../use-question-form.tsx';
 import { type SoFar, useWizard } from '../wizard-context.ts';
 import { type LookedMix, mixRule, ruleText } from './look-mixes.ts';
 import { useStanding } from './standing.tsx';
@@ -22,9 +21,8 @@ function knows({ brief }: SoFar, { rule, isRuledOut }: Wanted): boolean {
  * takes the same kind of plan, or the recommended one where that kind is gone.
  */
 export function useRemake(): { remake: Remake; ask: (decided: LookedMix) => void } {
-  const { answers, soFar, trialId } = useWizard();
+  const { answers, soFar, trialId, flush } = useWizard();
   const { now, run } = useStanding();
-  const flush = useFlush();
   const [wanted, setWanted] = useState<Wanted | null>(null);
   const [remake, setRemake] = useState<Remake>('none');
 
