@@ -51,6 +51,10 @@ const visits: Visit[] = [
   { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/problem', as: 'supervisor' },
   { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/today', as: 'supervisor' },
   { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/settings', as: 'supervisor' },
+  { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/safety', as: 'supervisor' },
+  { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/around', as: 'supervisor' },
+  { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/start', as: 'supervisor' },
+  { file: 'trials/[id]/review.astro', path: '/trials/:trialId/review', as: 'supervisor' },
 ];
 
 /** Pages with no look of their own: one only answers a form, one shows when the product itself fails. */
