@@ -1,6 +1,6 @@
 import { insertAnswers } from '../../src/features/trial/answers.repository.ts';
 import type { Answers } from '../../src/features/trial/answers.schema.ts';
-import { insertPlan, insertRuns } from '../../src/features/trial/plan.repository.ts';
+import { insertPlan, insertRuns, insertStart } from '../../src/features/trial/plan.repository.ts';
 import { hashOf } from '../../src/features/trial/reviewed-hash.service.ts';
 import { toBrief } from '../../src/features/trial/to-brief.ts';
 import { insertTrial } from '../../src/features/trial/trial.repository.ts';
@@ -45,17 +45,17 @@ export async function measureRuns(scope: ShopScope, trialId: string, read: ReadR
   }
 }
 
-/** A trial whose readings are in, with the recommended plan of its answers; answers its id. */
-export async function buildMeasuredTrial(
+/** A trial that has just been started, with the recommended plan of its answers; answers its id. */
+export async function buildRunningTrial(
   scope: ShopScope,
-  about: { ownerId: string; read: ReadRun; answers?: Answers; seed?: number },
+  about: { ownerId: string; answers?: Answers; seed?: number; personId?: string },
 ): Promise<string> {
   const shift = { id: 'day', name: 'Day', from: '06:00', to: '14:00', runs: about.ownerId };
   const answers = finishedAnswers({ crew: { shifts: [shift] }, ...about.answers });
   const read = toBrief(answers);
-  if ('problems' in read) throw new RangeError(`buildMeasuredTrial: ${JSON.stringify(read.problems)}`);
+  if ('problems' in read) throw new RangeError(`buildRunningTrial: ${JSON.stringify(read.problems)}`);
   const [proposal] = proposePlans(read.brief);
-  if (!proposal) throw new RangeError('buildMeasuredTrial: no plan fits');
+  if (!proposal) throw new RangeError('buildRunningTrial: no plan fits');
   const id = newId();
   const seed = about.seed ?? 1;
   await insertTrial(scope, { id, ownerId: about.ownerId, title: 'Line 3 seals', machine: 'Line 3' });
@@ -73,7 +73,19 @@ export async function buildMeasuredTrial(
   } as const;
   await insertPlan(scope, { ...plan, trialId: id, chosenBy: about.ownerId });
   const runs = layOutRuns(read.brief, proposal, seed);
-  await insertRuns(scope, { id: plan.id, trialId: id, runs }, { personId: null, measurerId: null });
+  await insertStart(scope, id);
+  const personId = about.personId ?? null;
+  await insertRuns(scope, { id: plan.id, trialId: id, runs }, { personId, measurerId: personId });
+  await scope.db('trials').where({ shop_id: scope.shopId, id }).update({ state: 'running' });
+  return id;
+}
+
+/** A trial whose readings are in; answers its id. */
+export async function buildMeasuredTrial(
+  scope: ShopScope,
+  about: { ownerId: string; read: ReadRun; answers?: Answers; seed?: number },
+): Promise<string> {
+  const id = await buildRunningTrial(scope, about);
   await measureRuns(scope, id, about.read);
   await scope.db('trials').where({ shop_id: scope.shopId, id }).update({ state: 'readings in' });
   return id;

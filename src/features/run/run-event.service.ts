@@ -13,7 +13,7 @@ import { repeatRun } from './repeat-run.service.ts';
 import type { Run } from './run.ts';
 import type { RunAnswer, RunEventBody } from './run-event.schema.ts';
 import { findRunOf } from './run-reader.service.ts';
-import { type RunActor, type RunEvent, runSteps } from './run-states.ts';
+import { type RunActor, type RunEvent, runEventsOpenTo, runSteps } from './run-states.ts';
 import { setActual } from './set-actual.service.ts';
 import { putBackRun, skipRun } from './skip-run.service.ts';
 
@@ -49,6 +49,11 @@ function isActor(reader: TrialReader, run: Run, actor: RunActor): boolean {
   if (actor === 'product' || !rolesMay(reader.roles, actor)) return false;
   const isOwn = run.personId === reader.personId || run.measurerId === reader.personId;
   return actor !== 'run.record.own' || isOwn;
+}
+
+/** What this reader may do with a run now. */
+export function eventsOfReader(run: Run, reader: TrialReader): RunEvent[] {
+  return runEventsOpenTo(run.state, (actor) => isActor(reader, run, actor));
 }
 
 function requireActor(run: Run, event: RunEvent, reader: TrialReader): void {

@@ -38,6 +38,7 @@ export interface Attempt {
   body?: { type: string; text: string } | undefined;
   /** What stands behind the question mark of the address. */
   query?: string | undefined;
+  headers?: Record<string, string>;
 }
 
 /** Calls an endpoint as a visitor, without the network; the session is taken as read. */
@@ -45,11 +46,12 @@ export async function attempt(endpoint: KnownEndpoint, visit: Attempt): Promise<
   const method = endpoint.method === 'ALL' ? 'GET' : endpoint.method;
   const path = endpoint.path.replace(/\[(?:\.\.\.)?(\w+)\]/g, (_, name) => visit.params?.[name] ?? 'nothing');
   const url = new URL(path, 'http://127.0.0.1:4310');
-  const { body, query } = visit;
+  const { body, query, headers = {} } = visit;
   if (query) url.search = query;
   const request = new Request(url, {
     method,
-    ...(body && method !== 'GET' ? { body: body.text, headers: { 'content-type': body.type } } : {}),
+    headers: body && method !== 'GET' ? { ...headers, 'content-type': body.type } : headers,
+    ...(body && method !== 'GET' ? { body: body.text } : {}),
   });
   const context = {
     request,

@@ -7,6 +7,7 @@ import type { ShopScope } from '../../../src/server/db/scope.ts';
 import type { Access } from '../../../src/server/http/define-endpoint.ts';
 import { newId } from '../../../src/server/ids.ts';
 import { buildPerson, buildShop } from '../../builders/shop.ts';
+import { buildRun } from '../../builders/trial.ts';
 import { type Attempt, attempt, endpoints } from './endpoints.ts';
 import { buildReviewedTrial } from './trial-of-shop.ts';
 
@@ -29,6 +30,7 @@ const bodies: Record<string, Attempt['body']> = {
   }),
   'POST /api/trials/[id]/plan': json({ revision: 1, proposalId: 'any' }),
   'POST /api/trials/[id]/events': json({ event: 'start', revision: 1 }),
+  'POST /api/runs/[id]/events': json({ event: 'skip', revision: 1, submission: newId() }),
   'POST /api/reviews/[id]/approve': json({ round: 1 }),
   'POST /api/reviews/[id]/send-back': json({ round: 1 }),
   'POST /api/reviews/[id]/take-back': json({ round: 1 }),
@@ -100,12 +102,13 @@ beforeAll(async () => {
   });
   const supervisor = viewers.get('supervisor')?.personId ?? '';
   const { trialId, reviewId } = await buildReviewedTrial(here, supervisor);
-  params = { handle, id: operator, token: tokenId, trial: trialId, review: reviewId };
+  const run = await buildRun(here, { personId: operator, state: 'waiting' });
+  params = { handle, id: operator, token: tokenId, trial: trialId, review: reviewId, run: run.id };
 });
 
 function paramsFor(path: string): Record<string, string> {
-  const [, kind] = /^\/api\/(me\/tokens|trials|reviews)\b/.exec(path) ?? [];
-  const name = { 'me/tokens': 'token', trials: 'trial', reviews: 'review' }[kind ?? ''] ?? 'id';
+  const [, kind] = /^\/api\/(me\/tokens|trials|reviews|runs)\b/.exec(path) ?? [];
+  const name = { 'me/tokens': 'token', trials: 'trial', reviews: 'review', runs: 'run' }[kind ?? ''] ?? 'id';
   return { id: params[name] ?? '', handle: params['handle'] ?? '' };
 }
 
