@@ -4,6 +4,7 @@ import type front from '../../locales/en/front.json';
 import type mail from '../../locales/en/mail.json';
 import type myPage from '../../locales/en/my-page.json';
 import type people from '../../locales/en/people.json';
+import type phone from '../../locales/en/phone.json';
 import type planFacts from '../../locales/en/plan-facts.json';
 import type planReview from '../../locales/en/plan-review.json';
 import type runTexts from '../../locales/en/run-texts.json';
@@ -34,6 +35,7 @@ declare module 'i18next' {
       'my-page': typeof myPage;
       'sign-in': typeof signIn;
       people: typeof people;
+      phone: typeof phone;
       'plan-facts': typeof planFacts;
       'run-texts': typeof runTexts;
       shop: typeof shop;

@@ -11,6 +11,7 @@ export const namespaces = [
   'run-texts',
   'mail',
   'people',
+  'phone',
   'shop',
   'sign-in',
   'my-page',
