@@ -38,6 +38,7 @@ const visits: Visit[] = [
   { file: 'reset/[token].astro', path: '/reset/a-link-that-never-was', as: 'nobody', status: 410 },
   { file: 'invite/[token].astro', path: '/invite/a-link-that-never-was', as: 'nobody', status: 410 },
   { file: 'setup/[token].astro', path: '/setup/a-link-that-never-was', as: 'nobody', status: 410 },
+  { file: 't/[token].astro', path: '/t/a-link-that-never-was', as: 'nobody', status: 410 },
   { file: 'me.astro', path: '/me', as: 'admin' },
   { file: 'trials/index.astro', path: '/trials', as: 'admin' },
   { file: 'people/index.astro', path: '/people', as: 'admin' },

@@ -1,18 +1,18 @@
-import type { FactorSpec } from '../../lib/doe/index.ts';
 import type { SettingMarkKind } from '../../components/ui/SettingMark.tsx';
+import type { FactorSpec } from '../../lib/doe/index.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
+import { AppError } from '../../server/errors.ts';
 import { findAddressee } from '../message/addressee.repository.ts';
 import { listReadings } from '../run/readings.repository.ts';
 import { listResultItems } from '../run/result-items.ts';
-import type { Run } from '../run/run.ts';
 import { listRuns } from '../run/run.repository.ts';
+import type { Run } from '../run/run.ts';
 import { requirePlan } from '../run/run-reader.service.ts';
 import { findShop } from '../shop/shop.repository.ts';
 import { readFinished } from '../trial/answer-problem.ts';
 import { readStoredAnswers } from '../trial/answers.repository.ts';
 import type { Answers } from '../trial/answers.schema.ts';
 import { findTrialOf } from '../trial/trial-reader.service.ts';
-import { AppError } from '../../server/errors.ts';
 import { openPhone, type PhoneVisit } from './phone-link.service.ts';
 import type { PhoneRun, PhoneView } from './phone-view.ts';
 
@@ -26,9 +26,7 @@ function markOf(factor: FactorSpec, coded: number): SettingMarkKind {
 export function findOwnRun(runs: readonly Run[], personId: string): Run | null {
   const making = runs.find((run) => run.personId === personId && run.state === 'asked');
   const doubted = runs.find((run) => run.personId === personId && run.state === 'doubtful');
-  const measuring = runs.find(
-    (run) => run.state === 'made' && (run.measurerId ?? run.personId) === personId,
-  );
+  const measuring = runs.find((run) => run.state === 'made' && (run.measurerId ?? run.personId) === personId);
   return making ?? doubted ?? measuring ?? null;
 }
 
@@ -75,13 +73,19 @@ function safetyOf(answers: Answers, language: string) {
   };
 }
 
-async function findLast(scope: ShopScope, runs: readonly Run[], personId: string): Promise<PhoneView['last']> {
+async function findLast(
+  scope: ShopScope,
+  runs: readonly Run[],
+  personId: string,
+): Promise<PhoneView['last']> {
   const [done] = runs
     .filter((run) => run.state === 'done' && (run.measurerId ?? run.personId) === personId)
     .sort((a, b) => (b.closedAt ?? 0) - (a.closedAt ?? 0));
   if (!done) return null;
   const readings = await listReadings(scope, [done.id]);
-  const figures = readings.filter(({ state }) => state === 'counts').map(({ value, rejects }) => value ?? rejects);
+  const figures = readings
+    .filter(({ state }) => state === 'counts')
+    .map(({ value, rejects }) => value ?? rejects);
   return { number: done.number, figures: figures.join('  ') };
 }
 
