@@ -12,6 +12,7 @@ const names = Object.keys(runTemplates) as RunTemplateName[];
 /** Texts whose words list usual settings or all answers: two segments; the others are one. */
 const longer: readonly RunTemplateName[] = [
   'runPrompt',
+  'practiceRun',
   'helpRun',
   'helpIdle',
   'stopped',

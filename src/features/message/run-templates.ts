@@ -109,6 +109,10 @@ const toCrew = {
 
 /** The texts of a running trial to whoever is called. */
 const toCaller = {
+  /** A run as it will look, to the phone of whoever plans the trial. */
+  practiceRun: text({ ...told, params: z.strictObject({ prompt: runPromptSchema }) }, (t, { prompt }) =>
+    [t('run-texts:practiceRun'), writeRunPrompt(t, prompt)].join('\n'),
+  ),
   allIn: text({ ...told, params: z.strictObject({ title: words, runs: run }) }, (t, params) =>
     t('run-texts:allIn', params),
   ),

@@ -36,7 +36,7 @@ export function TrialRows({ trials, list, formats, moves }: Props) {
         {trials.map((trial) => (
           <li key={trial.id} className="sheet grid gap-1">
             <p className="text-section font-semibold">
-              <a className="inline-flex min-h-12 items-center" href={trialAddress(trial)}>
+              <a className="inline-flex min-h-12 items-center wrap-anywhere" href={trialAddress(trial)}>
                 {trial.title || t('untitled')}
               </a>
             </p>

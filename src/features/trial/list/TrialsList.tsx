@@ -57,10 +57,10 @@ function List({ language, timeZone, trials: first, list, mayWrite }: Omit<Props,
     <div className="grid grid-cols-[minmax(0,1fr)] gap-4">
       <TrialFault fault={fault} />
       {done && <Done key={`${done.kind} ${done.trial.id}`} done={done} busy={busy} onUndo={undo} />}
-      <div className="hidden md:block">
+      <div className="trials-table hidden lg:block">
         <TrialsTable {...shown} />
       </div>
-      <div className="md:hidden">
+      <div className="lg:hidden">
         <TrialRows {...shown} />
       </div>
       <ConfirmDialog

@@ -31,13 +31,17 @@ export function TrialsTable({ trials, list, formats, moves }: Props) {
       header: t('column.title'),
       rowHeader: true,
       sortHref: sortedTrialsAddress(list, 'title'),
-      cell: (trial) => <a href={trialAddress(trial)}>{trial.title || t('untitled')}</a>,
+      cell: (trial) => (
+        <a className="wrap-anywhere" href={trialAddress(trial)}>
+          {trial.title || t('untitled')}
+        </a>
+      ),
     },
     {
       key: 'machine',
       header: t('column.machine'),
       sortHref: sortedTrialsAddress(list, 'machine'),
-      cell: ({ machine }) => machine,
+      cell: ({ machine }) => <span className="wrap-anywhere">{machine}</span>,
     },
     { key: 'state', header: t('column.state'), cell: ({ state }) => <TrialStateMark state={state} /> },
     { key: 'who', header: t('column.who'), cell: ({ ownerName }) => ownerName },

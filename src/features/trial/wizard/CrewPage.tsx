@@ -1,6 +1,7 @@
 import { useTranslation } from 'react-i18next';
 import { CrewPart } from './crew/CrewPart.tsx';
 import { PacePart } from './crew/PacePart.tsx';
+import { TextsPart } from './crew/TextsPart.tsx';
 import { StepHead } from './StepHead.tsx';
 import { WizardFrame } from './WizardFrame.tsx';
 import type { WizardPageProps } from './wizard-page.ts';
@@ -13,6 +14,7 @@ function CrewQuestions() {
       <div className="grid grid-cols-[minmax(0,1fr)] gap-4">
         <CrewPart />
         <PacePart />
+        <TextsPart />
       </div>
     </>
   );
