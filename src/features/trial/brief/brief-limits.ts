@@ -4,11 +4,7 @@ import { splitThings } from '../finished/around.schema.ts';
 import { planDefaults } from '../finished/start.schema.ts';
 import type { FinishedOf } from '../finished.schema.ts';
 import { present, toCoreFigure } from './brief-result.ts';
-
-/** How long one run takes where nobody said so: to set and make it, and to wait for its number. */
-export function usualMinutesPerRun(measuring: Pick<FinishedOf<'measuring'>, 'when' | 'minutes'>): number {
-  return planDefaults.minutesPerRun + (measuring.when === 'minutes' ? (measuring.minutes ?? 0) : 0);
-}
+import { usualMinutesPerRun } from './minutes-per-run.ts';
 
 export function toBudget(spare: FinishedOf<'spare'>, measuring: FinishedOf<'measuring'>): Brief['budget'] {
   const { runs, hours, hoursOpen, money, moneyOpen, minutesPerRun, costPerRun } = spare;

@@ -1,4 +1,5 @@
 import { useTranslation } from 'react-i18next';
+import { ExampleNote } from './ExampleNote.tsx';
 import { SettingsPart } from './SettingsPart.tsx';
 import { StepHead } from './StepHead.tsx';
 import { WizardFrame } from './WizardFrame.tsx';
@@ -9,6 +10,7 @@ function SettingsQuestions() {
   return (
     <>
       <StepHead title={t('settings.title')} help={t('settings.help')} />
+      <ExampleNote step="settings" />
       <SettingsPart />
     </>
   );

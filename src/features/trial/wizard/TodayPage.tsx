@@ -1,4 +1,5 @@
 import { useTranslation } from 'react-i18next';
+import { ExampleNote } from './ExampleNote.tsx';
 import { GaugePart } from './GaugePart.tsx';
 import { LimitPart } from './LimitPart.tsx';
 import { StepHead } from './StepHead.tsx';
@@ -14,6 +15,7 @@ function TodayQuestions() {
   return (
     <>
       <StepHead title={t('today.title')} help={t('today.help')} />
+      <ExampleNote step="today" />
       <div className="grid grid-cols-[minmax(0,1fr)] gap-4">
         <UsualPart />
         <WorthPart />

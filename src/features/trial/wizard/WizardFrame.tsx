@@ -28,6 +28,7 @@ const nothingYet: SoFar = {
   brief: null,
   proposals: [],
   runs: [],
+  racks: [],
   missing: 0,
   misfit: null,
   coaching: [],

@@ -42,6 +42,8 @@ export interface SoFar {
   proposals: readonly Proposal[];
   /** Runs of the best proposal in an order as it might be; the real one is drawn at the start. */
   runs: readonly PlannedRun[];
+  /** The runs of each proposal in the same way. */
+  racks: readonly (readonly PlannedRun[])[];
   /** How many answers a plan still needs. */
   missing: number;
   /** Why nothing fits, and what to relax by how much. */

@@ -34,15 +34,14 @@ function fillIn(answers: Answers): Answers {
 }
 
 function propose(filled: Answers): Omit<SoFar, 'coaching' | 'today'> {
-  const nothing = { brief: null, proposals: [], runs: [], misfit: null, missing: 0 };
+  const nothing = { brief: null, proposals: [], runs: [], racks: [], misfit: null, missing: 0 };
   const read = toBrief(filled);
   if ('problems' in read) return { ...nothing, missing: read.problems.length };
   const { brief } = read;
   try {
     const proposals = proposePlans(brief);
-    const [recommended] = proposals;
-    const runs = recommended ? layOutRuns(brief, recommended, sketchSeed) : [];
-    return { brief, proposals: proposals satisfies Proposal[], runs, misfit: null, missing: 0 };
+    const racks = proposals.map((proposal: Proposal) => layOutRuns(brief, proposal, sketchSeed));
+    return { brief, proposals, runs: racks[0] ?? [], racks, misfit: null, missing: 0 };
   } catch (thrown) {
     if (!(thrown instanceof PlanError)) throw thrown;
     const { code, field, need } = thrown;

@@ -5,7 +5,7 @@ import { Disclosure } from '../../../../components/ui/Disclosure.tsx';
 import { Icon, type IconName } from '../../../../components/ui/Icon.tsx';
 import { formatsFor } from '../../../../i18n/format.ts';
 import type { Language } from '../../../../i18n/languages.ts';
-import type { Brief, Proposal } from '../../../../lib/doe/index.ts';
+import type { Brief, PlannedRun, Proposal } from '../../../../lib/doe/index.ts';
 import { type FactLine, planFactLines } from '../../../plan/fact-words.ts';
 import { aboutMoney, aboutTime, sizeOfResult, spotsWords } from '../so-far-words.ts';
 import { useWizard } from '../wizard-context.ts';
@@ -15,6 +15,8 @@ import { isRecommending, splitFacts, tiedSettings, timesInTen, titleOf } from '.
 interface Props {
   readonly brief: Brief;
   readonly proposal: Proposal;
+  /** In an order as it might be; the real one is drawn when the plan is taken. */
+  readonly runs: readonly PlannedRun[];
   readonly isTaken: boolean;
   readonly busy: boolean;
   /** Null for a reader who may only look. */
@@ -44,7 +46,7 @@ function Lines({ lines }: { lines: readonly FactLine[] }) {
 }
 
 /** One plan: its runs, what it takes, what it would most likely spot, and what it cannot tell apart. */
-export function PlanCard({ brief, proposal, isTaken, busy, onTake }: Props) {
+export function PlanCard({ brief, proposal, runs, isTaken, busy, onTake }: Props) {
   const { t, i18n } = useTranslation('wizard-plan');
   const { t: tFacts } = useTranslation('plan-facts');
   const { t: tFrame } = useTranslation('wizard-frame');
@@ -78,7 +80,7 @@ export function PlanCard({ brief, proposal, isTaken, busy, onTake }: Props) {
         <h2 id={id}>{title}</h2>
         <p className="font-semibold">{takes}</p>
       </div>
-      <PlanRack brief={brief} proposal={proposal} />
+      <PlanRack factors={factors} runs={runs} />
       <div>
         <p className="font-semibold">{spotsWords(proposal, response, tFrame, language)}</p>
         {hard && easy && hard.unit === 'response' && hard.size > easy.size * 1.05 && (

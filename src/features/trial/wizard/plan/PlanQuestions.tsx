@@ -2,9 +2,9 @@ import { useState } from 'react';
 import { useTranslation } from 'react-i18next';
 import { Callout } from '../../../../components/ui/Callout.tsx';
 import { Loading } from '../../../../components/ui/Loading.tsx';
+import { readBriefAnswers } from '../../brief/brief-answers.ts';
 import { stepOf, type WizardStep } from '../../questions.ts';
 import { TrialFault } from '../../TrialFault.tsx';
-import { toBrief } from '../../to-brief.ts';
 import { QuestionPart } from '../QuestionPart.tsx';
 import { useWizard } from '../wizard-context.ts';
 import { addressOf, toDoHash } from '../wizard-page.ts';
@@ -18,7 +18,7 @@ import { useSpare } from './use-spare.tsx';
 /** The pages with answers that a plan still needs, in their order. */
 function useOpenSteps(): WizardStep[] {
   const { answers } = useWizard();
-  const read = toBrief(answers);
+  const read = readBriefAnswers(answers);
   return 'problems' in read ? [...new Set(read.problems.map(({ question }) => stepOf(question)))] : [];
 }
 
@@ -46,7 +46,7 @@ function OpenSteps({ steps }: { readonly steps: readonly WizardStep[] }) {
 export function PlanQuestions() {
   const { t } = useTranslation('wizard-plan');
   const { soFar, mayWrite } = useWizard();
-  const { brief, proposals, misfit, missing } = soFar;
+  const { brief, proposals, racks, misfit, missing } = soFar;
   const form = useSpare();
   const openSteps = useOpenSteps();
   const { plan, busy, fault, take } = useChosenPlan();
@@ -76,11 +76,12 @@ export function PlanQuestions() {
         {proposals.length > 0 && t('plan.dealt', { count: proposals.length })}
       </p>
       {brief &&
-        proposals.map((proposal) => (
+        proposals.map((proposal, place) => (
           <PlanCard
             key={proposal.id}
             brief={brief}
             proposal={proposal}
+            runs={racks[place] ?? []}
             isTaken={plan?.fits === true && plan.proposalId === proposal.id}
             busy={busy && taking === proposal.id}
             onTake={mayWrite && openSteps.length === 0 ? () => takeIt(proposal.id) : null}

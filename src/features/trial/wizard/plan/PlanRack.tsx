@@ -1,27 +1,18 @@
-import { useMemo } from 'react';
 import { useTranslation } from 'react-i18next';
 import { Disclosure } from '../../../../components/ui/Disclosure.tsx';
 import type { SettingMarkKind } from '../../../../components/ui/SettingMark.tsx';
 import { SmallTag } from '../../../../components/ui/SmallTag.tsx';
 import { formatsFor } from '../../../../i18n/format.ts';
 import type { Language } from '../../../../i18n/languages.ts';
-import {
-  type Brief,
-  type FactorSpec,
-  layOutRuns,
-  type PlannedRun,
-  type Proposal,
-} from '../../../../lib/doe/index.ts';
+import type { FactorSpec, PlannedRun } from '../../../../lib/doe/index.ts';
 
 interface Props {
-  readonly brief: Brief;
-  readonly proposal: Proposal;
+  readonly factors: readonly FactorSpec[];
+  readonly runs: readonly PlannedRun[];
 }
 
 const mostTags = 4;
 const mostSettings = 5;
-/** The real order is drawn when the plan is taken; a fixed one keeps the rack still until then. */
-const sketchSeed = 1;
 
 function markOf(factor: FactorSpec, coded: number): SettingMarkKind {
   if (factor.kind === 'choice') return coded > 0 ? 'second' : 'first';
@@ -30,11 +21,9 @@ function markOf(factor: FactorSpec, coded: number): SettingMarkKind {
 }
 
 /** The runs of a plan as small tags with the shop's own names: a few in view, all when opened. */
-export function PlanRack({ brief, proposal }: Props) {
+export function PlanRack({ factors, runs }: Props) {
   const { t, i18n } = useTranslation('wizard-plan');
   const { number, list } = formatsFor(i18n.language as Language, 'UTC');
-  const runs = useMemo(() => layOutRuns(brief, proposal, sketchSeed), [brief, proposal]);
-  const { factors } = brief;
 
   const tag = (run: PlannedRun) => {
     const settings = factors.slice(0, mostSettings).map((factor, place) => ({

@@ -4,7 +4,7 @@ import { Disclosure } from '../../../../components/ui/Disclosure.tsx';
 import { NumberInput } from '../../../../components/ui/NumberInput.tsx';
 import { formatsFor } from '../../../../i18n/format.ts';
 import type { Language } from '../../../../i18n/languages.ts';
-import { usualMinutesPerRun } from '../../brief/brief-limits.ts';
+import { usualMinutesPerRun } from '../../brief/minutes-per-run.ts';
 import { parseFigure } from '../../finished/typed-figure.ts';
 import { contentOf, finishedSchemas } from '../../finished.schema.ts';
 import { useWizard } from '../wizard-context.ts';
