@@ -56,6 +56,8 @@ const visits: Visit[] = [
   { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/around', as: 'supervisor' },
   { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/start', as: 'supervisor' },
   { file: 'trials/[id]/review.astro', path: '/trials/:trialId/review', as: 'supervisor' },
+  { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/plan', as: 'supervisor' },
+  { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/crew', as: 'supervisor' },
 ];
 
 /** Pages with no look of their own: one only answers a form, one shows when the product itself fails. */
