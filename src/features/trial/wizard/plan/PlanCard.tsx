@@ -35,7 +35,7 @@ function Lines({ lines }: { lines: readonly FactLine[] }) {
     <ul className="grid gap-1.5">
       {lines.map(({ tone, words }) => (
         <li key={words} className="grid grid-cols-[auto_minmax(0,1fr)] gap-2">
-          <span className={`${colors[tone]} pt-1`}>
+          <span className={`${colors[tone]} flex h-7 items-center`}>
             <Icon name={icons[tone]} size={20} />
           </span>
           <span>{words}</span>
@@ -50,7 +50,7 @@ export function PlanCard({ brief, proposal, runs, isTaken, busy, onTake }: Props
   const { t, i18n } = useTranslation('wizard-plan');
   const { t: tFacts } = useTranslation('plan-facts');
   const { t: tFrame } = useTranslation('wizard-frame');
-  const { shop } = useWizard();
+  const { shop, soFar } = useWizard();
   const id = useId();
   const language = i18n.language as Language;
   const { number, list } = formatsFor(language, 'UTC');
@@ -71,7 +71,7 @@ export function PlanCard({ brief, proposal, runs, isTaken, busy, onTake }: Props
   const { shown, folded } = splitFacts(proposal);
   const write = (facts: typeof shown) => planFactLines(facts, brief, tFacts, language);
   const ties = tiedSettings(proposal);
-  const title = t(`plan.card.${titleOf(proposal)}`);
+  const title = t(`plan.card.${titleOf(proposal, soFar.proposals[0])}`);
   const [why] = write(proposal.reasons.filter(isRecommending));
 
   return (

@@ -1,13 +1,16 @@
-import type { Brief, Fact, Proposal } from '../../../../lib/doe/index.ts';
+import type { Fact, Proposal } from '../../../../lib/doe/index.ts';
 
 /** What a card is headed by. */
-export type CardTitle = 'recommended' | 'quicker' | 'surer' | 'other';
+export type CardTitle = 'recommended' | 'quicker' | 'surer' | 'middle' | 'other';
 
-export function titleOf({ recommended, reasons }: Proposal): CardTitle {
-  if (recommended) return 'recommended';
-  const kinds = reasons.map(({ kind }) => kind);
-  // What is quicker and surer too would beat the others and be recommended: the first reason tells them apart.
-  return kinds.includes('surer') ? 'surer' : kinds.includes('quicker') ? 'quicker' : 'other';
+/** @param recommended the plan that the others are compared with */
+export function titleOf(proposal: Proposal, recommended: Proposal | undefined): CardTitle {
+  if (proposal.recommended) return 'recommended';
+  const kinds = proposal.reasons.map(({ kind }) => kind);
+  if (kinds.includes('surer')) return 'surer';
+  if (kinds.includes('quicker')) return 'quicker';
+  const isAlone = proposal.centerPoints > 0 && recommended?.centerPoints === 0;
+  return isAlone ? 'middle' : 'other';
 }
 
 /** Reasons that say why it is recommended, rather than what the plan can do. */
@@ -30,7 +33,6 @@ const inView = new Set<Fact['kind']>([
   'shows-a-bend',
   'judges-hard-settings',
   'judges-spread',
-  'main-effects-tied-to-pairs',
   'block-too-small',
   'hard-setting-not-judged',
   'hard-settings-shuffled',
@@ -43,10 +45,13 @@ const inView = new Set<Fact['kind']>([
 ]);
 const mostTies = 2;
 
+/** The title says the first two; the ties of single settings have lines of their own. */
+const saidElsewhere = new Set<Fact['kind']>(['quicker', 'surer', 'main-effects-tied-to-pairs']);
+
 /** The facts of a card, split into those in view and those that open. */
 export function splitFacts({ reasons, warnings }: Proposal): { shown: Fact[]; folded: Fact[] } {
   const told = [...reasons, ...warnings].filter(
-    (fact) => !isRecommending(fact) && fact.kind !== 'quicker' && fact.kind !== 'surer',
+    (fact) => !isRecommending(fact) && !saidElsewhere.has(fact.kind),
   );
   const ties = told.filter(({ kind }) => kind === 'pairs-tied');
   const isShown = (fact: Fact) =>
@@ -65,8 +70,4 @@ export function tiedSettings({ aliases }: Proposal): { letter: string; others: s
 /** How often in ten a gain of the size one cares about would be found; null where nobody can say. */
 export function timesInTen({ powerAtWorthHaving: power }: Proposal): number | null {
   return power === null ? null : Math.min(9, Math.max(0, Math.round(power * 10)));
-}
-
-export function hasHardSettings({ factors }: Brief): boolean {
-  return factors.some(({ hardToChange }) => hardToChange === true);
 }
