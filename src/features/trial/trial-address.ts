@@ -3,7 +3,7 @@ import type { TrialState } from './trial-states.ts';
 /** The page on which a trial in this state goes on. */
 const pageOf = {
   draft: 'problem',
-  'plan review': 'start',
+  'plan review': 'review',
   ready: 'start',
   running: 'start',
   paused: 'start',

@@ -36,6 +36,15 @@ function toField(pointer: string): string {
 }
 
 /**
+ * A list that has just got or lost an item is checked as a whole: an item nobody has reached yet would be red at once. Its
+ * fields speak up when they are left, and when the page is checked.
+ */
+function asksForList(names: readonly string[] | undefined, values: FieldValues): boolean {
+  const [name, ...others] = names ?? [];
+  return name !== undefined && others.length === 0 && Array.isArray(values[name]);
+}
+
+/**
  * The form of one question: begins with what was typed before, hands on every change, and says what is missing once a
  * field was left or the page was checked. Fields that come from elsewhere meanwhile (another tab, the other text of two)
  * are put in.
@@ -49,15 +58,17 @@ export function useQuestionForm<Name extends QuestionName>(
   const forms = useForms();
   const { change } = forms;
   const [first] = useState(() => (forms.contentOf(question) ?? untouched[question]) as DefaultValues<Values>);
+  const resolver = schemaResolver<Values>({
+    schema: finishedSchemas[question],
+    toInput: tidy,
+    fieldOf: toField,
+    t: (key, values) => t(key.replace('errors:', '') as 'field.missing', values),
+  });
   const form = useForm<Values>({
     defaultValues: first,
     mode: 'onTouched',
-    resolver: schemaResolver<Values>({
-      schema: finishedSchemas[question],
-      toInput: tidy,
-      fieldOf: toField,
-      t: (key, values) => t(key.replace('errors:', '') as 'field.missing', values),
-    }),
+    resolver: (values, context, options) =>
+      asksForList(options.names, values) ? { values, errors: {} } : resolver(values, context, options),
   });
 
   useEffect(

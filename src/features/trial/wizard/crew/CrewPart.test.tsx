@@ -1,4 +1,4 @@
-import { screen, within } from '@testing-library/react';
+import { fireEvent, screen, within } from '@testing-library/react';
 import { userEvent } from '@testing-library/user-event';
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import { renderInWizard } from '../../../../../tests/setup/wizard-stand.tsx';
@@ -39,7 +39,11 @@ describe('the crew', () => {
     const told = renderCrew();
     await userEvent.click(screen.getByRole('button', { name: 'Add a shift' }));
     await userEvent.type(screen.getByRole('textbox', { name: 'Shift' }), 'Day');
-    await userEvent.selectOptions(screen.getByRole('combobox', { name: 'Who runs?' }), 'Ana Ruiz');
+    await userEvent.tab();
+    expect(screen.queryByText('Please fill this in.')).toBeNull();
+    const runs = screen.getByRole('combobox', { name: 'Who runs?' });
+    fireEvent.change(runs, { target: { value: 'ana' } });
+    expect(screen.queryByText('Please fill this in.')).toBeNull();
     const way = screen.getByRole('group', { name: /Ana Ruiz/ });
     await userEvent.click(within(way).getByRole('radio', { name: 'Text' }));
     expect(screen.getByText('Ana Ruiz said yes to texts on Mar 3, 2026.')).toBeInTheDocument();

@@ -52,7 +52,7 @@ export function ShiftFields({ form, place, onRemove }: Props) {
           {...register(`shifts.${place}.to`)}
         />
       </div>
-      <div className="grid gap-4 sm:grid-cols-3">
+      <div className="grid gap-4 sm:grid-cols-2">
         <Select
           id={`${id}-runs`}
           label={t('crew.runs')}
