@@ -3,6 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { withAppInBrowser } from '../setup/app-in-browser.ts';
 import { findAccessFaults, openPage, takeShot, type WatchedPage } from '../setup/browser.ts';
 import { addDraft } from '../setup/draft-trial.ts';
+import { nextByKey, pick, settle, tabTo, typeInto } from '../setup/keys.ts';
 import { signIn } from '../setup/sign-in.ts';
 import { traceWork } from '../setup/trace-work.ts';
 
@@ -11,12 +12,6 @@ const at = withAppInBrowser();
 interface Draft extends WatchedPage {
   trialId: string;
   open(step: string): Promise<void>;
-}
-
-/** Waits until the page answers to hands: its islands have woken and nothing is on its way. */
-async function settle(page: Page): Promise<void> {
-  await page.waitForLoadState('networkidle');
-  await page.waitForFunction(() => !document.querySelector('astro-island[ssr]'));
 }
 
 /** A supervisor with a blank trial, in a browser of their own. */
@@ -30,50 +25,6 @@ async function startDraft(options: Parameters<typeof openPage>[1] = {}): Promise
   };
   await open('problem');
   return { ...watched, trialId, open };
-}
-
-/** Tabs until the field with this id has the focus, as somebody without a mouse does. */
-async function tabTo(page: Page, id: string): Promise<void> {
-  for (let presses = 0; presses < 60; presses += 1) {
-    if (await page.evaluate((wanted) => document.activeElement?.id === wanted, id)) return;
-    await page.keyboard.press('Tab');
-  }
-  throw new RangeError(`tabTo: ${id} was not reached`);
-}
-
-async function typeInto(page: Page, id: string, text: string): Promise<void> {
-  await tabTo(page, id);
-  await page.keyboard.type(text);
-}
-
-/** Tabs into a group of radio buttons and picks one of them with the keys. */
-async function pick(page: Page, group: string, value: string): Promise<void> {
-  for (let presses = 0; presses < 60; presses += 1) {
-    const name = await page.evaluate((id) => {
-      const active = document.activeElement;
-      return active?.closest('fieldset')?.id === id;
-    }, group);
-    if (name) break;
-    await page.keyboard.press('Tab');
-  }
-  await page.keyboard.press('Space');
-  for (let presses = 0; presses < 15; presses += 1) {
-    if (await page.evaluate((wanted) => (document.activeElement as HTMLInputElement).value === wanted, value))
-      return;
-    await page.keyboard.press('ArrowDown');
-  }
-  throw new RangeError(`pick: ${value} is not in ${group}`);
-}
-
-async function nextByKey(page: Page, step: string): Promise<void> {
-  for (let presses = 0; presses < 60; presses += 1) {
-    const isNext = await page.evaluate(() => document.activeElement?.textContent === 'Next');
-    if (isNext) break;
-    await page.keyboard.press('Tab');
-  }
-  await page.keyboard.press('Enter');
-  await page.waitForURL(`**/${step}`);
-  await settle(page);
 }
 
 function saved(page: Page): Promise<unknown> {

@@ -46,7 +46,6 @@ export function GaugePart() {
                   key={side}
                   id={`gauge-${row}-${side}`}
                   label={t(`today.gaugeReading.${side}`, { part: row + 1 })}
-                  unit={unit}
                   error={formState.errors.pairs?.[row]?.[side]?.message}
                   {...register(`pairs.${row}.${side}`)}
                 />

@@ -3,7 +3,7 @@ import { ButtonLink } from '../../../components/ui/ButtonLink.tsx';
 import { Choice } from '../../../components/ui/Choice.tsx';
 import { type StarterName, starterNames } from '../answer-choices.ts';
 import { QuestionPart } from './QuestionPart.tsx';
-import { useStarter } from './use-starter.ts';
+import { useStarter } from './use-starter.tsx';
 import { useWizard } from './wizard-context.ts';
 
 /** The nearest job, whose usual answers are a beginning; or none, or an earlier trial. */

@@ -39,6 +39,7 @@ export function PastNumbers({ form, unit }: Props) {
     }
   }
 
+  const faults = { 'no numbers': t('today.pastNoNumbers'), unreadable: t('today.pastUnreadable') };
   return (
     <Disclosure summary={t('today.pastSummary')} startsOpen={Boolean(form.getValues('past'))}>
       <div className="grid gap-4">
@@ -63,10 +64,7 @@ export function PastNumbers({ form, unit }: Props) {
             aria-describedby={fault === 'none' ? undefined : 'past-file-error'}
             onChange={load}
           />
-          <FieldError id="past-file">
-            {fault === 'no numbers' && t('today.pastNoNumbers')}
-            {fault === 'unreadable' && t('today.pastUnreadable')}
-          </FieldError>
+          <FieldError id="past-file">{fault === 'none' ? null : faults[fault]}</FieldError>
         </div>
       </div>
     </Disclosure>

@@ -75,7 +75,6 @@ export const SettingCard = memo(function SettingCard({ form, place, last, onRemo
         <TextInput
           id={`${id}-panel`}
           label={t('settings.panel')}
-          mark={t('settings.optional')}
           autoComplete="off"
           placeholder={setting.name?.toUpperCase()}
           error={wrong?.panelName?.message}

@@ -33,15 +33,13 @@ export function UsualPart() {
 
   return (
     <QuestionPart>
-      <div className="max-w-56">
-        <NumberInput
-          id="usual"
-          label={t('today.usual')}
-          unit={unit}
-          error={errors.usual?.message}
-          {...register('usual')}
-        />
-      </div>
+      <NumberInput
+        id="usual"
+        label={t('today.usual')}
+        unit={unit}
+        error={errors.usual?.message}
+        {...register('usual')}
+      />
       <div className="grid gap-4 sm:grid-cols-2">
         <NumberInput
           id="lowest"

@@ -67,8 +67,8 @@ function Frame({ step, children, lastAction, ...page }: FrameProps) {
   const { store, snapshot } = useAnswers(page);
   const { answers, save, conflicts } = snapshot;
   const soFar = useSoFar(answers);
-  const shown = useShownSteps(trialId, step);
-  const seen = useMemo(() => seenSteps(answers, step, shown), [answers, step, shown]);
+  const shown = useShownSteps(trialId, step, answers);
+  const seen = useMemo(() => seenSteps(shown), [shown]);
   const { forms, check } = useChecks(store, mayWrite);
   const top = useRef<HTMLDivElement>(null);
 

@@ -21,15 +21,13 @@ export function WorthPart() {
   return (
     <QuestionPart>
       <div className="grid gap-3">
-        <div className="max-w-56">
-          <NumberInput
-            id="worth"
-            label={t('today.worth')}
-            unit={unitOfResult(answers.result ?? {}, t)}
-            error={formState.errors.change?.message}
-            {...register('change')}
-          />
-        </div>
+        <NumberInput
+          id="worth"
+          label={t('today.worth')}
+          unit={unitOfResult(answers.result ?? {}, t)}
+          error={formState.errors.change?.message}
+          {...register('change')}
+        />
         {suggestions.length > 0 && mayWrite && (
           <fieldset className="button-row items-center">
             <legend className="sr-only">{t('today.worthSuggested')}</legend>

@@ -70,6 +70,8 @@ export function coachWords(
     case 'worth-having-below-sight':
       return caution(t('coach.worthBelowSight', { spots: size(fact.values.spots), runs: fact.values.runs }));
     case 'parts-meet-setup':
+      // Fewer parts may well be added to: nothing to remark.
+      if (fact.values.parts < fact.values.enoughParts) return null;
       return info(t('coach.partsEnough', { count: fact.values.enoughParts }));
     default:
       return null;

@@ -23,14 +23,15 @@ export function countStepGaps(answers: Answers, step: WizardStep): number {
   return questionsOf[step].reduce((sum, question) => sum + countGaps(answers, question), 0);
 }
 
-/** The steps that were looked at: those with an answer, all before them, the present one, and those this browser showed. */
-export function seenSteps(answers: Answers, current: WizardStep, shown: readonly string[]): WizardStep[] {
-  const isSeen = (step: WizardStep) =>
-    step === current ||
-    shown.includes(step) ||
-    questionsOf[step].some((question) => answers[question] !== undefined);
-  const last = wizardSteps.findLastIndex(isSeen);
+/** The steps up to the last of these. */
+export function seenSteps(shown: readonly string[]): WizardStep[] {
+  const last = wizardSteps.findLastIndex((step) => shown.includes(step));
   return wizardSteps.slice(0, last + 1);
+}
+
+/** The steps with an answer: what was looked at, as far as one can tell on a device that has not shown the trial before. */
+export function answeredSteps(answers: Answers): WizardStep[] {
+  return wizardSteps.filter((step) => questionsOf[step].some((question) => answers[question] !== undefined));
 }
 
 export function stepStatesOf(answers: Answers, seen: readonly WizardStep[]): StepStates {
