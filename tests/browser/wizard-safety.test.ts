@@ -86,7 +86,7 @@ async function pick(page: Page, group: string, value: string): Promise<void> {
 async function look(page: Page, name: string): Promise<void> {
   for (const { width, colorScheme } of views) {
     await page.setViewportSize({ width, height: 800 });
-    await page.emulateMedia({ colorScheme });
+    await page.emulateMedia({ colorScheme, reducedMotion: 'reduce' });
     expect(await findAccessFaults(page), `${name}, ${width} px, ${colorScheme}`).toEqual([]);
     const sticksOut = await page.evaluate(
       () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
