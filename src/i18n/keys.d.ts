@@ -15,6 +15,7 @@ import type starters from '../../locales/en/starters.json';
 import type texts from '../../locales/en/texts.json';
 import type trials from '../../locales/en/trials.json';
 import type verdict from '../../locales/en/verdict.json';
+import type verdictPage from '../../locales/en/verdict-page.json';
 import type wizard from '../../locales/en/wizard.json';
 import type wizardFrame from '../../locales/en/wizard-frame.json';
 import type wizardPlan from '../../locales/en/wizard-plan.json';
@@ -46,6 +47,7 @@ declare module 'i18next' {
       'wizard-frame': typeof wizardFrame;
       verdict: typeof verdict;
       'wizard-plan': typeof wizardPlan;
+      'verdict-page': typeof verdictPage;
     };
   }
 }

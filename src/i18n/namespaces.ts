@@ -21,6 +21,7 @@ export const namespaces = [
   'plan-review',
   'safety',
   'wizard-safety',
+  'verdict-page',
 ] as const;
 
 export type Namespace = (typeof namespaces)[number];

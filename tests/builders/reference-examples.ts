@@ -1,9 +1,10 @@
 import { readdirSync, readFileSync } from 'node:fs';
+import { join } from 'node:path';
 import { z } from 'zod';
 import type { AnalysisInput } from '../../src/lib/doe/analysis/analysis.ts';
 
 // Published examples, each file names its source; every number was computed with R 4.2.2 and again with numpy, which agree to 2e-11.
-const folder = new URL('../fixtures/reference/open/', import.meta.url);
+const folder = join(import.meta.dirname, '../fixtures/reference/open');
 
 const numberOrNull = z.number().nullable();
 const rowSchema = z.object({
@@ -103,7 +104,7 @@ export type Example = z.infer<typeof exampleSchema>;
 
 export const referenceExamples = readdirSync(folder)
   .filter((name) => name.endsWith('.json'))
-  .map((name) => exampleSchema.parse(JSON.parse(readFileSync(new URL(name, folder), 'utf8'))));
+  .map((name) => exampleSchema.parse(JSON.parse(readFileSync(join(folder, name), 'utf8'))));
 /** Those that are factorial experiments with measured results. */
 export const factorialExamples = referenceExamples.filter((example) => example.kind === undefined);
 

@@ -3,6 +3,8 @@ import type { Brief, FactorSpec } from '../../src/lib/doe/index.ts';
 import { referenceExamples } from './reference-examples.ts';
 import { luck, type MadeTrial, makeView, planFor, type Reading } from './verdict-view.ts';
 
+export { resultsOf } from './verdict-view.ts';
+
 const jaw: FactorSpec = {
   kind: 'number',
   name: 'Jaw temp',

@@ -115,7 +115,7 @@ export function makeView(trial: MadeTrial): VerdictView {
       order: run.order,
       planned: run.actual,
       coded: run.coded,
-      readings: (readings[index] ?? []).map(({ y, parts }) => parts ?? (y === null ? [] : [y])),
+      readings: (readings[index] ?? []).map(({ y, parts }) => (parts ? [...parts] : y === null ? [] : [y])),
       end: readings[index]?.[0]?.end ?? (readings[index]?.[0]?.y == null ? 'notRun' : 'measured'),
     })),
     usual: brief.factors.map((factor) =>

@@ -12,6 +12,8 @@ export interface ResultWords {
   range(interval: Interval, manner?: 'rough' | 'fine'): string;
   /** "6 N higher (4 N to 8 N)" */
   change(change: number, interval: Interval | null): string;
+  /** "6 N higher", as far as it can be said without its range. */
+  roughChange(change: number, interval: Interval): string;
   /** "6 N": how big a change is, without its sign. */
   size(change: number, interval: Interval | null): string;
 }
@@ -66,6 +68,12 @@ export function resultWords(wording: Wording, result = 0): ResultWords {
       return between(write(interval[0] * scale, step), write(interval[1] * scale, step));
     },
     size,
+    roughChange(change, interval) {
+      const spread = (halfWidth(interval) ?? 0) * scale;
+      const step = stepThatShows([change * scale], roundingStep(change * scale, spread, 'rough'));
+      const amount = withUnit(write(Math.abs(change) * scale, step));
+      return t(`verdict:change.${change < 0 ? 'lower' : 'higher'}.alone`, { amount });
+    },
     change(change, interval) {
       const amount = size(change, interval);
       if (change === 0 && interval === null) return t('verdict:change.none');

@@ -6,6 +6,7 @@ export { type CheckRuns, planCheckRuns } from './advice/check-runs.ts';
 export { judge } from './advice/judge.ts';
 export { type CheckReadings, judgeConfirmation } from './advice/judge-confirmation.ts';
 export { checkGroups, layOutCheckRuns } from './advice/lay-out-check-runs.ts';
+export { type Look, lookAtSettings } from './advice/look-at-settings.ts';
 export type { ResultInput } from './advice/result-model.ts';
 export {
   type BestBet,

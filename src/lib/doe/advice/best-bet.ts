@@ -120,7 +120,7 @@ function goodDirection(brief: Brief, main: ResultModel, usual: readonly number[]
   return goal === 'more' ? 1 : -1;
 }
 
-function lookAt(question: {
+export function lookAt(question: {
   model: ResultModel;
   result: number;
   usual: readonly number[];

@@ -1,0 +1,41 @@
+import { Callout } from '../../../components/ui/Callout.tsx';
+import { sayFact } from '../verdict-words.ts';
+import type { PageWording } from './page-wording.ts';
+
+/** One or two sentences: after check runs what they said, before them what the trial said. */
+export function sayTop(wording: PageWording): string {
+  const { verdict, confirmation } = wording.view;
+  return sayFact(confirmation?.facts[0] ?? verdict.headline, wording);
+}
+
+export function TopSentence(wording: PageWording) {
+  const { view, t, formats } = wording;
+  const made = view.runs.filter(({ end }) => end !== 'notRun').length;
+  return (
+    <div className="verdict-top">
+      <p className="text-steel">
+        {t('verdict-page:about', {
+          count: view.plannedRuns,
+          machine: view.machine,
+          date: formats.date(view.madeAt),
+        })}
+      </p>
+      <h1>{sayTop(wording)}</h1>
+      {view.endedEarly && (
+        <p>{t('verdict:headline.endedEarly', { count: made, planned: view.plannedRuns })}</p>
+      )}
+      {!view.isLatest && (
+        <Callout
+          tone="caution"
+          title={t('verdict-page:newer.title', { n: formats.number(view.n) })}
+          actions={<a href={`/trials/${view.trialId}/verdict`}>{t('verdict-page:newer.link')}</a>}
+        />
+      )}
+      {view.reviewDue && (
+        <Callout tone="caution" title={t('verdict-page:review.title')}>
+          {t('verdict-page:review.words')}
+        </Callout>
+      )}
+    </div>
+  );
+}
