@@ -41,6 +41,8 @@ const visits: Visit[] = [
   { file: 't/[token].astro', path: '/t/a-link-that-never-was', as: 'nobody', status: 410 },
   { file: 'me.astro', path: '/me', as: 'admin' },
   { file: 'trials/index.astro', path: '/trials', as: 'admin' },
+  { file: 'trials/[id]/verdict.astro', path: '/trials/none/verdict', as: 'admin', status: 404 },
+  { file: 'trials/[id]/card.astro', path: '/trials/none/card', as: 'admin', status: 404 },
   { file: 'people/index.astro', path: '/people', as: 'admin' },
   { file: 'people/new.astro', path: '/people/new', as: 'admin' },
   { file: 'people/[id].astro', path: '/people/:personId', as: 'admin' },

@@ -9,10 +9,10 @@ const pageOf = {
   paused: 'start',
   held: 'start',
   'readings in': 'start',
-  'verdict review': 'start',
-  deciding: 'start',
-  'adoption review': 'start',
-  closed: 'start',
+  'verdict review': 'verdict',
+  deciding: 'verdict',
+  'adoption review': 'verdict',
+  closed: 'verdict',
 } as const satisfies Record<TrialState, string>;
 
 export function trialAddress({ id, state }: { id: string; state: TrialState }): string {

@@ -1,7 +1,7 @@
 import type { ReactNode } from 'react';
 import { movedPlaces } from '../headline-words.ts';
 import { resultWords } from '../result-words.ts';
-import { listSettings, settingName } from '../setting-words.ts';
+import { listSettings, termName } from '../setting-words.ts';
 import { sayFact } from '../verdict-words.ts';
 import { capitalize, sentences } from '../wording.ts';
 import { Numbered } from './Numbered.tsx';
@@ -10,11 +10,14 @@ import { factsOf, keepsToday, letterAt, type PageWording } from './page-wording.
 /** "Jaw temp: Clear. Dwell: Likely." for each setting that has an effect. */
 function saySure(wording: PageWording): string {
   const { view, t } = wording;
-  const calls = factsOf(view.verdict.settings, 'matters', 'real-but-small');
+  const calls = [
+    ...factsOf(view.verdict.settings, 'matters', 'real-but-small'),
+    ...factsOf(view.verdict.pairs, 'matters'),
+  ];
   return sentences(
     calls.map((call) =>
       t('verdict-page:trust.sure', {
-        setting: settingName(wording, call.refs.terms?.[0] ?? 'A'),
+        setting: termName(wording, call.refs.terms?.[0] ?? 'A'),
         sure: t(`verdict:sure.${call.values.sure}`),
       }),
     ),
@@ -70,11 +73,12 @@ export function CanYouTrust({ checkRuns, ...wording }: Props) {
     'bends',
     'odd-reading',
   );
+  const sure = sentences([saySure(wording), sayGuess(wording)]);
   const [check] = confirmation ? [] : factsOf(verdict.next, 'check-runs');
   return (
     <Numbered number={3} id="can-you-trust" title={t('verdict-page:part.trust')}>
       {confirmation && sayCheckGain(wording)}
-      <p>{sentences([saySure(wording), sayGuess(wording)])}</p>
+      {sure !== '' && <p>{sure}</p>}
       <p>{sentences(said.map((fact) => sayFact(fact, wording)))}</p>
       {check && (
         <div className="verdict-action">

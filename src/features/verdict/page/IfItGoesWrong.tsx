@@ -61,7 +61,7 @@ export function Hazards({ view, t }: PageWording) {
 
 export function CallLines({ view, t }: PageWording) {
   return (
-    <ul>
+    <ul className="verdict-calls">
       {view.call.map(({ when, whom }) => (
         <li key={`${when} ${whom}`}>{t('verdict-page:wrong.call', { when, whom })}</li>
       ))}
@@ -70,7 +70,7 @@ export function CallLines({ view, t }: PageWording) {
 }
 
 export function IfItGoesWrong(wording: PageWording) {
-  const { view, t, formats } = wording;
+  const { view, t } = wording;
   const moved = movedPlaces(view);
   const places = moved.length > 0 ? moved : view.usual.map((_, place) => place);
   const rules = [...view.stop.picked.map((rule) => t(`safety:stop.${rule}`)), view.stop.own].filter(
@@ -85,7 +85,7 @@ export function IfItGoesWrong(wording: PageWording) {
           </strong>{' '}
           {sentences(sayTriggers(wording))}
         </p>
-        {rules.length > 0 && <p>{t('verdict-page:wrong.stop', { rules: formats.list(rules) })}</p>}
+        {rules.length > 0 && <p>{t('verdict-page:wrong.stop', { rules: rules.join('; ') })}</p>}
         <Hazards {...wording} />
         <CallLines {...wording} />
         <p>{t('verdict-page:wrong.first')}</p>

@@ -18,11 +18,12 @@ function Lines({ words }: { words: readonly string[] }) {
 
 function Together(wording: PageWording) {
   const { view, t } = wording;
+  const isJudged = view.verdict.settings.length > 0;
   const corners = factsOf(view.verdict.details, 'pair-corners');
   const likeliest = factsOf(view.verdict.details, 'likeliest-of-tied');
   return (
     <>
-      {corners.length === 0 && <p>{t('verdict-page:pair.none')}</p>}
+      {corners.length === 0 && <p>{isJudged ? t('verdict-page:pair.none') : t('verdict-page:why.none')}</p>}
       {corners.map((fact) => (
         <PairChart key={fact.refs.terms?.join()} corners={fact} {...wording} />
       ))}

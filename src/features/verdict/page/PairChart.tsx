@@ -1,3 +1,4 @@
+import { Table } from '../../../components/ui/Table.tsx';
 import { resultWords } from '../result-words.ts';
 import { sayEnd, settingAt, settingName } from '../setting-words.ts';
 import { capitalize } from '../wording.ts';
@@ -8,11 +9,11 @@ interface Props extends PageWording {
   readonly corners: PairCorners;
 }
 
-const width = 520;
-const height = 240;
-const [left, right, top, bottom] = [90, 330, 24, 196];
+const width = 360;
+const height = 250;
+const [left, right, top, bottom] = [70, 220, 24, 200];
 /** Words on one side keep this far apart, so that lines which meet stay readable. */
-const apart = 22;
+const apart = 40;
 
 function spread(first: number, second: number): [number, number] {
   const gap = second - first;
@@ -58,7 +59,10 @@ export function PairChart({ corners, ...wording }: Props) {
               {say(from)}
             </text>
             <text x={right + 10} y={(ends[index] ?? 0) + 5}>
-              {say(to)} · {settingAt(wording, second, level)}
+              {say(to)}
+            </text>
+            <text x={right + 10} y={(ends[index] ?? 0) + 22} className="pair-name">
+              {settingAt(wording, second, level)}
             </text>
           </g>
         ))}
@@ -72,25 +76,25 @@ export function PairChart({ corners, ...wording }: Props) {
           {sayEnd(wording, first, 1)}
         </text>
       </svg>
-      <table className="table table-close pair-table">
-        <caption className="sr-only">{title}</caption>
-        <thead>
-          <tr>
-            <td />
-            <th scope="col">{settingAt(wording, first, -1)}</th>
-            <th scope="col">{settingAt(wording, first, 1)}</th>
-          </tr>
-        </thead>
-        <tbody>
-          {lines.map(({ level, from, to }) => (
-            <tr key={level}>
-              <th scope="row">{settingAt(wording, second, level)}</th>
-              <td className="table-figures">{say(from)}</td>
-              <td className="table-figures">{say(to)}</td>
-            </tr>
-          ))}
-        </tbody>
-      </table>
+      <Table
+        id={`pair-${first}${second}`}
+        caption={title}
+        captionHidden
+        close
+        columns={[
+          {
+            key: 'side',
+            header: settingName(wording, second),
+            cell: ({ level }) => sayEnd(wording, second, level),
+            rowHeader: true,
+          },
+          { key: 'low', header: settingAt(wording, first, -1), cell: ({ from }) => say(from), figures: true },
+          { key: 'high', header: settingAt(wording, first, 1), cell: ({ to }) => say(to), figures: true },
+        ]}
+        rows={lines}
+        rowKey={({ level }) => String(level)}
+        empty=""
+      />
     </figure>
   );
 }

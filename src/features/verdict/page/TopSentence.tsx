@@ -1,6 +1,7 @@
 import { Callout } from '../../../components/ui/Callout.tsx';
+import { listDials, movedPlaces } from '../headline-words.ts';
 import { sayFact } from '../verdict-words.ts';
-import type { PageWording } from './page-wording.ts';
+import { keepsToday, type PageWording } from './page-wording.ts';
 
 /** One or two sentences: after check runs what they said, before them what the trial said. */
 export function sayTop(wording: PageWording): string {
@@ -8,8 +9,19 @@ export function sayTop(wording: PageWording): string {
   return sayFact(confirmation?.facts[0] ?? verdict.headline, wording);
 }
 
+/** Where the sentence tells what went wrong, the best that is known all the same. */
+function sayBest(wording: PageWording): string | null {
+  const { view, t } = wording;
+  const isAside = ['some-runs-failed', 'trial-spoilt', 'limits-clash'].includes(view.verdict.headline.kind);
+  if (!isAside || view.confirmation || keepsToday(view)) return null;
+  return t('verdict-page:set.best', {
+    settings: listDials(wording, view.bet.actual, movedPlaces(view), 'at'),
+  });
+}
+
 export function TopSentence(wording: PageWording) {
   const { view, t, formats } = wording;
+  const best = sayBest(wording);
   const made = view.runs.filter(({ end }) => end !== 'notRun').length;
   return (
     <div className="verdict-top">
@@ -21,6 +33,7 @@ export function TopSentence(wording: PageWording) {
         })}
       </p>
       <h1>{sayTop(wording)}</h1>
+      {best && <p className="verdict-best">{best}</p>}
       {view.endedEarly && (
         <p>{t('verdict:headline.endedEarly', { count: made, planned: view.plannedRuns })}</p>
       )}

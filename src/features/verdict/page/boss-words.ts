@@ -1,5 +1,6 @@
 import { listDials, movedPlaces } from '../headline-words.ts';
 import { resultWords } from '../result-words.ts';
+import { capitalize } from '../wording.ts';
 import { factsOf, keepsToday, type PageWording } from './page-wording.ts';
 
 /** Three sentences that can be read out as they stand: what we did, what we found, what comes next. */
@@ -33,11 +34,13 @@ function sayFound(wording: PageWording): string {
     default: {
       const { spec, roughChange } = resultWords(wording);
       const { bet } = view;
-      return t('verdict-page:boss.gain', {
-        settings: listDials(wording, bet.actual, movedPlaces(view), 'at'),
-        result: spec.name,
-        change: roughChange(bet.versusUsual, bet.gainInterval),
-      });
+      return capitalize(
+        t('verdict-page:boss.gain', {
+          settings: listDials(wording, bet.actual, movedPlaces(view), 'at'),
+          result: spec.name,
+          change: roughChange(bet.versusUsual, bet.gainInterval),
+        }),
+      );
     }
   }
 }
