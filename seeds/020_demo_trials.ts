@@ -1,5 +1,5 @@
 import type { Knex } from 'knex';
-import { judgeTrial } from '../src/features/verdict/judge-trial.ts';
+import { judgeTrial } from '../src/features/verdict/judge-trial.service.ts';
 import { insertVerdict } from '../src/features/verdict/verdict.repository.ts';
 import { listVerdictRuns } from '../src/features/verdict/verdict-runs.repository.ts';
 import type { PlannedRun } from '../src/lib/doe/index.ts';

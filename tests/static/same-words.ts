@@ -10,4 +10,6 @@ export const sameWords: SameWords = {
   'wizard-frame:step.plan': ['es', 'pl'],
   'wizard-frame:step.start': ['pl'],
   'wizard:problem.minutesUnit': ['es', 'pl'],
+  'wizard-plan:plan.minutesUnit': ['es', 'pl'],
+  'wizard-plan:plan.upToHours': ['es'],
 };

@@ -11,7 +11,7 @@ import { findLatestPlan } from '../trial/plan.repository.ts';
 import { openReview } from '../trial/review.service.ts';
 import { findTrial, updateTrial } from '../trial/trial.repository.ts';
 import type { Trial } from '../trial/trial.ts';
-import { type Judgement, judgeTrial, type TrialToJudge } from './judge-trial.ts';
+import { type Judgement, judgeTrial, type TrialToJudge } from './judge-trial.service.ts';
 import { findVerdict, findVerdictOfInput, insertVerdict } from './verdict.repository.ts';
 import { listVerdictRuns } from './verdict-runs.repository.ts';
 

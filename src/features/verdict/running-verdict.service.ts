@@ -1,6 +1,6 @@
 import type { ShopScope } from '../../server/db/scope.ts';
 import { findTrialOf } from '../trial/trial-reader.service.ts';
-import { judgeTrial } from './judge-trial.ts';
+import { judgeTrial } from './judge-trial.service.ts';
 import { readTrialToJudge } from './make-verdict.service.ts';
 import { runningKinds } from './running-words.ts';
 import type { VerdictRun } from './verdict-runs.ts';

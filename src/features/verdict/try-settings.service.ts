@@ -1,6 +1,6 @@
 import type { ResultInput } from '../../lib/doe/index.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
-import { hashInput } from './judge-trial.ts';
+import { hashInput } from './judge-trial.service.ts';
 import { readTrialToJudge } from './make-verdict.service.ts';
 import { findVerdict } from './verdict.repository.ts';
 import { toResultInputs } from './verdict-input.ts';
