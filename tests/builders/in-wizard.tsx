@@ -15,6 +15,7 @@ export const nothingSoFar: SoFar = {
   brief: null,
   proposals: [],
   runs: [],
+  racks: [],
   missing: 0,
   misfit: null,
   coaching: [],
