@@ -3,7 +3,7 @@ import { analyze } from '../../../src/lib/doe/analysis/analyze.ts';
 import { PLANS } from './plans.ts';
 import type { RandomSource } from './simulation.ts';
 
-/** *likely* about a null effect when rejects out of a lot are counted. */
+/** *likely* about a null effect, each term in turn, when rejects out of a lot are counted. */
 export function falseLikelyOfRejects(question: {
   lot: number;
   rate: number;
@@ -23,8 +23,8 @@ export function falseLikelyOfRejects(question: {
   let likely = 0;
   for (let experiment = 0; experiment < experiments; experiment++) {
     const runs = plan.runs.map((run) => ({ ...run, n: lot, y: drawRejects(lot, rate, correlation, random) }));
-    const term = analyze({ factors, runs, scale }).terms.at(-1);
-    if ((term?.p ?? 1) < 0.05) likely++;
+    const { terms } = analyze({ factors, runs, scale });
+    likely += terms.filter(({ p }) => (p ?? 1) < 0.05).length / terms.length;
   }
   return likely / experiments;
 }
