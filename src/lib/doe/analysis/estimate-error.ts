@@ -1,4 +1,5 @@
 import type { ErrorPlan, ErrorRung } from '../design/proposal.ts';
+import { hasPseudoErrorLimits } from '../tables/pseudo-error-limits.ts';
 import type { ErrorEstimate, ErrorSource, StratumError } from './analysis.ts';
 import { type CornerContrasts, estimateCornerContrasts } from './corner-contrasts.ts';
 import {
@@ -124,11 +125,17 @@ function climb(step: {
   }
   if (rung === 'pseudo' || rung === 'pseudo+replicates') {
     const contrasts = step.contrasts();
-    if (contrasts !== null) return pseudoRung({ rung, family, pureError, contrasts, lifted });
+    // Middle runs in every block make a contrast that blocks hide estimable, but never as well as the others: it is no yardstick, and six are too few.
+    if (contrasts !== null && hasLimits(contrasts, pureError))
+      return pseudoRung({ rung, family, pureError, contrasts, lifted });
   }
   if (question.theory !== null && floor > 0)
     return { source: 'known', df: null, sd: floor, yardstickFor: () => ({ kind: 'known', sd: floor }) };
   return { source: 'none', df: null, sd: null, yardstickFor: () => ({ kind: 'none' }) };
+}
+
+function hasLimits({ effects }: CornerContrasts, { df }: Spread): boolean {
+  return hasPseudoErrorLimits({ contrasts: effects.length, replicateDf: df });
 }
 
 function pseudoRung(step: {
