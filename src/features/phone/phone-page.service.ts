@@ -1,4 +1,3 @@
-import type { SettingMarkKind } from '../../components/ui/SettingMark.tsx';
 import type { FactorSpec } from '../../lib/doe/index.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
 import { AppError } from '../../server/errors.ts';
@@ -14,9 +13,9 @@ import { readStoredAnswers } from '../trial/answers.repository.ts';
 import type { Answers } from '../trial/answers.schema.ts';
 import { findTrialOf } from '../trial/trial-reader.service.ts';
 import { openPhone, type PhoneVisit } from './phone-link.service.ts';
-import type { PhoneRun, PhoneView } from './phone-view.ts';
+import type { PhoneMark, PhoneRun, PhoneView } from './phone-view.ts';
 
-function markOf(factor: FactorSpec, coded: number): SettingMarkKind {
+function markOf(factor: FactorSpec, coded: number): PhoneMark {
   if (factor.kind === 'choice') return coded > 0 ? 'second' : 'first';
   if (coded === 0) return 'middle';
   return coded > 0 ? 'high' : 'low';

@@ -1,7 +1,9 @@
-import type { SettingMarkKind } from '../../components/ui/SettingMark.tsx';
 import type { Language } from '../../i18n/languages.ts';
 import type { ResultItem } from '../run/result-items.ts';
 import type { HazardName, StopRule } from '../trial/answer-choices.ts';
+
+/** Where a number stands in its window, or which of its two names a choice has. */
+export type PhoneMark = 'low' | 'middle' | 'high' | 'first' | 'second';
 
 /** A run as its person sees it on the phone. */
 export interface PhoneRun {
@@ -9,7 +11,7 @@ export interface PhoneRun {
   number: number;
   state: 'asked' | 'made' | 'doubtful';
   revision: number;
-  settings: { name: string; value: number | string; unit: string; mark: SettingMarkKind }[];
+  settings: { name: string; value: number | string; unit: string; mark: PhoneMark }[];
   /** Minutes to wait and parts to throw away before parts count; 0: none. */
   waitMinutes: number;
   throwAway: number;
