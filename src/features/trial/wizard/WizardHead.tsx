@@ -29,6 +29,7 @@ interface StatusProps extends IslandProps {
 const tones = {
   saved: 'text-good',
   saving: 'text-steel',
+  undecided: 'text-caution',
   offline: 'text-caution',
   'signed out': 'text-caution',
   refused: 'text-stop',
@@ -44,6 +45,7 @@ function StatusWords({ timeZone, savedAt, mayWrite, language }: Omit<StatusProps
       return at === null ? '' : t('status.saved', { time: formatsFor(language, timeZone).time(at) });
     },
     saving: () => t('status.saving'),
+    undecided: () => t('status.undecided'),
     offline: () => t('status.offline'),
     'signed out': () => t('status.signedOut'),
     refused: () => (save.kind === 'refused' ? t('status.refused', { why: save.sentence }) : ''),

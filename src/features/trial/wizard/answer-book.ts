@@ -28,6 +28,7 @@ export function createAnswerBook(first: StoredAnswers) {
 
   function describeSave(): SaveState {
     if (hasDue()) return trouble ?? { kind: 'saving' };
+    if ([...states.values()].some(({ theirs }) => theirs)) return { kind: 'undecided' };
     const lasts = trouble?.kind === 'refused' || trouble?.kind === 'signed out';
     return trouble && lasts ? trouble : { kind: 'saved', at: lastSavedAt };
   }

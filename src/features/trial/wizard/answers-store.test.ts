@@ -140,6 +140,7 @@ describe('the answers of a page', () => {
     const present = stored(2, '9');
     await answer({ kind: 'changed meanwhile', present });
     const [conflict] = store.getSnapshot().conflicts;
+    expect(store.getSnapshot().save).toEqual({ kind: 'undecided' });
     expect(conflict).toEqual({ question: 'worth', mine: { change: '4' }, theirs: present });
     store.change('worth', { change: '4.5' });
     await pass();

@@ -33,6 +33,8 @@ export type SaveOutcome =
 export type SaveState =
   | { kind: 'saved'; at: number | null }
   | { kind: 'saving' }
+  /** The reader has two texts to choose from. */
+  | { kind: 'undecided' }
   | { kind: 'offline' }
   | { kind: 'signed out' }
   | { kind: 'refused'; sentence: string };
