@@ -1,3 +1,4 @@
+import type board from '../../locales/en/board.json';
 import type common from '../../locales/en/common.json';
 import type errors from '../../locales/en/errors.json';
 import type front from '../../locales/en/front.json';
@@ -29,6 +30,7 @@ declare module 'i18next' {
       'wizard-safety': typeof wizardSafety;
       safety: typeof safety;
       'plan-review': typeof planReview;
+      board: typeof board;
       common: typeof common;
       errors: typeof errors;
       front: typeof front;

@@ -9,6 +9,7 @@ export const namespaces = [
   'wizard-plan',
   'texts',
   'run-texts',
+  'board',
   'mail',
   'people',
   'phone',

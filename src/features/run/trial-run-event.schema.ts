@@ -34,3 +34,4 @@ export const runTrialEventSchemas = [
   z.strictObject({ event: z.literal('something changed'), ...change.shape }),
 ] as const;
 export type RunTrialEvent = z.output<(typeof runTrialEventSchemas)[number]>;
+export type RunTrialEventInput = z.input<(typeof runTrialEventSchemas)[number]>;

@@ -7,6 +7,7 @@ import type { Answers } from '../../../src/features/trial/answers.schema.ts';
 import { trialEventSchema } from '../../../src/features/trial/trial.schema.ts';
 import { carryOutEvent } from '../../../src/features/trial/trial-event.service.ts';
 import type { TrialReader } from '../../../src/features/trial/trial-reader.service.ts';
+import { listActivity } from '../../../src/server/db/activity-log.ts';
 import { newId } from '../../../src/server/ids.ts';
 import { buildRunningTrial } from '../../builders/measured-trial.ts';
 import { buildTrialShop, type TrialShop } from '../trial/trial-fixture.ts';
@@ -78,4 +79,9 @@ export async function recordAll(scene: BoardScene): Promise<void> {
     if (state === 'done' || state === 'skipped') continue;
     await scene.doRun(number, { event: 'record', figures: allFigures(36 + number / 10) });
   }
+}
+
+/** The trial's last lines in the log, newest first. */
+export async function kindsOf({ shop, trialId }: BoardScene, limit = 5): Promise<string[]> {
+  return (await listActivity(shop.scope, { limit, trialId })).map(({ kind }) => kind);
 }
