@@ -13,9 +13,10 @@ import {
 } from '../setup/browser.ts';
 import { addDraft } from '../setup/draft-trial.ts';
 import { type RunningApp, startApp } from '../setup/running-app.ts';
+import { addRunningTrial } from '../setup/running-trial.ts';
 import { signIn } from '../setup/sign-in.ts';
 
-/** Who opens the page, and at which address; `:personId` stands for somebody of the demo shop, `:trialId` for a draft. */
+/** Who opens the page, and at which address; `:personId` stands for somebody of the demo shop, `:trialId` for a draft, `:runningId` for a trial that runs. */
 interface Visit {
   file: string;
   path: string;
@@ -57,6 +58,8 @@ const visits: Visit[] = [
   { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/safety', as: 'supervisor' },
   { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/around', as: 'supervisor' },
   { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/start', as: 'supervisor' },
+  { file: 'trials/[id]/board.astro', path: '/trials/:runningId/board', as: 'supervisor' },
+  { file: 'trials/[id]/paper.astro', path: '/trials/:runningId/paper', as: 'supervisor', isPaper: true },
   { file: 'trials/[id]/review.astro', path: '/trials/:trialId/review', as: 'supervisor' },
   { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/plan', as: 'supervisor' },
   { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/crew', as: 'supervisor' },
@@ -77,6 +80,7 @@ let running: RunningApp;
 let browser: Browser;
 let visitors: Record<Visit['as'], WatchedPage>;
 let trialId: string;
+let runningId: string;
 beforeAll(async () => {
   running = await startApp({ standIns: true });
   browser = await launchBrowser();
@@ -87,6 +91,7 @@ beforeAll(async () => {
   };
   await signIn(visitors.admin.page, running.url, 'admin');
   await signIn(visitors.supervisor.page, running.url, 'supervisor');
+  runningId = await addRunningTrial(running);
   trialId = await addDraft(visitors.supervisor.page, running.url);
 });
 afterAll(async () => {
@@ -103,7 +108,7 @@ function nameOf({ file, path }: Visit): string {
 /** Opens the page as its visitor and answers the status. */
 async function open(visit: Visit): Promise<number | undefined> {
   const { page } = visitors[visit.as];
-  let path = visit.path.replace(':trialId', trialId);
+  let path = visit.path.replace(':trialId', trialId).replace(':runningId', runningId);
   if (path.includes(':personId')) {
     await page.goto(`${running.url}/people`);
     path = (await page.locator('a[href^="/people/0"]').first().getAttribute('href')) ?? path;

@@ -3,6 +3,7 @@ import type { SameWords } from './locale-faults.ts';
 /** Names, and words that a language shares with English. Everything else that equals the English text is not translated yet. */
 export const sameWords: SameWords = {
   'common:product': ['es', 'pl', 'vi'],
+  'board:no': ['es'],
   'people:role.supervisor': ['es'],
   'people:role.operator': ['pl'],
   'shop:poster.word.problem': ['pl'],

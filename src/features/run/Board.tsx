@@ -11,9 +11,9 @@ import { BoardHead } from './board/BoardHead.tsx';
 import { BoardNotices } from './board/BoardNotices.tsx';
 import { BoardRack } from './board/BoardRack.tsx';
 import { BoardSide } from './board/BoardSide.tsx';
-import { BoardContext, type BoardTools } from './board/board-context.ts';
+import { BoardContext, type BoardTools } from './board/board-context.tsx';
 import { RunPanel } from './board/RunPanel.tsx';
-import { useBoard } from './board/use-board.ts';
+import { useBoard } from './board/use-board.tsx';
 import { boardEventCall, runEventCall } from './board.queries.ts';
 import type { Board as BoardData } from './board.schema.ts';
 

@@ -1,7 +1,7 @@
 import { Table } from '../../components/ui/Table.tsx';
 import type { Formats } from '../../i18n/format.ts';
 import type { Translate } from '../../i18n/translator.ts';
-import { tagSettings } from './board/board-view.ts';
+import { tagSettings } from './board/board-view.tsx';
 import { listFigureFields } from './board/typed-figures.ts';
 import type { Board, BoardRun } from './board.schema.ts';
 

@@ -5,7 +5,7 @@ import { Choice } from '../../../components/ui/Choice.tsx';
 import { NumberInput } from '../../../components/ui/NumberInput.tsx';
 import { parseTypedNumber } from '../../../i18n/format.ts';
 import type { BoardRun } from '../board.schema.ts';
-import { useBoardTools } from './board-context.ts';
+import { useBoardTools } from './board-context.tsx';
 import { PanelActions } from './PanelActions.tsx';
 
 interface Props {

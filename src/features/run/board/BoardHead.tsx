@@ -2,8 +2,8 @@ import { useState } from 'react';
 import { useTranslation } from 'react-i18next';
 import { v7 } from 'uuid';
 import { Button } from '../../../components/ui/Button.tsx';
-import { useBoardTools } from './board-context.ts';
-import { isOpenRun } from './board-view.ts';
+import { useBoardTools } from './board-context.tsx';
+import { isOpenRun } from './board-view.tsx';
 import { ResumeDialog } from './ResumeDialog.tsx';
 
 function useLeft(): string | null {

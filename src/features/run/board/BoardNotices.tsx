@@ -6,8 +6,8 @@ import { ButtonLink } from '../../../components/ui/ButtonLink.tsx';
 import { Callout } from '../../../components/ui/Callout.tsx';
 import type { Board } from '../board.schema.ts';
 import { BoardFault } from './BoardFault.tsx';
-import { useBoardTools } from './board-context.ts';
-import { findCurrent } from './board-view.ts';
+import { useBoardTools } from './board-context.tsx';
+import { findCurrent } from './board-view.tsx';
 import { ResumeDialog } from './ResumeDialog.tsx';
 
 interface Props {

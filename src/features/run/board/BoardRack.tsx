@@ -1,8 +1,8 @@
 import { useTranslation } from 'react-i18next';
 import { JobTag } from '../../../components/ui/JobTag.tsx';
 import type { BoardRun } from '../board.schema.ts';
-import { useBoardTools } from './board-context.ts';
-import { findCurrent, tagSettings, tagStateOf, writeFigures } from './board-view.ts';
+import { useBoardTools } from './board-context.tsx';
+import { findCurrent, tagSettings, tagStateOf, writeFigures } from './board-view.tsx';
 
 function useFoot(): (run: BoardRun) => string {
   const { t } = useTranslation('board');

@@ -4,8 +4,8 @@ import { Button } from '../../../components/ui/Button.tsx';
 import { ButtonLink } from '../../../components/ui/ButtonLink.tsx';
 import { ConfirmDialog } from '../../../components/ui/ConfirmDialog.tsx';
 import type { ChangeKind } from '../stretch.ts';
-import { useBoardTools } from './board-context.ts';
-import { isOpenRun } from './board-view.ts';
+import { useBoardTools } from './board-context.tsx';
+import { isOpenRun } from './board-view.tsx';
 import { ChangeDialog } from './ChangeDialog.tsx';
 import { TypeAll } from './TypeAll.tsx';
 

@@ -6,7 +6,7 @@ import { Dialog } from '../../../components/ui/Dialog.tsx';
 import { TextInput } from '../../../components/ui/TextInput.tsx';
 import type { ChangeKind } from '../stretch.ts';
 import { BoardFault } from './BoardFault.tsx';
-import { useBoardTools } from './board-context.ts';
+import { useBoardTools } from './board-context.tsx';
 
 interface Props {
   readonly kind: ChangeKind | 'problem';

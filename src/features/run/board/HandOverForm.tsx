@@ -3,7 +3,7 @@ import { useTranslation } from 'react-i18next';
 import { v7 } from 'uuid';
 import { Select } from '../../../components/ui/Select.tsx';
 import type { BoardRun } from '../board.schema.ts';
-import { useBoardTools } from './board-context.ts';
+import { useBoardTools } from './board-context.tsx';
 import { PanelActions } from './PanelActions.tsx';
 
 interface Props {

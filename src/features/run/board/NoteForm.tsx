@@ -3,7 +3,7 @@ import { useTranslation } from 'react-i18next';
 import { v7 } from 'uuid';
 import { TextArea } from '../../../components/ui/TextArea.tsx';
 import type { BoardRun } from '../board.schema.ts';
-import { useBoardTools } from './board-context.ts';
+import { useBoardTools } from './board-context.tsx';
 import { PanelActions } from './PanelActions.tsx';
 
 interface Props {

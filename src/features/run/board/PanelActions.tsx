@@ -1,7 +1,7 @@
 import { useTranslation } from 'react-i18next';
 import { Button } from '../../../components/ui/Button.tsx';
 import { BoardFault } from './BoardFault.tsx';
-import { useBoardTools } from './board-context.ts';
+import { useBoardTools } from './board-context.tsx';
 
 interface Props {
   readonly label: string;

@@ -7,7 +7,7 @@ import { TextArea } from '../../../components/ui/TextArea.tsx';
 import { TextInput } from '../../../components/ui/TextInput.tsx';
 import type { ChangeKind } from '../stretch.ts';
 import { BoardFault } from './BoardFault.tsx';
-import { useBoardTools } from './board-context.ts';
+import { useBoardTools } from './board-context.tsx';
 
 interface Answer {
   reason: string;

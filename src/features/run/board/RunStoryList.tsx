@@ -3,8 +3,8 @@ import { useTranslation } from 'react-i18next';
 import { Loading } from '../../../components/ui/Loading.tsx';
 import { runStoryCall } from '../board.queries.ts';
 import type { BoardRun, StoryLine } from '../board.schema.ts';
-import { useBoardTools } from './board-context.ts';
-import { writeFigure } from './board-view.ts';
+import { useBoardTools } from './board-context.tsx';
+import { writeFigure } from './board-view.tsx';
 
 function useLineWords(): (line: StoryLine) => string {
   const { t } = useTranslation('board');

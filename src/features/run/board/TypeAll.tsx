@@ -5,8 +5,8 @@ import { readSubmissionFault } from '../../../components/island/use-submission.t
 import { Button } from '../../../components/ui/Button.tsx';
 import { fieldSentence } from '../../../i18n/field-codes.ts';
 import { runEventCall } from '../board.queries.ts';
-import { useBoardTools } from './board-context.ts';
-import { isOpenRun } from './board-view.ts';
+import { useBoardTools } from './board-context.tsx';
+import { isOpenRun } from './board-view.tsx';
 import { TypeAllTable } from './TypeAllTable.tsx';
 import { listFigureFields, readPastedCells, readTypedFigures, typedFigures } from './typed-figures.ts';
 

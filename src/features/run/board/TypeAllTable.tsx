@@ -2,8 +2,8 @@ import type { ClipboardEvent } from 'react';
 import { useTranslation } from 'react-i18next';
 import { Table } from '../../../components/ui/Table.tsx';
 import type { BoardRun } from '../board.schema.ts';
-import { useBoardTools } from './board-context.ts';
-import { tagSettings } from './board-view.ts';
+import { useBoardTools } from './board-context.tsx';
+import { tagSettings } from './board-view.tsx';
 import { type FigureField, typedFigures } from './typed-figures.ts';
 
 interface Props {

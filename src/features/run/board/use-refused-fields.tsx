@@ -1,4 +1,4 @@
-import { useBoardTools } from './board-context.ts';
+import { useBoardTools } from './board-context.tsx';
 
 /** What the server found wrong with figures, by their field: `#/figures/0-1` is the first part of the main result. */
 export function useRefusedFields(): Record<string, string> {
