@@ -5,6 +5,7 @@ import { Button } from '../../../components/ui/Button.tsx';
 import { useBoardTools } from './board-context.tsx';
 import { isOpenRun } from './board-view.tsx';
 import { ResumeDialog } from './ResumeDialog.tsx';
+import { StopButton } from './StopButton.tsx';
 
 function useLeft(): string | null {
   const { t } = useTranslation('board');
@@ -28,10 +29,6 @@ export function BoardHead() {
   async function pause(): Promise<void> {
     if (await doTrial({ event: 'pause', revision: board.revision })) say('good', t('pausedNow'));
   }
-  async function resume(): Promise<void> {
-    // After a stop somebody says why it is safe; after a pause, whether anything was changed.
-    setResuming(true);
-  }
 
   return (
     <div className="board-head">
@@ -49,15 +46,11 @@ export function BoardHead() {
           </Button>
         )}
         {may('resume') && (
-          <Button icon="play" busy={busy} onClick={resume}>
+          <Button icon="play" busy={busy} onClick={() => setResuming(true)}>
             {t('resume')}
           </Button>
         )}
-        {may('hold') && (
-          <Button kind="stop" size="large" icon="stop" onClick={() => doTrial({ event: 'hold' })}>
-            {t('stop')}
-          </Button>
-        )}
+        <StopButton />
       </div>
       {isResuming && (
         <ResumeDialog

@@ -16,6 +16,7 @@ import { HandOverForm } from './HandOverForm.tsx';
 import { NoteForm } from './NoteForm.tsx';
 import { ReadingForm } from './ReadingForm.tsx';
 import { RunStoryList } from './RunStoryList.tsx';
+import { StopButton } from './StopButton.tsx';
 
 type Mode = 'look' | 'record' | 'correct' | 'hand over' | 'note' | 'set actual';
 
@@ -63,8 +64,14 @@ export function RunPanel({ run, onClose }: Props) {
   ];
 
   return (
-    <Dialog open onClose={onClose} title={t('run', { run: run.number })} closeLabel={t('close')}>
-      <div className="grid gap-6 pb-6">
+    <Dialog
+      open
+      onClose={onClose}
+      title={t('run', { run: run.number })}
+      closeLabel={t('close')}
+      actions={board.events.includes('hold') && <StopButton onStopped={onClose} />}
+    >
+      <div className="grid gap-6">
         <JobTagSettings settings={tagSettings(board, run, formats)} />
         {run.actual && <p className="field-help">{t('setOtherwise')}</p>}
         {mode === 'look' && (
