@@ -82,11 +82,22 @@ function decideFromSpaces(question: SpaceQuestion): ErrorPlan {
   const highOrderTerms = terms.filter(
     (term) => term.length > 2 && rows - space.rank > replicateDf && space.add(columnOf(term)),
   );
-  const contrasts = tested.length + highOrderTerms.length;
-  const pseudo = regular && hasPseudoErrorLimits({ contrasts, replicateDf });
+  const mayUsePseudo = regular && df < ENOUGH_DF;
+  const contrasts = mayUsePseudo ? countCornerContrasts(question) : tested.length + highOrderTerms.length;
+  const pseudo = mayUsePseudo && hasPseudoErrorLimits({ contrasts, replicateDf });
   const rung = chooseRung({ df, replicateDf, fewestDf, pseudo });
   const hasDf = rung === 'replicates' || rung === 'replicates+high-order';
   return { rung, df: hasDf ? df : null, replicateDf, highOrderTerms, contrasts };
+}
+
+/**
+ * Contrasts among the corner runs alone. Middle runs in every block make a contrast that blocks hide estimable, but by the middles' difference and never
+ * as well as the others: it is no yardstick for them.
+ */
+function countCornerContrasts({ terms, columnOf, units, middles }: SpaceQuestion): number {
+  const isCorner = (_: number, row: number) => middles.every((middle) => middle[row] === 0);
+  const space = createColumnSpace(units.map((unit) => unit.filter(isCorner)));
+  return terms.filter((term) => space.add(columnOf(term).filter(isCorner))).length;
 }
 
 function chooseRung(known: {
