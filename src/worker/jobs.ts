@@ -1,4 +1,5 @@
 import { config } from '../server/env.ts';
+import { askNextRuns } from './ask-next-runs.ts';
 import { backup } from './backup.ts';
 import { beat } from './beat.ts';
 import { catchUp } from './catch-up-texts.ts';
@@ -7,6 +8,7 @@ import { mailGateway, textGateway } from './gateways.ts';
 import type { Job } from './loop.ts';
 import { makeVerdicts } from './make-verdicts.ts';
 import { readInbox } from './read-inbox.ts';
+import { remind } from './remind-of-runs.ts';
 import { retention } from './retention.ts';
 import { sendMails, sendTexts } from './send-messages.ts';
 import { settleUnsure } from './settle-unsure.ts';
@@ -15,6 +17,8 @@ import { settleUnsure } from './settle-unsure.ts';
 export const jobs: Job[] = [
   beat,
   readInbox,
+  askNextRuns,
+  remind,
   makeVerdicts,
   sendTexts(textGateway, () => config().texts.perSecond),
   sendMails(mailGateway),

@@ -6,6 +6,8 @@ import {
 } from '../features/message/inbox.repository.ts';
 import { readInboxText } from '../features/message/inbox.service.ts';
 import { workerScope } from '../features/message/sending.service.ts';
+import { converse } from '../features/run/converse.service.ts';
+import { holdRunsOfOptOut } from '../features/run/hold-by-text.service.ts';
 import { describeError, log } from '../server/log.ts';
 import { holdLease } from './lease.ts';
 import type { Job, JobContext } from './loop.ts';
@@ -37,7 +39,7 @@ export const readInbox: Job = {
 async function tryReading({ db }: JobContext, text: InboxText): Promise<boolean> {
   const scope = workerScope(db, text.shopId);
   try {
-    await readInboxText(scope, text);
+    await readInboxText(scope, text, { converse, holdRunsOfOptOut });
     return true;
   } catch (error) {
     log.error({ event: 'text-not-read', shopId: text.shopId, error: describeError(error) });

@@ -87,6 +87,18 @@ export async function closeInboxText(
   return changed > 0;
 }
 
+/** Says what was made of a text that is off the pile. */
+export async function describeInboxText(
+  scope: ShopScope,
+  id: string,
+  result: { state: 'read' | 'set aside'; intent: string; runId: string | null },
+): Promise<void> {
+  await scope
+    .db('inbox_texts')
+    .where({ shop_id: scope.shopId, id })
+    .update({ state: result.state, intent: result.intent, run_id: result.runId });
+}
+
 /** Notes an attempt to read that failed. */
 export async function countReadingAttempt(scope: ShopScope, id: string): Promise<void> {
   await scope.db('inbox_texts').where({ shop_id: scope.shopId, id }).increment('attempts', 1);

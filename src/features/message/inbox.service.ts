@@ -8,7 +8,13 @@ import { type FullAddressee, findAddressee, liftSuppression, suppressPhone } fro
 import { findPersonByPhone } from './consent.repository.ts';
 import { acceptConsent, reopenConsent } from './consent.service.ts';
 import { moveConversation, readConversation } from './conversation.repository.ts';
-import { closeInboxText, type InboxMedia, type InboxText, insertInboxText } from './inbox.repository.ts';
+import {
+  closeInboxText,
+  describeInboxText,
+  type InboxMedia,
+  type InboxText,
+  insertInboxText,
+} from './inbox.repository.ts';
 import { queueMessage } from './message.service.ts';
 import { readFirstMeaning } from './text-reading.ts';
 import { withdrawConsent } from './withdrawal.service.ts';
@@ -41,18 +47,32 @@ export async function keepReceivedText(scope: ShopScope, text: ReceivedText): Pr
   });
 }
 
+/** What a text means for the runs of a trial, which this feature knows nothing of. Both are called in the transaction. */
+export interface RunTalk {
+  /** Reads a text that is neither consent nor practice, and does what it asks. */
+  converse(
+    scope: ShopScope,
+    person: FullAddressee,
+    text: InboxText,
+  ): Promise<{ intent: string; runId: string | null; isUsed: boolean }>;
+  /** Somebody takes no more texts. */
+  holdRunsOfOptOut(scope: ShopScope, personId: string): Promise<void>;
+}
+
 /** Reads one text and does what it asks, all or nothing. A text that somebody else has read is left alone. */
-export async function readInboxText(scope: ShopScope, text: InboxText): Promise<void> {
+export async function readInboxText(scope: ShopScope, text: InboxText, runTalk: RunTalk): Promise<void> {
   await inTransaction(scope, async (inside) => {
     const person = text.personId === null ? null : await findAddressee(inside, text.personId);
     if (person === null) return readStranger(inside, text);
     const { state: conversation } = await readConversation(inside, person.personId);
     const meaning = readFirstMeaning(text.body, { ...person, conversation });
-    const isUsed = meaning !== 'other';
-    const result = { state: isUsed ? 'read' : 'set aside', intent: isUsed ? meaning : null } as const;
-    if (!(await closeInboxText(inside, text.id, result))) return;
+    if (meaning === 'other') return talkOfRuns(inside, person, text, runTalk);
+    if (!(await closeInboxText(inside, text.id, { state: 'read', intent: meaning }))) return;
 
-    if (meaning === 'optOut') await optOut(inside, person);
+    if (meaning === 'optOut') {
+      await optOut(inside, person);
+      await runTalk.holdRunsOfOptOut(inside, person.personId);
+    }
     if (meaning === 'askAgain') await reopenConsent(inside, person, text.id);
     if (meaning === 'agree') await acceptConsent(inside, person, text.id);
     if (meaning === 'decline') {
@@ -60,6 +80,18 @@ export async function readInboxText(scope: ShopScope, text: InboxText): Promise<
     }
     if (meaning === 'practiceDone') await endPractice(inside, person, text);
   });
+}
+
+/** Off the pile first, so that of two workers one alone acts on it; then with what was made of it. */
+async function talkOfRuns(
+  scope: ShopScope,
+  person: FullAddressee,
+  text: InboxText,
+  { converse }: RunTalk,
+): Promise<void> {
+  if (!(await closeInboxText(scope, text.id, { state: 'set aside', intent: null }))) return;
+  const { intent, runId, isUsed } = await converse(scope, person, text);
+  await describeInboxText(scope, text.id, { state: isUsed ? 'read' : 'set aside', intent, runId });
 }
 
 async function optOut(scope: ShopScope, person: FullAddressee): Promise<void> {

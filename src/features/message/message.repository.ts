@@ -182,3 +182,52 @@ export async function knownProviderIds(db: Knex, ids: readonly string[]): Promis
     .pluck('provider_id');
   return new Set(found.map(String));
 }
+
+/** Cancels the texts of a trial that have not gone out, to whomever. */
+export async function cancelTrialMessages(scope: ShopScope, trialId: string): Promise<void> {
+  await scope
+    .db('messages')
+    .where({ shop_id: scope.shopId, trial_id: trialId, channel: 'text', state: 'waiting' })
+    .update({ state: 'cancelled' });
+}
+
+/** Cancels the texts about a run that have not gone out. */
+export async function cancelRunMessages(scope: ShopScope, runId: string): Promise<void> {
+  await scope
+    .db('messages')
+    .where({ shop_id: scope.shopId, run_id: runId, channel: 'text', state: 'waiting' })
+    .update({ state: 'cancelled' });
+}
+
+/** How many messages of a kind a run has had since a moment. */
+export async function countMessages(
+  scope: ShopScope,
+  which: { template: string; runId: string; since: number },
+): Promise<number> {
+  const [row] = await scope
+    .db('messages')
+    .where({ shop_id: scope.shopId, run_id: which.runId, template: which.template })
+    .where('created_at', '>=', which.since)
+    .count({ count: '*' });
+  return Number(row?.['count'] ?? 0);
+}
+
+/** The template of a message; null where there is none, or its words have been let go. */
+export async function findTemplateOf(scope: ShopScope, id: string | null): Promise<string | null> {
+  if (id === null) return null;
+  const row: unknown = await scope.db('messages').where({ shop_id: scope.shopId, id }).first('template');
+  return row ? z.object({ template: z.string() }).parse(row).template : null;
+}
+
+/** Whether a person was sent a message of one of these kinds about a trial. */
+export async function hadMessage(
+  scope: ShopScope,
+  which: { templates: readonly string[]; trialId: string; personId: string },
+): Promise<boolean> {
+  const found = await scope
+    .db('messages')
+    .where({ shop_id: scope.shopId, trial_id: which.trialId, person_id: which.personId })
+    .whereIn('template', [...which.templates])
+    .first('id');
+  return found !== undefined;
+}

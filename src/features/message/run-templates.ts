@@ -117,8 +117,11 @@ const toCaller = {
     t('run-texts:allIn', params),
   ),
   problemRaised: text(
-    { ...told, params: z.strictObject({ machine: words, run, name: words, words }) },
-    (t, params) => t('run-texts:problemRaised', params),
+    { ...told, params: z.strictObject({ machine: words, run: run.nullable(), name: words, words }) },
+    (t, { run: number, ...rest }) =>
+      number === null
+        ? t('run-texts:problemAtMachine', rest)
+        : t('run-texts:problemRaised', { ...rest, run: number }),
   ),
   cannotReach: text(
     { ...told, params: z.strictObject({ machine: words, run, name: words, actual: words }) },

@@ -8,10 +8,13 @@ import { readStoredAnswers } from '../trial/answers.repository.ts';
 import { crewOf } from '../trial/readiness.ts';
 import type { Trial } from '../trial/trial.ts';
 import type { Run } from './run.ts';
+import { findCaller } from './run-people.service.ts';
 import { requirePlan } from './run-reader.service.ts';
+import { readRunningTrial } from './running-trial.service.ts';
+import { noteSetBack } from './set-back.repository.ts';
 import { listUsualSettings } from './usual-settings.ts';
 
-/** Those who must hear of a stop: whoever has a run in hand, and everybody of the crew who is at work now. */
+/** Those who must hear of a stop: whoever has a run in hand, is called, or is of the crew and at work now. */
 async function listConcerned(scope: ShopScope, trial: Trial, runs: readonly Run[]): Promise<string[]> {
   const { timeZone } = await findShop(scope);
   const inHand = runs
@@ -23,6 +26,11 @@ async function listConcerned(scope: ShopScope, trial: Trial, runs: readonly Run[
     const person = await findPerson(scope, id);
     if (person && isAtWork(person.workSpans, now(), timeZone)) concerned.add(id);
   }
+  const running = await readRunningTrial(scope, trial.id);
+  const caller = await findCaller(scope, running);
+  // Whoever stopped it on the board knows.
+  const by = scope.actor.kind === 'person' ? scope.actor.id : null;
+  for (const id of [caller.personId, trial.ownerId]) if (id !== null && id !== by) concerned.add(id);
   return [...concerned];
 }
 
@@ -36,6 +44,7 @@ export async function announceHold(
   about: { trial: Trial; runs: readonly Run[]; stop: number },
 ): Promise<void> {
   const { trial, runs, stop } = about;
+  await noteSetBack(scope, trial.id, 'asked');
   const { brief } = await requirePlan(scope, trial.id);
   const { answers } = await readStoredAnswers(scope, trial.id);
   const caller = answers.call?.lines[0]?.whom?.trim() ?? '';

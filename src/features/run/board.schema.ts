@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import '../people/schema-settings.ts';
 import { trialEvents, trialStates } from '../trial/trial-states.ts';
+import { problemKinds } from './problem-kinds.ts';
 import { readingSources, readingStates, runEnds, runStates } from './run.ts';
 import { runEvents } from './run-states.ts';
 import { stretchKinds } from './stretch.ts';
@@ -86,6 +87,9 @@ export const boardSchema = z.object({
   problems: z.array(
     z.object({
       id: z.string(),
+      kind: z.enum(problemKinds),
+      /** Whether no run goes out until it is dealt with. */
+      blocks: z.boolean(),
       runNumber: z.number().nullable(),
       runId: z.string().nullable(),
       words: z.string(),
@@ -96,6 +100,8 @@ export const boardSchema = z.object({
   stretches: z.array(
     z.object({ n: z.number(), kind: z.enum(stretchKinds), words: z.string(), at: z.number() }),
   ),
+  /** Whether the usual settings are back on the machine; `asked`: not yet. */
+  setBack: z.enum(['not due', 'asked', 'done']),
   /** The last stop for safety, while the trial is held: who was told, and how far each text got. */
   stop: z
     .object({

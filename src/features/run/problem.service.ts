@@ -5,8 +5,10 @@ import type { ShopScope } from '../../server/db/scope.ts';
 import { AppError } from '../../server/errors.ts';
 import type { Trial } from '../trial/trial.ts';
 import { findTrialOf, type TrialReader } from '../trial/trial-reader.service.ts';
+import { announceProblem } from './announce-problem.service.ts';
 import { beginStretch, type SaidChange } from './change-stretch.service.ts';
 import { insertProblem, settleProblems } from './problem.repository.ts';
+import type { ProblemKind } from './problem-kinds.ts';
 import { touchBoard } from './run.repository.ts';
 import { findRunOf, isBeingRun } from './run-reader.service.ts';
 
@@ -17,6 +19,7 @@ export interface RaiseProblem {
   runId: string | null;
   words: string;
   raisedBy: string | null;
+  kind?: ProblemKind;
 }
 
 /**
@@ -32,8 +35,9 @@ export function raiseProblem(scope: ShopScope, problem: RaiseProblem): Promise<v
     if (run && run.trialId !== trialId) throw new AppError('not-found', { detail: 'run of another trial' });
     if (!(await insertProblem(inner, problem))) return;
     await touchBoard(inner, trialId);
-    const details = { run: run?.number ?? null };
+    const details = { run: run?.number ?? null, problem: problem.kind ?? 'problem' };
     await recordActivity(inner, { kind: 'problem.raised', subjectId: problem.id, trialId, details });
+    if ((problem.kind ?? 'problem') === 'problem') await announceProblem(inner, { ...problem, run });
   });
 }
 

@@ -9,6 +9,7 @@ import { findTrialOf, isReaderAllowed, type TrialReader } from '../trial/trial-r
 import { type TrialActor, transitions } from '../trial/trial-states.ts';
 import type { Board, BoardRun, BoardSetting } from './board.schema.ts';
 import { listOpenProblems } from './problem.repository.ts';
+import { blockingKinds } from './problem-kinds.ts';
 import { readStop } from './read-stop.service.ts';
 import { listReadings } from './readings.repository.ts';
 import { listResultItems } from './result-items.ts';
@@ -18,6 +19,7 @@ import type { Reading, Run } from './run.ts';
 import { eventsOfReader } from './run-event.service.ts';
 import { listOperators } from './run-people.repository.ts';
 import { requirePlan } from './run-reader.service.ts';
+import { readSetBack } from './set-back.repository.ts';
 import { listStretches } from './stretch.repository.ts';
 import { stampOfTexts } from './talk.repository.ts';
 
@@ -116,8 +118,10 @@ export async function readBoard(scope: ShopScope, trialId: string, reader: Trial
     settings: toSettings(plan),
     results: listResultItems(plan.brief),
     runs: runs.map((run) => toBoardRun(run, { runs, readings, names, reader })),
-    problems: problems.map(({ id, run_id, words, raised_by, raised_at }) => ({
+    problems: problems.map(({ id, kind, run_id, words, raised_by, raised_at }) => ({
       id,
+      kind,
+      blocks: blockingKinds.includes(kind),
       runId: run_id,
       runNumber: runs.find((run) => run.id === run_id)?.number ?? null,
       words,
@@ -130,6 +134,7 @@ export async function readBoard(scope: ShopScope, trialId: string, reader: Trial
       words,
       at,
     })),
+    setBack: await readSetBack(scope, trialId),
     stop: state === 'held' ? await readStop(scope, trialId) : null,
     crew: await listOperators(scope),
     minutesPerRun: plan.brief.budget.minutesPerRun ?? null,

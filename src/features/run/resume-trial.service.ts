@@ -7,6 +7,7 @@ import { namesHazard } from '../trial/missing-answers.ts';
 import type { Trial } from '../trial/trial.ts';
 import { listReviewers } from '../trial/trial-people.repository.ts';
 import { findStep, type TrialReader, takeStep } from '../trial/trial-reader.service.ts';
+import { announceResume } from './announce-resume.service.ts';
 import { beginStretch, type SaidChange } from './change-stretch.service.ts';
 import { closeIfLastRun } from './close-trial.service.ts';
 import { insertNote } from './note.repository.ts';
@@ -66,6 +67,7 @@ export async function resumeTrial(
     details: { from: step.from, reason: reason === '' ? null : id },
   });
   if (change) await beginStretch(scope, trial.id, change);
+  if (step.from === 'held') await announceResume(scope, trial.id);
   // All runs may have been typed in while it stood still.
   await closeIfLastRun(scope, trial.id);
 }

@@ -4,6 +4,7 @@ import { findLatestPlan, type StoredPlan } from '../trial/plan.repository.ts';
 import type { Trial } from '../trial/trial.ts';
 import { findTrialOf } from '../trial/trial-reader.service.ts';
 import type { TrialState } from '../trial/trial-states.ts';
+import { settleProblemsOfRun } from './problem.repository.ts';
 import { findRun, type RunChange, touchBoard, updateRun } from './run.repository.ts';
 import type { Run } from './run.ts';
 import { type RunEvent, type RunStep, runStepOf } from './run-states.ts';
@@ -40,6 +41,7 @@ export async function takeRunStep(
   if (!(await updateRun(scope, which, { ...columns, state: step.to }))) {
     throw await runChangedMeanwhile(scope, run.id);
   }
+  if (step.to === 'done' || step.to === 'skipped') await settleProblemsOfRun(scope, run.id);
   await touchBoard(scope, run.trialId);
 }
 

@@ -39,7 +39,7 @@ const runRow = z.object({
   revision: z.number(),
 });
 
-function readRuns(rows: unknown): Run[] {
+export function readRuns(rows: unknown): Run[] {
   return z
     .array(runRow)
     .parse(rows)

@@ -12,4 +12,4 @@ export { readReply } from './read-reply.ts';
 export type { ExpectedItem, Reply, ReplyExpectation, ReplyIntent } from './reply.ts';
 export { replyIntents } from './reply.ts';
 export { type ReservedMeaning, readReservedWord, reservedWords } from './reserved-words.ts';
-export { readRunChoice } from './run-mention.ts';
+export { findRunMention, readRunChoice } from './run-mention.ts';

@@ -117,9 +117,14 @@ describe('a stop for safety', () => {
     expect(texts.map(({ template, state: sent, urgent }) => [template, sent, Boolean(urgent)])).toEqual([
       ['remind', 'cancelled', false],
       ['stopped', 'waiting', true],
+      // Whoever answers for the trial hears of it too.
+      ['stopped', 'waiting', true],
     ]);
     expect(texts[1]?.body).toContain('JAW TEMP 150');
-    expect(stop?.told).toEqual([{ name: 'Ana', text: 'on its way', answeredAt: null }]);
+    expect(stop?.told).toEqual([
+      { name: 'Ana', text: 'on its way', answeredAt: null },
+      { name: 'Dana', text: 'on its way', answeredAt: null },
+    ]);
     // Pressed again by somebody whose page is behind: stopped is stopped.
     await scene.doTrial({ event: 'hold' }, sam);
     expect(await kindsOf(scene, 1)).toEqual(['trial.held']);
