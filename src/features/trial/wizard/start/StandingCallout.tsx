@@ -1,7 +1,9 @@
 import { useTranslation } from 'react-i18next';
+import { ButtonLink } from '../../../../components/ui/ButtonLink.tsx';
 import { Callout } from '../../../../components/ui/Callout.tsx';
 import { formatsFor } from '../../../../i18n/format.ts';
 import type { Language } from '../../../../i18n/languages.ts';
+import { trialAddress } from '../../trial-address.ts';
 import { takesAnswers } from '../../trial-states.ts';
 import { useWizard, type WizardShop } from '../wizard-context.ts';
 import { useStanding } from './standing.tsx';
@@ -43,7 +45,16 @@ export function StandingCallout() {
   }
   if (!takesAnswers(state)) {
     return (
-      <Callout tone="good" live="polite" title={t('start.startedTitle')}>
+      <Callout
+        tone="good"
+        live="polite"
+        title={t('start.startedTitle')}
+        actions={
+          <ButtonLink href={trialAddress({ id: now.trialId, state })} iconEnd="arrow-right">
+            {t('start.openBoard')}
+          </ButtonLink>
+        }
+      >
         {t('start.startedWords')}
       </Callout>
     );
