@@ -143,4 +143,23 @@ describe('the board', () => {
     await page.getByText(/^Not live since/).waitFor({ state: 'detached' });
     await close();
   });
+
+  it('speaks Polish to whoever reads it, and prints a run sheet that fits across the page', async () => {
+    const { page, trialId, complaints, close } = await openBoard();
+    await page.locator('.head-menu summary').first().click();
+    await page.locator('button[name="language"][value="pl"]').click();
+    await page.getByRole('button', { name: 'Stop, zagrożenie' }).waitFor();
+    await look(page, 'pl');
+    await openAwake(page, `${at.running.url}/trials/${trialId}/paper`);
+    await page.emulateMedia({ media: 'print', colorScheme: 'light' });
+    // A landscape A4 page between its margins.
+    await page.setViewportSize({ width: 1047, height: 718 });
+    const cutOff = await page
+      .locator('.run-sheet .table-frame')
+      .evaluate((frame) => frame.scrollWidth - frame.clientWidth);
+    expect(cutOff).toBeLessThanOrEqual(0);
+    await takeShot(page, 'board-paper-pl');
+    expect(complaints).toEqual([]);
+    await close();
+  });
 });
