@@ -29,6 +29,7 @@ const bodies: Record<string, Attempt['body']> = {
     save: '6f1d2c3b-8a4e-4d5f-9b60-7c8d9e0f1a2b',
   }),
   'POST /api/trials/[id]/plan': json({ revision: 1, proposalId: 'any' }),
+  'POST /api/trials/[id]/practice': json({}),
   'POST /api/trials/[id]/events': json({ event: 'start', revision: 1 }),
   'POST /api/runs/[id]/events': json({ event: 'skip', revision: 1, submission: newId() }),
   'POST /api/reviews/[id]/approve': json({ round: 1 }),

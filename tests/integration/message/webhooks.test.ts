@@ -188,7 +188,7 @@ describe('texts that came while nobody listened', () => {
     expect(await catchUpTexts(database(), crew.desk.gateway)).toBe(0);
     await crew.desk.work();
     expect((await inboxTexts()).map(({ body, state, intent }) => [body, state, intent])).toEqual([
-      ['who is this', 'set aside', null],
+      ['who is this', 'set aside', 'unreadable'],
       ['OK', 'read', 'agree'],
     ]);
     expect(await database()('people').where({ id: crew.ana }).first('consent')).toEqual({
