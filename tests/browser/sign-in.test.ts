@@ -59,7 +59,7 @@ describe.each(looks)('the pages to get in, $name', ({ name, ...options }) => {
     expect(await findAccessFaults(page)).toEqual([]);
     await page.fill('#password', sam.password);
     await page.keyboard.press('Enter');
-    await page.waitForURL('**/activity');
+    await page.waitForURL('**/trials');
     await page.goto(`${running.url}/me`);
     await takeShot(page, `me-${name}`);
     expect(await findAccessFaults(page)).toEqual([]);

@@ -1,11 +1,13 @@
 import type { Page } from 'playwright-core';
 import { v7 } from 'uuid';
-import { describe, expect, it } from 'vitest';
+import { beforeAll, describe, expect, it } from 'vitest';
 import { withAppInBrowser } from '../setup/app-in-browser.ts';
 import { findAccessFaults, openAwake, openPage, takeShot, type WatchedPage } from '../setup/browser.ts';
 import { signIn } from '../setup/sign-in.ts';
+import { withoutDemoTrials } from '../setup/without-demo-trials.ts';
 
 const at = withAppInBrowser();
+beforeAll(() => withoutDemoTrials(at.running));
 
 async function openAs(role: 'supervisor' | 'engineer'): Promise<WatchedPage> {
   const watched = await openPage(at.browser);
