@@ -28,7 +28,9 @@ const seen = { revision, submission };
 export const runEventSchema = z.discriminatedUnion('event', [
   z.strictObject({
     event: z.literal('record'),
-    ...seen,
+    submission,
+    /** Left out for a sheet of paper: it was written at the machine, whatever the run was on the board meanwhile. A run that is done refuses it. */
+    revision: revision.optional(),
     figures,
     end,
     /** No more figures are coming. */

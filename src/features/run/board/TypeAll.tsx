@@ -45,9 +45,10 @@ export function TypeAll({ onClose }: { readonly onClose: () => void }) {
     const [fault] = Object.values(read.faults);
     if (fault !== undefined) return fieldSentence(t, fault);
     if (read.figures.length === 0) return null;
-    const seen = { revision: run.revision, submission: v7(), source: 'paper' as const };
+    // Each row that is kept sends the next run out, which changes that run: the sheet stands all the same.
+    const sheet = { submission: v7(), source: 'paper' as const, figures: read.figures };
     try {
-      await runEventCall(run.id, { event: 'record', ...seen, figures: read.figures });
+      await runEventCall(run.id, { event: 'record', ...sheet });
       setTyped(({ [run.id]: __, ...rest }) => rest);
       return null;
     } catch (thrown) {
