@@ -11,15 +11,10 @@ import { findShop } from '../shop/shop.repository.ts';
 import { readFinished } from '../trial/answer-problem.ts';
 import { readStoredAnswers } from '../trial/answers.repository.ts';
 import type { Answers } from '../trial/answers.schema.ts';
+import { settingMarkOf } from '../trial/setting-mark.ts';
 import { findTrialOf } from '../trial/trial-reader.service.ts';
 import { openPhone, type PhoneVisit } from './phone-link.service.ts';
-import type { PhoneMark, PhoneRun, PhoneView } from './phone-view.ts';
-
-function markOf(factor: FactorSpec, coded: number): PhoneMark {
-  if (factor.kind === 'choice') return coded > 0 ? 'second' : 'first';
-  if (coded === 0) return 'middle';
-  return coded > 0 ? 'high' : 'low';
-}
+import type { PhoneRun, PhoneView } from './phone-view.ts';
 
 /** What this person has in hand: a run to make first, else one that waits for their reading. */
 export function findOwnRun(runs: readonly Run[], personId: string): Run | null {
@@ -51,7 +46,7 @@ function toPhoneRun(run: Run, runs: readonly Run[], factors: readonly FactorSpec
       name: factor.panelName ?? factor.name,
       value: run.planned[place] ?? '',
       unit: factor.kind === 'number' ? factor.unit : '',
-      mark: markOf(factor, run.coded[place] ?? 0),
+      mark: settingMarkOf(factor, run.coded[place] ?? 0),
     })),
     ...settling(run, before, factors),
   };

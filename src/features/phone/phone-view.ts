@@ -1,9 +1,7 @@
 import type { Language } from '../../i18n/languages.ts';
 import type { ResultItem } from '../run/result-items.ts';
 import type { HazardName, StopRule } from '../trial/answer-choices.ts';
-
-/** Where a number stands in its window, or which of its two names a choice has. */
-export type PhoneMark = 'low' | 'middle' | 'high' | 'first' | 'second';
+import type { SettingMarkName } from '../trial/setting-mark.ts';
 
 /** A run as its person sees it on the phone. */
 export interface PhoneRun {
@@ -11,7 +9,7 @@ export interface PhoneRun {
   number: number;
   state: 'asked' | 'made' | 'doubtful';
   revision: number;
-  settings: { name: string; value: number | string; unit: string; mark: PhoneMark }[];
+  settings: { name: string; value: number | string; unit: string; mark: SettingMarkName }[];
   /** Minutes to wait and parts to throw away before parts count; 0: none. */
   waitMinutes: number;
   throwAway: number;

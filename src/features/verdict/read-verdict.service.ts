@@ -1,3 +1,4 @@
+import { usualValues } from '../../lib/doe/index.ts';
 import { rolesMay } from '../../server/auth/permissions.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
 import { findShop } from '../shop/shop.repository.ts';
@@ -67,9 +68,7 @@ export async function readVerdict(
     panelNames: brief.factors.map(({ panelName, name }) => panelName ?? name),
     units: brief.factors.map((factor) => (factor.kind === 'number' ? factor.unit : '')),
     runs: verdict.facts.runs,
-    usual: brief.factors.map((factor) =>
-      factor.kind === 'choice' ? (factor.usual === 'high' ? factor.high : factor.low) : factor.usual,
-    ),
+    usual: usualValues(brief),
     ...safety,
     // The reader's own language first, else the one it was written in.
     stop: {

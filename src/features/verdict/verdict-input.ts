@@ -4,6 +4,8 @@ import {
   analyze,
   type Brief,
   encode,
+  letterAt,
+  meanOfParts,
   type PlannedRun,
   type Proposal,
   type ResponseSpec,
@@ -18,10 +20,6 @@ const scaleOf: Record<ResponseSpec['kind'], Scale> = {
   flaws: 'sqrt',
 };
 
-const letterAt = (place: number) => String.fromCharCode(65 + place);
-
-const mean = (values: readonly number[]) => values.reduce((sum, value) => sum + value, 0) / values.length;
-
 /** The figure of one run for one result, as the core takes it. */
 export function figureOf(
   spec: ResponseSpec,
@@ -30,7 +28,8 @@ export function figureOf(
   if (spec.kind === 'measured') {
     const parts = [...readings].sort((a, b) => a.part - b.part).flatMap(({ value }) => value ?? []);
     if (parts.length === 0) return { y: null };
-    return parts.length > 1 ? { y: mean(parts), parts } : { y: mean(parts) };
+    const y = meanOfParts(parts);
+    return parts.length > 1 ? { y, parts } : { y };
   }
   const [reading] = readings;
   const count = reading?.rejects ?? reading?.value ?? null;

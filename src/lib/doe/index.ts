@@ -8,6 +8,7 @@ export { type CheckReadings, judgeConfirmation } from './advice/judge-confirmati
 export { checkGroups, layOutCheckRuns } from './advice/lay-out-check-runs.ts';
 export { type Look, lookAtSettings } from './advice/look-at-settings.ts';
 export type { ResultInput } from './advice/result-model.ts';
+export { usualValues } from './advice/usual-settings.ts';
 export {
   type BestBet,
   bestBetSchema,
@@ -22,6 +23,7 @@ export { AnalysisError } from './analysis/analysis.ts';
 export { analyze } from './analysis/analyze.ts';
 export { type BoxCox, fitBoxCox } from './analysis/box-cox.ts';
 export { checkGauge, type GaugeCheck } from './analysis/check-gauge.ts';
+export { meanOfParts } from './analysis/mean-of-parts.ts';
 export { halfNormalScores, normalScores, type PlottingPosition } from './analysis/plot-scores.ts';
 export { type Prediction, predict } from './analysis/predict.ts';
 export { analyzeSteadiness } from './analysis/steadiness.ts';
@@ -51,6 +53,7 @@ export { errorPlanSchema, proposalSchema } from './design/proposal-schema.ts';
 export { proposePlans } from './design/propose-plans.ts';
 export { suggestWorthHaving } from './design/suggest-worth-having.ts';
 export { countTimeAndMoney } from './design/time-and-money.ts';
+export { letterAt } from './design/words.ts';
 export * from './distributions/index.ts';
 export * from './facts.ts';
 export { coreVersion } from './version.ts';

@@ -1,9 +1,9 @@
 import { useTranslation } from 'react-i18next';
-import type { SettingMarkKind } from '../../../components/ui/SettingMark.tsx';
 import { SmallTag } from '../../../components/ui/SmallTag.tsx';
 import { formatsFor } from '../../../i18n/format.ts';
 import type { Language } from '../../../i18n/languages.ts';
 import type { FactorSpec, PlannedRun } from '../../../lib/doe/index.ts';
+import { settingMarkOf } from '../setting-mark.ts';
 
 interface Props {
   readonly runs: readonly PlannedRun[];
@@ -12,12 +12,6 @@ interface Props {
 
 const mostTags = 5;
 const mostSettings = 5;
-
-function markOf(factor: FactorSpec, coded: number): SettingMarkKind {
-  if (factor.kind === 'choice') return coded > 0 ? 'second' : 'first';
-  if (coded === 0) return 'middle';
-  return coded > 0 ? 'high' : 'low';
-}
 
 /** The first runs as small tags with the shop's own names. */
 export function SketchRack({ runs, factors }: Props) {
@@ -30,7 +24,7 @@ export function SketchRack({ runs, factors }: Props) {
         {runs.slice(0, mostTags).map((run) => {
           const settings = shown.map((factor, place) => ({
             name: factor.name,
-            mark: markOf(factor, run.coded[place] ?? 0),
+            mark: settingMarkOf(factor, run.coded[place] ?? 0),
           }));
           const spoken = factors.map((factor, place) => {
             const value = run.actual[place] ?? '';

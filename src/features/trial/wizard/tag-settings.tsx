@@ -1,15 +1,9 @@
 import type { TagSetting } from '../../../components/ui/JobTag.tsx';
-import type { SettingMarkKind } from '../../../components/ui/SettingMark.tsx';
 import type { Formats } from '../../../i18n/format.ts';
 import type { SettingAnswer } from '../answers.schema.ts';
 import type { PublicPlan } from '../plan.schema.ts';
+import { settingMarkOf } from '../setting-mark.ts';
 import { panelNameOf } from './setting-words.ts';
-
-function markOf({ kind }: SettingAnswer, coded: number): SettingMarkKind {
-  if (kind === 'choice') return coded > 0 ? 'second' : 'first';
-  if (coded === 0) return 'middle';
-  return coded > 0 ? 'high' : 'low';
-}
 
 /** What stands on the tag of one run of a plan. */
 export function tagSettingsOf(
@@ -29,7 +23,7 @@ export function tagSettingsOf(
       name: panelNameOf(setting),
       value: typeof value === 'number' ? number(value) : value,
       ...(unit ? { unit } : {}),
-      mark: markOf(setting, run.coded[place] ?? 0),
+      mark: settingMarkOf(setting, run.coded[place] ?? 0),
     };
   });
 }

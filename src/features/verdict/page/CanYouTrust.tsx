@@ -1,11 +1,12 @@
 import type { ReactNode } from 'react';
+import { letterAt } from '../../../lib/doe/index.ts';
 import { movedPlaces } from '../headline-words.ts';
 import { resultWords } from '../result-words.ts';
 import { listSettings, termName } from '../setting-words.ts';
 import { sayFact } from '../verdict-words.ts';
 import { capitalize, sentences } from '../wording.ts';
 import { Numbered } from './Numbered.tsx';
-import { factsOf, keepsToday, letterAt, type PageWording } from './page-wording.ts';
+import { factsOf, keepsToday, type PageWording } from './page-wording.ts';
 
 /** "Jaw temp: Clear. Dwell: Likely." for each setting that has an effect. */
 function saySure(wording: PageWording): string {
@@ -35,14 +36,14 @@ function sayGuess(wording: PageWording): string | null {
     ),
   );
   const guessed = movedPlaces(view)
-    .map(letterAt)
+    .map((place) => letterAt(place))
     .filter((letter) => !known.has(letter));
   if (guessed.length === 0 || keepsToday(view) || view.verdict.settings.length === 0) return null;
   const settings = capitalize(listSettings(wording, guessed));
   return t('verdict-page:trust.guess', { count: guessed.length, settings });
 }
 
-/** How long the check runs take, as far as anybody said how long a run takes. */
+/** How long the check runs take, where it was said how long a run takes. */
 function sayTime({ view, t }: PageWording, runs: number): string | null {
   const minutes = (view.brief.budget.minutesPerRun ?? 0) * runs;
   if (!(minutes > 0)) return null;

@@ -2,6 +2,7 @@ import { Callout } from '../../../components/ui/Callout.tsx';
 import { Table, type TableColumn } from '../../../components/ui/Table.tsx';
 import type { Formats } from '../../../i18n/format.ts';
 import type { Translate } from '../../../i18n/translator.ts';
+import { meanOfParts } from '../../../lib/doe/index.ts';
 import { resultWords } from '../result-words.ts';
 import { sayRunningFact } from '../running-words.ts';
 import type { RunningView, ViewedRun } from '../verdict-view.ts';
@@ -24,7 +25,7 @@ export function RunningBody({ view, t, formats }: Props) {
       return end === 'failed' || end === 'beyondGauge'
         ? t(`verdict-page:end.${end}`)
         : t('verdict-page:running.waiting');
-    const mean = main.reduce((sum, part) => sum + part, 0) / main.length;
+    const mean = meanOfParts(main);
     return figure(spec.kind === 'rejects' ? mean / (spec.lotSize ?? 1) : mean, { manner: 'fine' });
   };
   const columns: TableColumn<ViewedRun>[] = [

@@ -1,10 +1,11 @@
 import { SettingTrack } from '../../../components/ui/SettingTrack.tsx';
 import type { NumberFactor } from '../../../lib/doe/index.ts';
+import { letterAt } from '../../../lib/doe/index.ts';
 import { movedPlaces } from '../headline-words.ts';
 import { sayRange, sayValue } from '../setting-words.ts';
 import { sayFact } from '../verdict-words.ts';
 import { Numbered } from './Numbered.tsx';
-import { factsOf, keepsToday, letterAt, type PageWording } from './page-wording.ts';
+import { factsOf, keepsToday, type PageWording } from './page-wording.ts';
 
 interface MovedProps {
   readonly wording: PageWording;

@@ -26,8 +26,3 @@ export function factsOf<Kind extends AdviceFact['kind']>(
 export function keepsToday({ bet, confirmation }: Pick<VerdictView, 'bet' | 'confirmation'>): boolean {
   return bet.keepToday || confirmation?.outcome === 'fellShort';
 }
-
-/** The letter of the setting at a place. */
-export function letterAt(place: number): string {
-  return String.fromCharCode(65 + place);
-}

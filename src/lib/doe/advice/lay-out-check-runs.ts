@@ -2,7 +2,7 @@ import type { Brief } from '../brief.ts';
 import { setDials } from '../design/dial.ts';
 import type { PlannedRun } from '../design/proposal.ts';
 import { createUniformSource } from '../random/random-numbers.ts';
-import { usualSettings } from './usual-settings.ts';
+import { usualSettings, usualValues } from './usual-settings.ts';
 
 /** What a check run is made at: the settings to try, or the usual ones. Kept as the run's `group`. */
 export const checkGroups = { best: 'best', usual: 'usual' } as const;
@@ -47,8 +47,6 @@ export function layOutCheckRuns(
 function usualOnDial(brief: Brief): { coded: number[]; actual: (number | string)[] } {
   return {
     coded: usualSettings(brief),
-    actual: brief.factors.map((factor) =>
-      factor.kind === 'choice' ? (factor.usual === 'high' ? factor.high : factor.low) : factor.usual,
-    ),
+    actual: usualValues(brief),
   };
 }

@@ -7,3 +7,10 @@ export function usualSettings(brief: Brief): number[] {
     factor.kind === 'choice' ? (factor.usual === 'high' ? 1 : -1) : encode(factor, factor.usual),
   );
 }
+
+/** The same on the dials: numbers in their unit, choices by name. */
+export function usualValues({ factors }: Pick<Brief, 'factors'>): (number | string)[] {
+  return factors.map((factor) =>
+    factor.kind === 'choice' ? (factor.usual === 'high' ? factor.high : factor.low) : factor.usual,
+  );
+}

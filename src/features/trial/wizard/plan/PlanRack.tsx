@@ -1,10 +1,10 @@
 import { useTranslation } from 'react-i18next';
 import { Disclosure } from '../../../../components/ui/Disclosure.tsx';
-import type { SettingMarkKind } from '../../../../components/ui/SettingMark.tsx';
 import { SmallTag } from '../../../../components/ui/SmallTag.tsx';
 import { formatsFor } from '../../../../i18n/format.ts';
 import type { Language } from '../../../../i18n/languages.ts';
 import type { FactorSpec, PlannedRun } from '../../../../lib/doe/index.ts';
+import { settingMarkOf } from '../../setting-mark.ts';
 
 interface Props {
   readonly factors: readonly FactorSpec[];
@@ -14,12 +14,6 @@ interface Props {
 const mostTags = 4;
 const mostSettings = 5;
 
-function markOf(factor: FactorSpec, coded: number): SettingMarkKind {
-  if (factor.kind === 'choice') return coded > 0 ? 'second' : 'first';
-  if (coded === 0) return 'middle';
-  return coded > 0 ? 'high' : 'low';
-}
-
 /** The runs of a plan as small tags with the shop's own names: a few in view, all when opened. */
 export function PlanRack({ factors, runs }: Props) {
   const { t, i18n } = useTranslation('wizard-plan');
@@ -28,7 +22,7 @@ export function PlanRack({ factors, runs }: Props) {
   const tag = (run: PlannedRun) => {
     const settings = factors.slice(0, mostSettings).map((factor, place) => ({
       name: factor.name,
-      mark: markOf(factor, run.coded[place] ?? 0),
+      mark: settingMarkOf(factor, run.coded[place] ?? 0),
     }));
     const spoken = factors.map((factor, place) => {
       const value = run.actual[place] ?? '';
