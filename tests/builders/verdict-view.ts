@@ -3,7 +3,6 @@ import {
   type AnalysisRun,
   analyze,
   type Brief,
-  bestBet,
   type CheckReadings,
   judge,
   judgeConfirmation,
@@ -14,6 +13,7 @@ import {
   type ResponseSpec,
   type ResultInput,
   type Scale,
+  settingsToTry,
 } from '../../src/lib/doe/index.ts';
 import { createNormalSource } from '../../src/lib/doe/random/normal-numbers.ts';
 import { createUniformSource } from '../../src/lib/doe/random/random-numbers.ts';
@@ -94,7 +94,7 @@ export function resultsOf({ brief, plan, readings }: MadeTrial): ResultInput[] {
 export function makeView(trial: MadeTrial): VerdictView {
   const { brief, plan, readings, checks, more } = trial;
   const results = resultsOf(trial);
-  const bet = bestBet(brief, results);
+  const bet = settingsToTry(brief, results);
   return {
     trialId: '0190b6d2-0000-7000-8000-000000000001',
     number: 7,

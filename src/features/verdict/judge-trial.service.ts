@@ -1,7 +1,6 @@
 import {
   AnalysisError,
   type Brief,
-  bestBet,
   type ConfirmationVerdict,
   coreVersion,
   judge,
@@ -9,6 +8,7 @@ import {
   type Proposal,
   type ResultInput,
   readCheckRuns,
+  settingsToTry,
 } from '../../lib/doe/index.ts';
 import { hashOf } from '../trial/reviewed-hash.service.ts';
 import type { JudgedRun, VerdictFacts } from './stored-verdict.ts';
@@ -94,7 +94,7 @@ export function judgeTrial(trial: TrialToJudge): Judgement | null {
     const results = toResultInputs(brief, proposal, runs);
     const [main] = results;
     if (!main) return null;
-    const bet = bestBet(brief, results);
+    const bet = settingsToTry(brief, results);
     return {
       inputHash: hashInput(trial),
       coreVersion,

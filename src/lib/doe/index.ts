@@ -8,6 +8,7 @@ export { type CheckReadings, judgeConfirmation } from './advice/judge-confirmati
 export { checkGroups, layOutCheckRuns } from './advice/lay-out-check-runs.ts';
 export { type Look, lookAtSettings } from './advice/look-at-settings.ts';
 export type { ResultInput } from './advice/result-model.ts';
+export { settingsToTry } from './advice/settings-to-try.ts';
 export { usualValues } from './advice/usual-settings.ts';
 export {
   type BestBet,

@@ -1,2 +1,2 @@
 /** Rises when the same brief or the same readings would give another plan, layout or verdict; stored beside each of them. */
-export const coreVersion = '1';
+export const coreVersion = '2';

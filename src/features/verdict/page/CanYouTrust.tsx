@@ -4,7 +4,7 @@ import { movedPlaces } from '../headline-words.ts';
 import { resultWords } from '../result-words.ts';
 import { listSettings, termName } from '../setting-words.ts';
 import { sayFact } from '../verdict-words.ts';
-import { capitalize, sentences } from '../wording.ts';
+import { capitalize, sayRuns, sentences } from '../wording.ts';
 import { Numbered } from './Numbered.tsx';
 import { factsOf, keepsToday, type PageWording } from './page-wording.ts';
 
@@ -76,11 +76,13 @@ export function CanYouTrust({ checkRuns, ...wording }: Props) {
   );
   const sure = sentences([saySure(wording), sayGuess(wording)]);
   const [check] = confirmation ? [] : factsOf(verdict.next, 'check-runs');
+  const [odd] = factsOf(verdict.next, 'measure-again');
+  const again = odd ? t('verdict-page:trust.first', { runs: sayRuns(wording, odd.refs.runs ?? []) }) : null;
   return (
     <Numbered number={3} id="can-you-trust" title={t('verdict-page:part.trust')}>
       {confirmation && sayCheckGain(wording)}
       {sure !== '' && <p>{sure}</p>}
-      <p>{sentences(said.map((fact) => sayFact(fact, wording)))}</p>
+      <p>{sentences([...said.map((fact) => sayFact(fact, wording)), again])}</p>
       {check && (
         <div className="verdict-action">
           {checkRuns}

@@ -4,7 +4,7 @@ import { listDials, movedPlaces } from '../headline-words.ts';
 import { resultWords } from '../result-words.ts';
 import { sentences } from '../wording.ts';
 import { Numbered } from './Numbered.tsx';
-import type { PageWording } from './page-wording.ts';
+import { keepsToday, type PageWording } from './page-wording.ts';
 
 export const hazardSigns: Record<HazardName, Hazard> = {
   hotParts: 'hot',
@@ -35,7 +35,9 @@ function sayTriggers(wording: PageWording): string[] {
   if (triggers.length > 0) return triggers;
   const { figure, spec } = resultWords(wording);
   const now = figure(view.bet.predicted - view.bet.versusUsual, { interval: view.bet.interval });
-  return [t('verdict-page:wrong.worse', { result: spec.name, now })];
+  if (spec.goal !== 'target') return [t('verdict-page:wrong.worse', { result: spec.name, now })];
+  const target = figure(spec.target ?? 0, { manner: 'fine' });
+  return [t('verdict-page:wrong.further', { result: spec.name, target, now })];
 }
 
 /** The hazards that were ticked, each with its cautions in place. */
@@ -71,7 +73,8 @@ export function CallLines({ view, t }: PageWording) {
 
 export function IfItGoesWrong(wording: PageWording) {
   const { view, t } = wording;
-  const moved = movedPlaces(view);
+  // Where nothing is to be moved, all settings are those to go back to.
+  const moved = keepsToday(view) ? [] : movedPlaces(view);
   const places = moved.length > 0 ? moved : view.usual.map((_, place) => place);
   const rules = [...view.stop.picked.map((rule) => t(`safety:stop.${rule}`)), view.stop.own].filter(
     (words) => words !== '',

@@ -1,6 +1,6 @@
 import { listDials, movedPlaces } from '../headline-words.ts';
 import { resultWords } from '../result-words.ts';
-import { capitalize } from '../wording.ts';
+import { capitalize, sayRuns } from '../wording.ts';
 import { factsOf, keepsToday, type PageWording } from './page-wording.ts';
 
 /** Three sentences that can be read out as they stand: what we did, what we found, what comes next. */
@@ -35,7 +35,7 @@ function sayFound(wording: PageWording): string {
       const { spec, roughChange } = resultWords(wording);
       const { bet } = view;
       return capitalize(
-        t('verdict-page:boss.gain', {
+        t(`verdict-page:boss.${gainKey(view)}`, {
           settings: listDials(wording, bet.actual, movedPlaces(view), 'at'),
           result: spec.name,
           change: roughChange(bet.versusUsual, bet.gainInterval),
@@ -45,13 +45,22 @@ function sayFound(wording: PageWording): string {
   }
 }
 
-function sayPlan({ view, t }: PageWording): string {
+/** A gain is spoken of as surely as it is known: the check runs have the last word. */
+function gainKey({ confirmation, verdict }: PageWording['view']): 'gain' | 'maybe' | 'looked' {
+  if (confirmation) return confirmation.outcome === 'held' ? 'gain' : 'looked';
+  return verdict.headline.kind === 'clear-gain' ? 'gain' : 'maybe';
+}
+
+function sayPlan(wording: PageWording): string {
+  const { view, t } = wording;
   const { confirmation, verdict } = view;
   if (confirmation?.outcome === 'held') return t('verdict-page:boss.held');
   if (confirmation?.outcome === 'fellShort') return t('verdict-page:boss.fellShort');
   if (confirmation) return t('verdict-page:boss.notSure', { count: confirmation.furtherPairs });
   if (factsOf(verdict.next, 'narrow-range').length > 0) return t('verdict-page:boss.narrow');
   if (factsOf(verdict.next, 'run-missing-now').length > 0) return t('verdict-page:boss.missing');
+  const [again] = factsOf(verdict.next, 'measure-again');
+  if (again) return t('verdict-page:boss.again', { runs: sayRuns(wording, again.refs.runs ?? []) });
   const [check] = factsOf(verdict.next, 'check-runs');
   return check && !keepsToday(view)
     ? t('verdict-page:boss.check', { count: 2 * check.values.each })

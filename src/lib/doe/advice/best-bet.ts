@@ -5,6 +5,7 @@ import { type Belief, beliefOf } from './belief.ts';
 import { listCandidates } from './candidates.ts';
 import { chooseSettings } from './choose-settings.ts';
 import { type Failures, findFailures, joinFailures } from './failures.ts';
+import { leaveAsUsual } from './leave-as-usual.ts';
 import { modelResult, type ResultInput, type ResultModel } from './result-model.ts';
 import { usualSettings } from './usual-settings.ts';
 import type { BestBet, Outlook } from './verdict.ts';
@@ -34,11 +35,16 @@ export function bestBet(brief: Brief, results: readonly ResultInput[]): BestBet 
   );
 }
 
-/** The same with models that are already there. */
+/**
+ * The same with models that are already there.
+ *
+ * @param mayStay places of settings that the readings say are not worth moving: each stays as usual, as long as all that stay give up too little to care about
+ */
 export function betWithModels(
   brief: Brief,
   results: readonly ResultInput[],
   models: readonly ResultModel[],
+  mayStay: readonly number[] = [],
 ): BestBet {
   const [result] = results;
   const [main] = models;
@@ -54,15 +60,25 @@ export function betWithModels(
     brief.forbidden.length > 0 ||
     failures.runs.length > 0 ||
     models.some(({ spec }) => spec.lower !== undefined || spec.upper !== undefined);
-  const candidates = listCandidates({ brief, model: main, usual, failures, tested, onlyTested, constrained });
+  const candidatesWith = (stay: ReadonlySet<number>) =>
+    listCandidates({ brief, model: main, usual, failures, tested, onlyTested, constrained, stay });
+  const candidates = candidatesWith(new Set());
   const question = { brief, models, usual, candidates, failures, mayMix: false, tolerance: 0 };
   const bold = chooseSettings(question);
   const hoped = Math.abs(main.expected(bold.x) - main.expected(usual));
   const mayMix = !onlyTested && brief.response.goal !== 'target';
-  const { x, limitsHold } = chooseSettings({
+  const chosen = chooseSettings({
     ...question,
     mayMix,
     tolerance: NOT_WORTH_MOVING * Math.max(worth ?? 0, hoped),
+  });
+  const { x, limitsHold } = leaveAsUsual({
+    ...question,
+    mayMix,
+    chosen,
+    mayStay,
+    candidatesWith,
+    worth: worth ?? 0,
   });
   const { coded, actual } = setDials(brief, x);
 
@@ -137,7 +153,8 @@ export function lookAt(question: {
   };
   const moved = (by: number) => scale.toUnit(start + by) - scale.toUnit(start);
   const [low, high] = change.interval();
-  const ofPart = spec.limitFor === 'part' ? beliefOf(model.level(coded), model.partNoise) : null;
+  const ofPart =
+    spec.limitFor === 'part' || model.knowsParts ? beliefOf(model.level(coded), model.partNoise) : null;
   return {
     result,
     predicted: scale.toUnit(level.mean),

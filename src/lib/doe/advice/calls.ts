@@ -2,6 +2,7 @@ import type { Analysis, TermEstimate } from '../analysis/analysis.ts';
 import { lettersOf } from '../analysis/terms.ts';
 import type { Fact } from '../facts.ts';
 import type { ResponseScale } from './response-scale.ts';
+import type { ResultInput, ResultModel } from './result-model.ts';
 
 /** *clear*: with all effects of the result judged together; *likely*: alone; *not*: neither. */
 export type Sure = 'clear' | 'likely' | 'not';
@@ -46,6 +47,20 @@ export interface CallContext {
   result: number;
   /** Whether the middle may be off the line: then a number setting is never said to make no difference. */
   bendPossible: boolean;
+}
+
+export function callContextOf({ analysis, spec }: ResultInput, { scale }: ResultModel): CallContext {
+  const worthHaving = scale.worthHaving(spec, analysis.intercept.coefficient) ?? 0;
+  // Everything but an interval of the bend inside -W..W.
+  const bend = analysis.curvature?.ci;
+  return {
+    analysis,
+    scale,
+    worthHaving,
+    worthInUnit: spec.worthHaving ?? 0,
+    result: 0,
+    bendPossible: bend == null || Math.max(-bend[0], bend[1]) >= worthHaving,
+  };
 }
 
 export function callOf(term: TermEstimate, context: CallContext): Call {

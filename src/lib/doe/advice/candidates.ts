@@ -15,18 +15,26 @@ export interface CandidateQuestion {
   onlyTested: boolean;
   /** Some result has limits, or some combinations are ruled out. */
   constrained: boolean;
+  /** Places of the settings that stay as usual. */
+  stay: ReadonlySet<number>;
 }
 
 /** Settings that may be proposed: inside the tested range, never forbidden, away from failures, on the dials' steps. Usual settings come first. */
 export function listCandidates(question: CandidateQuestion): number[][] {
-  const { brief, usual, failures, tested, onlyTested } = question;
-  const allowed = (x: readonly number[]) => !isForbidden(brief, x) && !failures.excludes(x);
+  const { brief, usual, failures, tested, onlyTested, stay } = question;
+  const stays = (x: readonly number[]) =>
+    x.every((value, place) => !stay.has(place) || value === usual[place]);
+  const allowed = (x: readonly number[]) => stays(x) && !isForbidden(brief, x) && !failures.excludes(x);
+  const levels = (place: number, others: readonly number[]) =>
+    stay.has(place) ? [usual[place] ?? 0] : others;
   const start = [[...usual]];
   if (onlyTested) return [...start, ...distinct(tested).filter(allowed)];
-  const corners = gridOf(brief.factors.map(() => [-1, 1])).filter(allowed);
+  const corners = gridOf(brief.factors.map((_, place) => levels(place, [-1, 1]))).filter(allowed);
   if (question.constrained)
     // Where limits or rules bind, a setting left as it is may be the best way to keep them.
-    start.push(...gridOf(usual.map((value) => [...new Set([-1, value, 1])])).filter(allowed));
+    start.push(
+      ...gridOf(usual.map((value, place) => levels(place, [...new Set([-1, value, 1])]))).filter(allowed),
+    );
   if (brief.response.goal !== 'target') return [...start, ...corners];
   return [...start, ...corners, ...pointsOnTarget(question, corners).filter(allowed)];
 }
@@ -34,12 +42,12 @@ export function listCandidates(question: CandidateQuestion): number[][] {
 /**
  * Points on the edges of the cube at which the target is expected: along an edge the result is a straight line, so one division finds the setting.
  */
-function pointsOnTarget({ brief, model }: CandidateQuestion, corners: readonly number[][]): number[][] {
+function pointsOnTarget({ brief, model, stay }: CandidateQuestion, corners: readonly number[][]): number[][] {
   const target = model.scale.fromUnit(brief.response.target ?? 0);
   const constant = meanOf(model, corners[0] ?? []);
   return corners.flatMap((corner) =>
     brief.factors.flatMap((factor, place) => {
-      if (factor.kind !== 'number' || (corner[place] ?? 0) > 0) return [];
+      if (factor.kind !== 'number' || (corner[place] ?? 0) > 0 || stay.has(place)) return [];
       const low = constant + model.expected(corner);
       const high = constant + model.expected(corner.with(place, 1));
       const share = (target - low) / (high - low);

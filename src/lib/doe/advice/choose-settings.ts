@@ -46,7 +46,10 @@ export function chooseSettings(question: ChoiceQuestion): Choice {
 }
 
 /** Bigger is better: the expected figure the good way; for a target minus the root of the expected squared distance. */
-function meritOf({ brief, models }: ChoiceQuestion): (x: readonly number[]) => number {
+export function meritOf({
+  brief,
+  models,
+}: Pick<ChoiceQuestion, 'brief' | 'models'>): (x: readonly number[]) => number {
   const [main] = models;
   if (main === undefined) throw new RangeError('chooseSettings: models must not be empty');
   const { goal, target } = brief.response;

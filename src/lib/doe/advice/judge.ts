@@ -2,14 +2,14 @@ import { analyzeSteadiness } from '../analysis/steadiness.ts';
 import type { Brief } from '../brief.ts';
 import type { PlannedRun } from '../design/proposal.ts';
 import type { Fact } from '../facts.ts';
-import { betWithModels } from './best-bet.ts';
-import { type CallContext, callFact, callOf, decideCall, uncalledFact } from './calls.ts';
+import { type CallContext, callContextOf, callFact, callOf, decideCall, uncalledFact } from './calls.ts';
 import { findFailures, joinFailures } from './failures.ts';
 import { chooseHeadline } from './headline.ts';
 import { listNextSteps } from './next-steps.ts';
 import { dependsOnPartner, likeliestMember, pairCorners } from './pairs.ts';
 import { modelResult, type ResultInput } from './result-model.ts';
-import { isBendPossible, listTrust, missingRuns } from './trust.ts';
+import { tryWithModels } from './settings-to-try.ts';
+import { listTrust, missingRuns } from './trust.ts';
 import type { Verdict } from './verdict.ts';
 import { listWatched } from './watched.ts';
 import { runsToSettle } from './would-settle.ts';
@@ -34,16 +34,8 @@ export function judge(brief: Brief, plan: readonly PlannedRun[], results: readon
   const failuresOf = results.map(({ input }) => findFailures(input.runs));
   const failures = failuresOf[0] ?? joinFailures([]);
   const missing = missingRuns(main, failures);
-  const worthHaving = model.scale.worthHaving(main.spec, main.analysis.intercept.coefficient) ?? 0;
-  const context: CallContext = {
-    analysis: main.analysis,
-    scale: model.scale,
-    worthHaving,
-    worthInUnit: main.spec.worthHaving ?? 0,
-    result: 0,
-    bendPossible: isBendPossible(main, worthHaving),
-  };
-  const bet = betWithModels(brief, results, models);
+  const context = callContextOf(main, model);
+  const bet = tryWithModels(brief, results, models, context);
   const judged = failures.runs.length === 0;
   const settings = judged ? callSettings(brief, context) : [];
   const pairs = judged ? callPairs(context) : [];

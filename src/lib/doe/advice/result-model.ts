@@ -27,6 +27,8 @@ export interface ResultModel {
   limitsHold(x: readonly number[]): number | null;
   /** Noise of one single part instead of a run's mean, in units of the noise variance. */
   partNoise: number;
+  /** Whether the readings show how single parts differ. */
+  knowsParts: boolean;
 }
 
 /** The model that picks settings: shrunken effects, so that luck in the readings is not mistaken for gain. */
@@ -60,6 +62,7 @@ export function modelResult(brief: Brief, result: ResultInput): ResultModel {
     scale,
     posterior,
     partNoise,
+    knowsParts: analysis.within !== undefined,
     expected(x) {
       let sum = 0;
       for (let term = 0; term < places.length; term++)

@@ -107,12 +107,6 @@ function noise({ brief, result }: TrustQuestion): Fact[] {
   return facts;
 }
 
-/** Whether the middle may be off the line: everything but an interval of the bend inside -W..W. */
-export function isBendPossible({ analysis }: ResultInput, worthHaving: number): boolean {
-  const ci = analysis.curvature?.ci;
-  return ci == null || Math.max(-ci[0], ci[1]) >= worthHaving;
-}
-
 function bend(context: CallContext, { analysis, input }: ResultInput): Fact[] {
   const { curvature } = analysis;
   if (!input.factors.some((factor) => factor.kind === 'number')) return [];
