@@ -48,6 +48,12 @@ export const fieldCodes = [
   'no-plan-fits',
   'unknown-field',
   'does-not-fit',
+  'not-a-trial-file',
+  'unknown-version',
+  'twice',
+  'points-nowhere',
+  'one-each',
+  'does-not-follow',
 ] as const;
 export type FieldCode = (typeof fieldCodes)[number];
 

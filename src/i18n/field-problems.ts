@@ -22,6 +22,7 @@ function describeIssue(issue: Issue): { code: FieldCode; values?: { limit: numbe
     case 'invalid_format':
       return { code: issue.format === 'email' ? 'not-an-email' : 'does-not-fit' };
     case 'invalid_value':
+      return { code: isFieldCode(issue.message) ? issue.message : 'not-a-choice' };
     case 'invalid_union':
       return { code: 'not-a-choice' };
     case 'unrecognized_keys':

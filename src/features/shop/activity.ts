@@ -28,6 +28,7 @@ export const activityKinds = [
   'session.ended',
   'sessions.ended',
   'trial.added',
+  'trial.imported',
   'trial.deleted',
   'trial.put-away',
   'trial.taken-out',

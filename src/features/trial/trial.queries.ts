@@ -1,6 +1,7 @@
 import { queryOptions } from '@tanstack/react-query';
 import { z } from 'zod';
 import { callServer } from '../../components/island/call-server.ts';
+import { type ImportedTrial, importedTrialSchema } from '../audit/pack/imported-trial.schema.ts';
 import {
   type AddComment,
   type PublicReview,
@@ -54,6 +55,12 @@ export function deleteTrialCall(trial: Pick<PublicTrial, 'id' | 'revision'>): Pr
 /** Puts a trial away, or takes it out again. */
 export function changeTrialCall(trialId: string, body: ChangeTrial): Promise<PublicTrial> {
   return callServer(pathOf(trialId), { method: 'PATCH', body, output: publicTrialSchema });
+}
+
+/** Brings a trial in from a file that any shop took out. */
+export function importTrialCall(file: Blob): Promise<ImportedTrial> {
+  const body = new Blob([file], { type: 'application/json' });
+  return callServer('/api/trials/import', { method: 'POST', body, output: importedTrialSchema });
 }
 
 /** @param query as the address of the list has it: search, state, show, sort, direction, after, limit */
