@@ -40,6 +40,7 @@ const visits: Visit[] = [
   { file: 'invite/[token].astro', path: '/invite/a-link-that-never-was', as: 'nobody', status: 410 },
   { file: 'setup/[token].astro', path: '/setup/a-link-that-never-was', as: 'nobody', status: 410 },
   { file: 't/[token].astro', path: '/t/a-link-that-never-was', as: 'nobody', status: 410 },
+  { file: 's/[token].astro', path: '/s/a-link-that-never-was', as: 'nobody', status: 410 },
   { file: 'me.astro', path: '/me', as: 'admin' },
   { file: 'trials/index.astro', path: '/trials', as: 'admin' },
   { file: 'trials/[id]/verdict.astro', path: '/trials/none/verdict', as: 'admin', status: 404 },

@@ -62,6 +62,8 @@ export const activityKinds = [
   'trial.opened-again',
   'trial.followed',
   'verdict.made',
+  'verdict.shared',
+  'verdict.share-ended',
   'review.asked',
   'review.approved',
   'review.sent-back',

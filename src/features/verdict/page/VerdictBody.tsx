@@ -16,10 +16,11 @@ interface Props extends PageWording {
   readonly checkRuns?: ReactNode;
   readonly trySettings?: ReactNode;
   readonly decide?: ReactNode;
+  readonly share?: ReactNode;
 }
 
 /** The whole verdict in the order in which a supervisor asks. The five answers print on one sheet. */
-export function VerdictBody({ checkRuns, trySettings, decide, ...wording }: Props) {
+export function VerdictBody({ checkRuns, trySettings, decide, share, ...wording }: Props) {
   return (
     <div className="verdict">
       <TopSentence {...wording} />
@@ -35,6 +36,7 @@ export function VerdictBody({ checkRuns, trySettings, decide, ...wording }: Prop
       <WhatNext {...wording} />
       <Decisions {...wording} />
       <div className="no-print">{decide}</div>
+      <div className="no-print">{share}</div>
     </div>
   );
 }

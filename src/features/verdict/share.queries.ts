@@ -1,0 +1,11 @@
+import { z } from 'zod';
+import { callServer } from '../../components/island/call-server.ts';
+import { type MadeShare, madeShareSchema } from './share.schema.ts';
+
+export function shareVerdictCall(trialId: string): Promise<MadeShare> {
+  return callServer(`/api/trials/${trialId}/share`, { method: 'POST', body: {}, output: madeShareSchema });
+}
+
+export function endShareCall(trialId: string, id: string): Promise<undefined> {
+  return callServer(`/api/trials/${trialId}/share/${id}`, { method: 'DELETE', output: z.undefined() });
+}
