@@ -5,6 +5,7 @@ import type { ShopScope } from '../../server/db/scope.ts';
 import { AppError } from '../../server/errors.ts';
 import { insertAnswers, type QuestionState, readStoredAnswers } from './answers.repository.ts';
 import type { Answers, QuestionName } from './answers.schema.ts';
+import { carriedAnswers } from './carried-answers.ts';
 import { deleteTrialRows, findTrial, insertTrial, updateTrial } from './trial.repository.ts';
 import type { ChangeTrial, CreateTrial, ListTrials, PublicTrial, TrialsPage } from './trial.schema.ts';
 import { nameTrial } from './trial.ts';
@@ -19,12 +20,9 @@ import {
 import { mayPutAway, trialStates } from './trial-states.ts';
 import { listTrialsPage } from './trials-list.repository.ts';
 
-/** What a copy takes over: not what was decided about another plan's runs, nor what was ticked or set for another day. */
 async function copyAnswers(scope: ShopScope, trialId: string): Promise<Answers> {
   await findTrialOf(scope, trialId);
-  const { look: _look, ready: _ready, pace, ...kept } = (await readStoredAnswers(scope, trialId)).answers;
-  const { startDate: _date, startTime: _time, ...manner } = pace ?? {};
-  return pace ? { ...kept, pace: manner } : kept;
+  return carriedAnswers((await readStoredAnswers(scope, trialId)).answers);
 }
 
 /**
@@ -39,22 +37,27 @@ export function createTrial(
   return inTransaction(scope, async (inner) => {
     if (await findTrial(inner, wish.id)) return readPublicTrial(inner, wish.id);
     const answers = wish.copyOf === undefined ? {} : await copyAnswers(inner, wish.copyOf);
-    // The line in the log comes first: it locks the shop, so that a number is given once.
-    await recordActivity(inner, {
-      kind: 'trial.added',
-      subjectId: wish.id,
-      trialId: wish.id,
-      details: { copyOf: wish.copyOf ?? null },
-    });
-    const trial = { id: wish.id, ownerId: reader.personId, ...nameTrial(answers) };
-    if (!(await insertTrial(inner, trial))) throw new AppError('not-found', { detail: 'id of another shop' });
-    const state: QuestionState = { version: 1, savedAt: now(), savedBy: reader.personId, saves: [] };
-    const questions = Object.fromEntries(
-      (Object.keys(answers) as QuestionName[]).map((question) => [question, state]),
-    );
-    await insertAnswers(inner, wish.id, { answers, questions, savedBy: reader.personId });
+    await addDraft(inner, { id: wish.id, answers, copyOf: wish.copyOf ?? null }, reader);
     return readPublicTrial(inner, wish.id);
   });
+}
+
+/** Adds a draft with its first answers, in the transaction of whoever asks. @throws AppError `not-found` for an id of another shop */
+export async function addDraft(
+  scope: ShopScope,
+  draft: { id: string; answers: Answers; copyOf: string | null },
+  reader: TrialReader,
+): Promise<void> {
+  const { id, answers, copyOf } = draft;
+  // The line in the log comes first: it locks the shop, so that a number is given once.
+  await recordActivity(scope, { kind: 'trial.added', subjectId: id, trialId: id, details: { copyOf } });
+  const trial = { id, ownerId: reader.personId, ...nameTrial(answers) };
+  if (!(await insertTrial(scope, trial))) throw new AppError('not-found', { detail: 'id of another shop' });
+  const state: QuestionState = { version: 1, savedAt: now(), savedBy: reader.personId, saves: [] };
+  const questions = Object.fromEntries(
+    (Object.keys(answers) as QuestionName[]).map((question) => [question, state]),
+  );
+  await insertAnswers(scope, id, { answers, questions, savedBy: reader.personId });
 }
 
 export async function listTrials(scope: ShopScope, list: ListTrials): Promise<TrialsPage> {

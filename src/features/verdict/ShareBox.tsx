@@ -8,8 +8,8 @@ import { TextInput } from '../../components/ui/TextInput.tsx';
 import { formatsFor } from '../../i18n/format.ts';
 import type { Language } from '../../i18n/languages.ts';
 import { FaultCallout } from '../people/FaultCallout.tsx';
-import { endShareCall, shareVerdictCall } from './share.queries.ts';
 import type { PublicShare } from './share.schema.ts';
+import { endShareCall, shareVerdictCall } from './verdict.queries.ts';
 
 interface Props {
   readonly language: Language;

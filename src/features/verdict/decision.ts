@@ -16,3 +16,8 @@ export interface Decision {
   note: string;
   at: number;
 }
+
+/** Whether the new settings are in use by what was decided last. Newest first. */
+export function isAdopted(decisions: readonly Pick<Decision, 'outcome'>[]): boolean {
+  return decisions[0]?.outcome === 'adopt' || decisions[0]?.outcome === 'adopt unchecked';
+}

@@ -17,10 +17,21 @@ interface Props extends PageWording {
   readonly trySettings?: ReactNode;
   readonly decide?: ReactNode;
   readonly share?: ReactNode;
+  /** How the next trial begins, and those that began already. */
+  readonly nextTrial?: ReactNode;
+  readonly following?: ReactNode;
 }
 
 /** The whole verdict in the order in which a supervisor asks. The five answers print on one sheet. */
-export function VerdictBody({ checkRuns, trySettings, decide, share, ...wording }: Props) {
+export function VerdictBody({
+  checkRuns,
+  trySettings,
+  decide,
+  share,
+  nextTrial,
+  following,
+  ...wording
+}: Props) {
   return (
     <div className="verdict">
       <TopSentence {...wording} />
@@ -34,6 +45,8 @@ export function VerdictBody({ checkRuns, trySettings, decide, share, ...wording 
       <MoreReasons {...wording} />
       <CannotTell {...wording} />
       <WhatNext {...wording} />
+      {following}
+      <div className="no-print">{nextTrial}</div>
       <Decisions {...wording} />
       <div className="no-print">{decide}</div>
       <div className="no-print">{share}</div>

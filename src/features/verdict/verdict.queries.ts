@@ -1,5 +1,7 @@
 import { z } from 'zod';
 import { callServer } from '../../components/island/call-server.ts';
+import { type PublicTrial, publicTrialSchema } from '../trial/trial.schema.ts';
+import type { NextTrialWish } from './next-trial.schema.ts';
 import { type MadeShare, madeShareSchema } from './share.schema.ts';
 
 export function shareVerdictCall(trialId: string): Promise<MadeShare> {
@@ -8,4 +10,8 @@ export function shareVerdictCall(trialId: string): Promise<MadeShare> {
 
 export function endShareCall(trialId: string, id: string): Promise<undefined> {
   return callServer(`/api/trials/${trialId}/share/${id}`, { method: 'DELETE', output: z.undefined() });
+}
+
+export function nextTrialCall(trialId: string, body: NextTrialWish): Promise<PublicTrial> {
+  return callServer(`/api/trials/${trialId}/next`, { method: 'POST', body, output: publicTrialSchema });
 }
