@@ -35,7 +35,7 @@ export async function startFakes(settings: FakesSettings): Promise<Fakes> {
   const mailbox = openMailbox(keptFile('mails.json'));
   const service = openTextService({ settings, clock, faults: currentFaults, file: keptFile('texts.json') });
   const routes = [
-    ...textApiRoutes({ settings, service, faults: currentFaults }),
+    ...textApiRoutes({ settings, service, faults: currentFaults, clock }),
     ...phoneRoutes({ settings, service, clock, faults: currentFaults }),
     ...mailRoutes(mailbox, clock),
     ...controlRoutes({ service, mailbox, clock, faults }),

@@ -1,4 +1,5 @@
 import { setTimeout as wait } from 'node:timers/promises';
+import type { SharedClock } from '../clock.ts';
 import { type Answer, type Ask, jsonAnswer, noAnswer, type Route } from '../http/answer.ts';
 import type { FakesSettings } from '../settings.ts';
 import { describeForApi, listForApi } from './api-answers.ts';
@@ -12,14 +13,16 @@ export function textApiRoutes(options: {
   settings: FakesSettings;
   service: TextService;
   faults: () => Faults;
+  clock: SharedClock;
 }): Route[] {
-  const { settings, service, faults } = options;
+  const { settings, service, faults, clock } = options;
 
   const behindTheDoor =
     (handle: (ask: Ask) => Answer | typeof noAnswer): Route['handle'] =>
     async (ask) => {
       if (!isSignedIn(ask, settings)) return errorAnswer(401, 20_003, 'Account and token do not match.');
       await wait(faults().delayMilliseconds);
+      if (clock.now() < faults().downUntil) return errorAnswer(503, 20_503, 'The service is down.');
       return handle(ask);
     };
 
@@ -62,6 +65,9 @@ function send(ask: Ask, service: TextService, faults: Faults, accountSid: string
       'This fault was asked for.',
       headers,
     );
+  }
+  if (takeOne(faults.optOutNext)) {
+    return errorAnswer(400, 21_610, 'The receiver has opted out of texts from this number.');
   }
   const form = new URLSearchParams(ask.body);
   const result = service.accept({

@@ -22,6 +22,14 @@ const fields = {
   undeliverNext: z.strictObject({ count, errorCode: z.number().int() }),
   /** Each webhook is delivered twice. */
   duplicateWebhooks: z.boolean(),
+  /** Each webhook is delivered only after a wait of up to so long, each its own: they arrive late and mixed up. */
+  delayWebhooks: z.strictObject({ upToMilliseconds: z.number().int().min(0).max(120_000) }),
+  /** Webhooks are gathered for so long and then delivered newest first; 0: as they come. */
+  reverseWebhooks: z.strictObject({ gatherMilliseconds: z.number().int().min(0).max(120_000) }),
+  /** The next sends are refused as to a phone that has opted out, whatever the phone thinks. */
+  optOutNext: z.strictObject({ count }),
+  /** Until this moment of the clock (milliseconds UTC) every call answers 503 and no webhook is called; 0: it is up. */
+  downUntil: z.number().int().min(0),
   /** Off: webhooks are not called; what they would have said stays listed as missed. */
   webhooks: z.enum(['on', 'off']),
   /** The next mails are refused with this SMTP code. */
@@ -41,6 +49,10 @@ export function noFaults(): Faults {
     swallowNextAnswers: 0,
     undeliverNext: { count: 0, errorCode: 30_005 },
     duplicateWebhooks: false,
+    delayWebhooks: { upToMilliseconds: 0 },
+    reverseWebhooks: { gatherMilliseconds: 0 },
+    optOutNext: { count: 0 },
+    downUntil: 0,
     webhooks: 'on',
     refuseNextMails: { count: 0, code: 451 },
   };

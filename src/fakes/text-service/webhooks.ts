@@ -81,12 +81,47 @@ export function openWebhookCaller(options: {
     return delivery;
   };
 
+  const timers = new Set<NodeJS.Timeout>();
+  const after = (milliseconds: number, step: () => void): void => {
+    const timer = setTimeout(() => {
+      timers.delete(timer);
+      step();
+    }, milliseconds);
+    timers.add(timer);
+  };
+
+  let gathered: Delivery[] = [];
+  /** Sends a call on its way: at once, late, or with others in the wrong order, as the faults have it. */
+  const dispatch = (delivery: Delivery): void => {
+    const { delayWebhooks, reverseWebhooks } = faults();
+    if (reverseWebhooks.gatherMilliseconds > 0) {
+      if (gathered.length === 0) {
+        after(reverseWebhooks.gatherMilliseconds, () => {
+          const inReverse = gathered.reverse();
+          gathered = [];
+          void deliverInTurn(inReverse);
+        });
+      }
+      gathered.push(delivery);
+    } else if (delayWebhooks.upToMilliseconds > 0) {
+      after(Math.random() * delayWebhooks.upToMilliseconds, () => void deliver(delivery));
+    } else {
+      void deliver(delivery);
+    }
+  };
+
+  /** One after the other, so that the order is the one that was meant. */
+  const deliverInTurn = async (waiting: readonly Delivery[]): Promise<void> => {
+    for (const delivery of waiting) await deliver(delivery);
+  };
+
   return {
     call: (call) => {
       const times = faults().duplicateWebhooks ? 2 : 1;
+      const isUp = faults().webhooks === 'on' && clock.now() >= faults().downUntil;
       for (let time = 0; time < times; time += 1) {
         const delivery = list(call);
-        if (faults().webhooks === 'on') void deliver(delivery);
+        if (isUp) dispatch(delivery);
       }
     },
     repeat: (number) => {
@@ -95,6 +130,9 @@ export function openWebhookCaller(options: {
       void deliver(delivery);
       return true;
     },
-    stop: () => stopping.abort(),
+    stop: () => {
+      timers.forEach(clearTimeout);
+      stopping.abort();
+    },
   };
 }
