@@ -7,7 +7,15 @@ import { type Faults, faultsChangeSchema, noFaults } from './text-service/faults
 import type { TextService } from './text-service/text-service.ts';
 
 const hourMilliseconds = 3_600_000;
-const textSchema = z.strictObject({ from: z.string(), to: z.string(), body: z.string().min(1) });
+const pictureSchema = z
+  .strictObject({ type: z.string(), base64: z.base64() })
+  .transform(({ type, base64 }) => ({ type, bytes: Buffer.from(base64, 'base64') }));
+const textSchema = z.strictObject({
+  from: z.string(),
+  to: z.string(),
+  body: z.string(),
+  pictures: z.array(pictureSchema).max(10).default([]),
+});
 const clockSchema = z.strictObject({ moveMilliseconds: z.number().int() });
 
 /** What tests and demos steer the stand-ins by: faults, texts from a phone, the clock, and what was kept. */
@@ -37,7 +45,10 @@ export function controlRoutes(options: {
       }),
     ),
     route('DELETE', /^\/fake\/faults$/, () => jsonAnswer(Object.assign(faults, noFaults()))),
-    route('GET', /^\/fake\/texts$/, () => jsonAnswer(service.state.texts)),
+    // `?from=100` leaves out the first hundred, for whoever has them.
+    route('GET', /^\/fake\/texts$/, ({ url }) =>
+      jsonAnswer(service.state.texts.slice(Number(url.searchParams.get('from') ?? 0))),
+    ),
     route('POST', /^\/fake\/texts$/, ({ body }) =>
       withBody(body, textSchema, (text) => jsonAnswer(service.receive(text), 201)),
     ),

@@ -9,6 +9,7 @@ import { startMailServer } from './mail/smtp.ts';
 import type { FakesSettings } from './settings.ts';
 import { textApiRoutes } from './text-service/api-routes.ts';
 import { noFaults } from './text-service/faults.ts';
+import { mediaRoutes } from './text-service/media-routes.ts';
 import { phoneRoutes } from './text-service/phone-routes.ts';
 import { openTextService } from './text-service/text-service.ts';
 
@@ -33,14 +34,23 @@ export async function startFakes(settings: FakesSettings): Promise<Fakes> {
   const faults = noFaults();
   const currentFaults = () => faults;
   const mailbox = openMailbox(keptFile('mails.json'));
-  const service = openTextService({ settings, clock, faults: currentFaults, file: keptFile('texts.json') });
+  let apiUrl = '';
+  const service = openTextService({
+    settings,
+    clock,
+    faults: currentFaults,
+    file: keptFile('texts.json'),
+    apiUrl: () => apiUrl,
+  });
   const routes = [
+    ...mediaRoutes(settings, service),
     ...textApiRoutes({ settings, service, faults: currentFaults, clock }),
     ...phoneRoutes({ settings, service, clock, faults: currentFaults }),
     ...mailRoutes(mailbox, clock),
     ...controlRoutes({ service, mailbox, clock, faults }),
   ];
   const web = await startLoopbackServer(routes, settings.httpPort);
+  apiUrl = web.url;
   const smtp = await startMailServer({ port: settings.smtpPort, mailbox, clock, faults: currentFaults });
   return {
     textsUrl: web.url,

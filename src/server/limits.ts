@@ -10,6 +10,9 @@ export const bodyLimits = {
   trialFile: 5 * megabyte,
 } as const;
 
+/** What a picture may unfold to. */
+export const photoPixelLimit = 50_000_000;
+
 export const csvRowLimit = 5_000;
 
 const exceptions: [pattern: RegExp, limit: number][] = [

@@ -4,6 +4,7 @@ import { backup } from './backup.ts';
 import { beat } from './beat.ts';
 import { catchUp } from './catch-up-texts.ts';
 import { checkLog } from './check-log.ts';
+import { fetchPhotos } from './fetch-photos.ts';
 import { mailGateway, textGateway } from './gateways.ts';
 import type { Job } from './loop.ts';
 import { makeVerdicts } from './make-verdicts.ts';
@@ -24,6 +25,7 @@ export const jobs: Job[] = [
   sendMails(mailGateway),
   settleUnsure(textGateway),
   catchUp(textGateway),
+  fetchPhotos(textGateway),
   retention,
   checkLog,
   backup,

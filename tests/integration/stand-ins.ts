@@ -9,8 +9,14 @@ export const testAccount = { accountSid: `AC${'1'.repeat(32)}`, authToken: 'toke
 /** The stand-ins for texts and mail, started for one test, with what a test steers them by. */
 export interface StandIns extends Fakes {
   setFaults(change: Partial<Faults>): Promise<void>;
-  textFromPhone(text: { from: string; to: string; body: string }): Promise<KeptText>;
-  texts(): Promise<KeptText[]>;
+  textFromPhone(text: {
+    from: string;
+    to: string;
+    body: string;
+    pictures?: { type: string; base64: string }[];
+  }): Promise<KeptText>;
+  /** All texts, or those after the first so many. */
+  texts(from?: number): Promise<KeptText[]>;
   deliveries(): Promise<Delivery[]>;
   mails(): Promise<KeptMail[]>;
 }
@@ -44,7 +50,7 @@ export async function startStandIns(
     ...fakes,
     setFaults: (change) => ask('/fake/faults', change),
     textFromPhone: (text) => ask('/fake/texts', text),
-    texts: () => ask('/fake/texts'),
+    texts: (from = 0) => ask(`/fake/texts?from=${from}`),
     deliveries: () => ask('/fake/deliveries'),
     mails: () => ask('/fake/mails'),
   };

@@ -13,7 +13,7 @@ export interface Ask {
 export interface Answer {
   status: number;
   type: string;
-  body: string;
+  body: string | Uint8Array;
   headers?: Record<string, string>;
 }
 

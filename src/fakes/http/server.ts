@@ -3,7 +3,8 @@ import type { AddressInfo } from 'node:net';
 import { type Answer, type Ask, jsonAnswer, noAnswer, type Route } from './answer.ts';
 
 const loopback = '127.0.0.1';
-const bodyLimit = 256 * 1024;
+/** Pictures come along with a text. */
+const bodyLimit = 16 * 1024 * 1024;
 const contentPolicy =
   "default-src 'none'; style-src 'self'; script-src 'self'; connect-src 'self'; form-action 'self'; base-uri 'none'; frame-ancestors 'none'";
 

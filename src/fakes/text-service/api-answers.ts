@@ -18,7 +18,7 @@ export function describeForApi(text: KeptText, accountSid: string): Record<strin
     error_message: null,
     from: text.from,
     messaging_service_sid: null,
-    num_media: '0',
+    num_media: String(text.media.length),
     num_segments: String(text.segments),
     price: null,
     price_unit: 'USD',

@@ -84,7 +84,7 @@ function send(ask: Ask, service: TextService, faults: Faults, accountSid: string
   return jsonAnswer(describeForApi(result, accountSid), 201);
 }
 
-function errorAnswer(
+export function errorAnswer(
   status: number,
   code: number,
   message: string,
@@ -93,7 +93,7 @@ function errorAnswer(
   return jsonAnswer({ code, message, more_info: null, status }, status, headers);
 }
 
-function isSignedIn(ask: Ask, settings: FakesSettings): boolean {
+export function isSignedIn(ask: Ask, settings: FakesSettings): boolean {
   const expected = Buffer.from(`${settings.accountSid}:${settings.authToken}`).toString('base64');
   return ask.headers.authorization === `Basic ${expected}` && ask.parts[0] === settings.accountSid;
 }

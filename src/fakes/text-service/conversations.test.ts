@@ -3,7 +3,10 @@ import { listConversations } from './conversations.ts';
 import type { KeptText } from './kept-texts.ts';
 
 function text(from: string, to: string, direction: KeptText['direction'], createdAt: number): KeptText {
-  const rest = { status: 'delivered', errorCode: null, segments: 1, statusCallback: null } as const;
+  const rest = {
+    ...({ status: 'delivered', errorCode: null, segments: 1, statusCallback: null } as const),
+    media: [],
+  };
   return { sid: `SM${createdAt}`, direction, from, to, body: 'x', createdAt, updatedAt: createdAt, ...rest };
 }
 

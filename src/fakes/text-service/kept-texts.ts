@@ -10,6 +10,8 @@ export const keptTextSchema = z.object({
   status: z.enum(['queued', 'sent', 'delivered', 'undelivered', 'received']),
   errorCode: z.number().int().nullable(),
   segments: z.number().int(),
+  /** Pictures that came along; what is in them lives only as long as the process. */
+  media: z.array(z.object({ sid: z.string(), type: z.string() })).default([]),
   createdAt: z.number(),
   updatedAt: z.number(),
   statusCallback: z.string().nullable(),

@@ -27,12 +27,20 @@ export interface SendRequest {
   statusCallback: string | null;
 }
 
+/** A picture that goes with a text. */
+export interface Picture {
+  /** e.g. `image/jpeg`. */
+  type: string;
+  bytes: Uint8Array;
+}
+
 /** The text service without its HTTP: what it keeps and what it does by itself. */
 export interface TextService {
   readonly state: TextServiceState;
   accept(request: SendRequest): KeptText | SendRefusal;
   /** A person at a phone sends a text to a shop's number. */
-  receive(text: { from: string; to: string; body: string }): KeptText;
+  receive(text: { from: string; to: string; body: string; pictures?: Picture[] }): KeptText;
+  pictureOf(sid: string): Picture | undefined;
   repeatDelivery(number: number): boolean;
   isOptedOut(number: string, phone: string): boolean;
   stop(): void;
@@ -46,8 +54,11 @@ export function openTextService(options: {
   clock: SharedClock;
   faults: () => Faults;
   file: string | undefined;
+  /** The address of the API, known once it listens. */
+  apiUrl: () => string;
 }): TextService {
-  const { settings, clock, faults } = options;
+  const { settings, clock, faults, apiUrl } = options;
+  const pictures = new Map<string, Picture>();
   const kept = openKeptDocument({
     file: options.file,
     schema: textServiceStateSchema,
@@ -71,6 +82,7 @@ export function openTextService(options: {
       sid: `SM${randomBytes(16).toString('hex')}`,
       errorCode: null,
       segments: countSegments(text.body).segments,
+      media: [],
       createdAt: at,
       updatedAt: at,
       statusCallback: null,
@@ -130,8 +142,14 @@ export function openTextService(options: {
       carryOut(text);
       return text;
     },
-    receive: ({ from, to, body }) => {
+    pictureOf: (sid) => pictures.get(sid),
+    receive: ({ from, to, body, pictures: sent = [] }) => {
       const text = keep({ direction: 'inbound', status: 'received', from, to, body });
+      text.media = sent.map((picture) => {
+        const sid = `ME${randomBytes(16).toString('hex')}`;
+        pictures.set(sid, picture);
+        return { sid, type: picture.type };
+      });
       const action = decideCarrierAction(body, isOptedOut(to, from));
       if (action === 'opt out' && !isOptedOut(to, from)) state.optedOut.push(optOutKey(to, from));
       if (action === 'opt in') state.optedOut.splice(state.optedOut.indexOf(optOutKey(to, from)), 1);
@@ -145,7 +163,8 @@ export function openTextService(options: {
         });
       }
       const url = new URL('/api/texts/inbound', settings.publicUrl).href;
-      webhooks.call({ kind: 'inbound', url, parameters: describeInbound(text, settings.accountSid) });
+      const parameters = describeInbound(text, settings.accountSid, apiUrl());
+      webhooks.call({ kind: 'inbound', url, parameters });
       return text;
     },
     repeatDelivery: webhooks.repeat,
@@ -167,6 +186,11 @@ function findRefusal(request: SendRequest, isOptedOut: boolean): SendRefusal | u
   return isOptedOut ? refuse(21_610, 'The receiver has opted out of texts from this number.') : undefined;
 }
 
+/** Where a picture of a text is asked for. */
+export function mediaPath(accountSid: string, textSid: string, mediaSid: string): string {
+  return `/2010-04-01/Accounts/${accountSid}/Messages/${textSid}/Media/${mediaSid}`;
+}
+
 function describeText(text: KeptText, accountSid: string): Record<string, string> {
   return {
     AccountSid: accountSid,
@@ -178,11 +202,16 @@ function describeText(text: KeptText, accountSid: string): Record<string, string
   };
 }
 
-function describeInbound(text: KeptText, accountSid: string): Record<string, string> {
+function describeInbound(text: KeptText, accountSid: string, apiUrl: string): Record<string, string> {
+  const media = text.media.flatMap(({ sid, type }, place) => [
+    [`MediaUrl${place}`, apiUrl + mediaPath(accountSid, text.sid, sid)],
+    [`MediaContentType${place}`, type],
+  ]);
   return {
     ...describeText(text, accountSid),
     Body: text.body,
-    NumMedia: '0',
+    NumMedia: String(text.media.length),
+    ...Object.fromEntries(media),
     NumSegments: String(text.segments),
     SmsMessageSid: text.sid,
     SmsStatus: 'received',

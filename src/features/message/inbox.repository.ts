@@ -1,6 +1,6 @@
 import type { Knex } from 'knex';
 import { z } from 'zod';
-import { moment } from '../../server/db/columns.ts';
+import { jsonColumn, moment } from '../../server/db/columns.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
 
 export interface InboxMedia {
@@ -36,6 +36,7 @@ export async function insertInboxText(scope: ShopScope, text: NewInboxText): Pro
       sent_at: text.sentAt,
       received_at: text.receivedAt,
       state: 'new',
+      photo_state: text.media.items.length + text.media.unlisted > 0 ? 'waiting' : 'none',
     })
     .onConflict('provider_id')
     .ignore()
@@ -43,11 +44,20 @@ export async function insertInboxText(scope: ShopScope, text: NewInboxText): Pro
   return added.length > 0;
 }
 
+const mediaSchema = z.object({
+  items: z.array(z.object({ url: z.string(), type: z.string() })),
+  unlisted: z.number().default(0),
+});
+
 const rowSchema = z
   .object({
     id: z.string(),
     shop_id: z.string(),
+    provider_id: z.string(),
     person_id: z.string().nullable(),
+    run_id: z.string().nullable(),
+    media: jsonColumn(mediaSchema),
+    photo_attempts: z.number(),
     from_phone: z.string().nullable(),
     body: z.string(),
     sent_at: moment,
@@ -56,6 +66,10 @@ const rowSchema = z
   .transform((row) => ({
     id: row.id,
     shopId: row.shop_id,
+    providerId: row.provider_id,
+    runId: row.run_id,
+    media: row.media,
+    photoAttempts: row.photo_attempts,
     personId: row.person_id,
     fromPhone: row.from_phone,
     body: row.body,
@@ -102,4 +116,32 @@ export async function describeInboxText(
 /** Notes an attempt to read that failed. */
 export async function countReadingAttempt(scope: ShopScope, id: string): Promise<void> {
   await scope.db('inbox_texts').where({ shop_id: scope.shopId, id }).increment('attempts', 1);
+}
+
+/** Texts that were read and whose pictures are still to be fetched, oldest first. */
+export async function listTextsWithPhotos(db: Knex, at: number, limit: number): Promise<InboxText[]> {
+  const rows = await db('inbox_texts')
+    .where({ photo_state: 'waiting' })
+    .whereNot({ state: 'new' })
+    .where('photo_not_before', '<=', at)
+    .orderBy('id')
+    .limit(limit);
+  return z.array(rowSchema).parse(rows);
+}
+
+/** What became of the pictures of a text, or when they are asked for again. */
+export async function notePhotos(
+  scope: ShopScope,
+  id: string,
+  result: { state: 'kept' | 'failed' } | { state: 'waiting'; notBefore: number },
+): Promise<void> {
+  const again = result.state === 'waiting' ? { photo_not_before: result.notBefore } : {};
+  await scope
+    .db('inbox_texts')
+    .where({ shop_id: scope.shopId, id })
+    .update({
+      photo_state: result.state,
+      photo_attempts: scope.db.raw('photo_attempts + 1'),
+      ...again,
+    });
 }

@@ -46,6 +46,9 @@ const toCrew = {
   cannotNoted: text({ ...answer, params: z.strictObject({ actual: words, caller: words }) }, (t, params) =>
     t('run-texts:cannotNoted', params),
   ),
+  photoNoted: text({ ...answer, params: z.strictObject({ run }) }, (t, params) =>
+    t('run-texts:photoNoted', params),
+  ),
   unread: text({ ...answer, params: z.strictObject({ run, ask: askSchema }) }, (t, { ask, ...rest }) =>
     t('run-texts:unread', { ...rest, ask: writeAsk(t, ask) }),
   ),

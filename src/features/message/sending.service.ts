@@ -3,6 +3,7 @@ import { now } from '../../server/clock.ts';
 import { readAppState, replaceAppState } from '../../server/db/app-state.ts';
 import { inTransaction } from '../../server/db/in-transaction.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
+import { wakeWorker } from '../../server/wake.ts';
 import { findAddressee } from './addressee.repository.ts';
 import { failMessage, recordReport } from './delivery.service.ts';
 import { changeMessage, findMessage, type StoredMessage } from './message.repository.ts';
@@ -139,5 +140,7 @@ export async function releaseLapsed(db: Knex, random: () => number = Math.random
       else await putOff(inside, message, { code, random: random() });
     });
   }
+  // The list is asked at once: a run may hang on one of them, and nobody else will say.
+  if (lapsed.length > 0) wakeWorker();
   return lapsed.length;
 }

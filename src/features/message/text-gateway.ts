@@ -27,6 +27,10 @@ export interface SentQuestion {
   since: number;
 }
 
+export type MediaListing =
+  | { outcome: 'listed'; addresses: string[] }
+  | { outcome: 'retryLater'; code: string };
+
 export type TextListing =
   | { outcome: 'listed'; texts: ListedText[] }
   | { outcome: 'retryLater'; code: string };
@@ -39,6 +43,8 @@ export interface TextGateway {
   listSent(question: SentQuestion): Promise<TextListing>;
   /** Texts that the service received for a number since a time: finds what the webhook missed. */
   listReceived(question: { to: string; since: number }): Promise<TextListing>;
+  /** The addresses of the pictures of a text, where the webhook that tells them was missed. */
+  listMedia(providerId: string): Promise<MediaListing>;
 }
 
 export interface TextGatewaySettings {

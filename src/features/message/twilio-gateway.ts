@@ -13,6 +13,8 @@ type TwilioText = Awaited<ReturnType<ReturnType<typeof twilio>['messages']['list
 
 const defaultTimeoutMilliseconds = 10_000;
 const pageSize = 200;
+/** Where the hosted service answers. */
+export const hostedUrl = 'https://api.twilio.com';
 /** More than a shop receives in any gap worth speaking of; keeps a runaway list from filling the memory. */
 const longestListing = 5000;
 
@@ -60,6 +62,16 @@ export function createTwilioGateway(settings: TextGatewaySettings, clock: () => 
     },
     listSent: (question) => list(question, ['outbound-api']),
     listReceived: (question) => list(question, ['inbound']),
+    listMedia: async (providerId) => {
+      try {
+        const media = await client.messages(providerId).media.list({ limit: 10 });
+        const base = settings.apiUrl ?? hostedUrl;
+        const addresses = media.map(({ uri }) => new URL(uri.replace(/\.json$/, ''), base).href);
+        return { outcome: 'listed', addresses };
+      } catch (error) {
+        return { outcome: 'retryLater', code: readTextServiceError(error).code };
+      }
+    },
   };
 }
 

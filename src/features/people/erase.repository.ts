@@ -50,6 +50,11 @@ export async function blankRemarksOfPerson(scope: ShopScope, personId: string): 
   }
 }
 
+/** Pictures that a person sent go with their words; the run keeps its figures. */
+export async function removePhotosOfPerson(scope: ShopScope, personId: string): Promise<void> {
+  await scope.db('photos').where({ shop_id: scope.shopId, sent_by: personId }).delete();
+}
+
 /** Removes what served the person alone: sessions, links, tokens, roles. */
 export async function removeBelongings(scope: ShopScope, personId: string): Promise<void> {
   for (const table of ['sessions', 'links', 'api_tokens', 'person_roles']) {

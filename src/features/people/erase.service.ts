@@ -9,6 +9,7 @@ import {
   erasedColumns,
   nextFormerNumber,
   removeBelongings,
+  removePhotosOfPerson,
 } from './erase.repository.ts';
 import { findPersonInReach } from './find-person.service.ts';
 import { holdsNoOpenRun, leavesAnAdmin, updatePerson } from './person.repository.ts';
@@ -44,6 +45,7 @@ export function erasePerson(
     }
     await removeBelongings(inner, which.id);
     await blankRemarksOfPerson(inner, which.id);
+    await removePhotosOfPerson(inner, which.id);
     return findPersonInReach(inner, which.id, { ...reader, reach: 'everybody' });
   });
 }

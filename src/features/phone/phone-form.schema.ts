@@ -5,7 +5,16 @@ import type { ResultItem } from '../run/result-items.ts';
 import type { Figure } from '../run/run.ts';
 
 /** What a button of the page sends. Figures come in fields named `r<result>-<part>`. */
-export const phoneActions = ['send', 'made', 'right', 'cannot', 'problem', 'skip', 'danger'] as const;
+export const phoneActions = [
+  'send',
+  'made',
+  'right',
+  'cannot',
+  'problem',
+  'later',
+  'skip',
+  'danger',
+] as const;
 
 export const phoneFormSchema = z.object({
   action: z.enum(phoneActions),

@@ -1,5 +1,19 @@
 /** What became of a press on the phone page, for the line at the top of the page that follows. */
-export const phoneOutcomes = ['saved', 'more', 'made', 'skipped', 'told', 'stopped', 'behind'] as const;
+export const phoneOutcomes = [
+  'saved',
+  'more',
+  'odd',
+  'made',
+  'later',
+  'skipped',
+  'told',
+  'asked',
+  'stopped',
+  'behind',
+  'photo',
+  'photoRefused',
+  'photoEnough',
+] as const;
 export type PhoneOutcome = (typeof phoneOutcomes)[number];
 
 export function isPhoneOutcome(text: string | null): text is PhoneOutcome {

@@ -42,3 +42,7 @@ export async function boardEventCall(trialId: string, body: RunTrialEventInput):
 export function runStoryCall(runId: string): Promise<RunStory> {
   return callServer(`/api/runs/${runId}`, { output: runStorySchema });
 }
+
+export async function removePhotoCall(id: string): Promise<void> {
+  await callServer(`/api/photos/${id}`, { method: 'DELETE', output: z.undefined() });
+}

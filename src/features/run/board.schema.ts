@@ -43,6 +43,9 @@ export const boardRunSchema = z.object({
   closedAt: z.number().nullable(),
   /** The figures that count, and those that are asked back. */
   figures: z.array(z.object({ ...figure, isAskedBack: z.boolean() })),
+  photos: z.array(
+    z.object({ id: z.string(), width: z.number(), height: z.number(), at: z.number(), by: z.string() }),
+  ),
   /** What this reader may do with it now. */
   events: z.array(z.enum(runEvents)),
 });

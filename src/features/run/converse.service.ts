@@ -13,6 +13,7 @@ import type { RunningTrial } from './running-trial.ts';
 import { listClosedRunsOf, listRunsInHand } from './runs-in-hand.repository.ts';
 import { listTrialsAtMachine } from './set-back.repository.ts';
 import { expectationOf, type Talk, type TalkResult } from './talk.service.ts';
+import { hasPictures, takePicture } from './talk-picture.service.ts';
 import { acceptReading, chooseRun, denyReading } from './talk-questions.service.ts';
 import { keepReading, takeReading } from './talk-reading.service.ts';
 import {
@@ -96,6 +97,7 @@ export async function converse(
     trial,
     reply: { intent: 'unreadable' },
   };
+  if (text.body.trim() === '' && hasPictures(text)) return { ...(await takePicture(talk)), intent: 'photo' };
   const chosen = await chooseRun(talk);
   if (chosen) return { ...chosen, intent: 'reading' };
 

@@ -1,6 +1,7 @@
 import type { ShopScope } from '../../server/db/scope.ts';
 import { newId } from '../../server/ids.ts';
 import { findAddressee } from '../message/addressee.repository.ts';
+import { transitionsOf } from '../trial/trial-states.ts';
 import { holdTrial } from './hold-trial.service.ts';
 import { raiseProblem } from './problem.service.ts';
 import { listRuns, updateRun } from './run.repository.ts';
@@ -31,7 +32,7 @@ export async function holdByText(talk: Talk): Promise<TalkResult> {
   const { scope, person, text, inHand } = talk;
   const own = await listOwnTrials(scope, person.personId);
   for (const { id: trialId, state } of own) {
-    if (state === 'running') await holdTrial(scope, trialId);
+    if (transitionsOf(state, 'hold').length > 0) await holdTrial(scope, trialId);
     else if (isBeingRun({ state })) {
       const danger = { words: text.body.trim(), raisedBy: person.personId, kind: 'danger' } as const;
       await raiseProblem(scope, { ...danger, id: newId(), trialId, runId: inHand[0]?.id ?? null });

@@ -8,6 +8,7 @@ import { listReviewers } from '../trial/trial-people.repository.ts';
 import { findTrialOf, isReaderAllowed, type TrialReader } from '../trial/trial-reader.service.ts';
 import { type TrialActor, transitions } from '../trial/trial-states.ts';
 import type { Board, BoardRun, BoardSetting } from './board.schema.ts';
+import { listPhotos, type StoredPhoto } from './photo.repository.ts';
 import { listOpenProblems } from './problem.repository.ts';
 import { blockingKinds } from './problem-kinds.ts';
 import { readStop } from './read-stop.service.ts';
@@ -65,11 +66,12 @@ function toBoardRun(
   about: {
     runs: readonly Run[];
     readings: readonly Reading[];
+    photos: readonly StoredPhoto[];
     names: ReadonlyMap<string, string>;
     reader: TrialReader;
   },
 ): BoardRun {
-  const { runs, readings, names, reader } = about;
+  const { runs, readings, photos, names, reader } = about;
   const toPerson = (id: string | null) => (id === null ? null : { id, name: names.get(id) ?? '' });
   const { id, number, block, center, warmUp, coded, planned, actual, state, end, revision, label } = run;
   const { askedAt, madeAt, measuredAt, closedAt } = run;
@@ -80,6 +82,12 @@ function toBoardRun(
     measurer: toPerson(run.measurerId),
     repeats: runs.find((other) => other.id === run.repeatsRunId)?.number ?? null,
     figures: toFigures(readings.filter(({ runId }) => runId === id)),
+    photos: photos
+      .filter(({ run_id }) => run_id === id)
+      .map(({ id: photo, width, height, created_at, sent_by }) => ({
+        ...{ id: photo, width, height, at: created_at },
+        by: sent_by === null ? '' : (names.get(sent_by) ?? ''),
+      })),
     events: eventsOfReader(run, reader),
   };
 }
@@ -108,16 +116,21 @@ export async function readBoard(scope: ShopScope, trialId: string, reader: Trial
     scope,
     runs.map(({ id }) => id),
   );
+  const photos = await listPhotos(
+    scope,
+    runs.map(({ id }) => id),
+  );
   const problems = await listOpenProblems(scope, trialId);
   const people = runs.flatMap(({ personId, measurerId }) => [personId, measurerId]);
-  const ids = [...people, ...problems.map(({ raised_by }) => raised_by)].filter((id) => id !== null);
+  const senders = [...problems.map(({ raised_by }) => raised_by), ...photos.map(({ sent_by }) => sent_by)];
+  const ids = [...people, ...senders].filter((id) => id !== null);
   const names = await readNames(scope, [...new Set(ids)]);
   const { number, title, machine, phase, state, revision } = trial;
   return {
     ...{ trialId, number, title, machine, phase, state, revision, stamp },
     settings: toSettings(plan),
     results: listResultItems(plan.brief),
-    runs: runs.map((run) => toBoardRun(run, { runs, readings, names, reader })),
+    runs: runs.map((run) => toBoardRun(run, { runs, readings, photos, names, reader })),
     problems: problems.map(({ id, kind, run_id, words, raised_by, raised_at }) => ({
       id,
       kind,

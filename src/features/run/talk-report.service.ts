@@ -1,10 +1,10 @@
 import { now } from '../../server/clock.ts';
 import { recordActivity } from '../../server/db/activity-log.ts';
-import type { ShopScope } from '../../server/db/scope.ts';
 import { newId } from '../../server/ids.ts';
 import { hadMessage } from '../message/message.repository.ts';
 import { makePhoneLink } from '../phone/phone-link.service.ts';
 import { askNextRun } from './ask-next.service.ts';
+import { remindLater, reportCannotReach } from './cannot-reach.service.ts';
 import { beginStretch } from './change-stretch.service.ts';
 import { goOn } from './go-on.service.ts';
 import { makeRun } from './make-run.service.ts';
@@ -20,7 +20,7 @@ import { skipRun } from './skip-run.service.ts';
 import { findStretch } from './stretch.repository.ts';
 import type { Talk, TalkResult } from './talk.service.ts';
 import { answerUnread, nextItem } from './talk-unread.service.ts';
-import { talkOf, tell, tellCaller } from './tell.service.ts';
+import { talkOf, tell } from './tell.service.ts';
 
 const minute = 60_000;
 
@@ -67,12 +67,6 @@ export async function skipByText(talk: Talk): Promise<TalkResult> {
   return { runId: run.id, isUsed: true };
 }
 
-/** When a run is reminded of; null: not until somebody else has decided. */
-async function remindLater(scope: ShopScope, run: Run, remindAt: number | null): Promise<void> {
-  await updateRun(scope, { id: run.id, from: [run.state] }, { remindAt });
-  await touchBoard(scope, run.trialId);
-}
-
 /** LATER: the reminder moves. */
 export async function putOffRun(talk: Talk): Promise<TalkResult> {
   const { scope, person, trial, reply } = talk;
@@ -104,19 +98,14 @@ export async function reportSetting(talk: Talk): Promise<TalkResult> {
     return { runId: run.id, isUsed: true };
   }
   const actual = `${reply.actual.name} ${reply.actual.value}`;
-  await remindLater(scope, run, null);
-  const id = newId();
-  const words = text.body.trim();
-  const raisedBy = person.personId;
-  await raiseProblem(scope, { id, trialId: trial.id, runId: run.id, words, raisedBy, kind: 'cannot' });
+  const said = { id: newId(), words: text.body.trim(), actual, by: person };
+  await reportCannotReach(scope, { trial, run }, said);
   await tell(
     scope,
     person.personId,
     { template: 'cannotNoted', params: { actual, caller: caller.name } },
     about,
   );
-  const params = { machine: trial.machine, run: run.number, name: person.name, actual };
-  await tellCaller(scope, trial, { template: 'cannotReach', params }, { because: id, runId: run.id });
   return { runId: run.id, isUsed: true };
 }
 

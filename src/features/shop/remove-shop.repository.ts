@@ -12,6 +12,7 @@ export const shopTables = [
   'phrases',
   'answers',
   'conversations',
+  'photos',
   'readings',
   'inbox_texts',
   'messages',

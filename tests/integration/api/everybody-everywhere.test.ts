@@ -106,12 +106,22 @@ beforeAll(async () => {
   const supervisor = viewers.get('supervisor')?.personId ?? '';
   const { trialId, reviewId } = await buildReviewedTrial(here, supervisor);
   const run = await buildRun(here, { personId: operator, state: 'waiting' });
-  params = { handle, id: operator, token: tokenId, trial: trialId, review: reviewId, run: run.id };
+  const photo = newId();
+  await here.db('photos').insert({
+    ...{ id: photo, shop_id: here.shopId, run_id: run.id, sha256: 'a', width: 1, height: 1 },
+    ...{ bytes: Buffer.from('a'), source: 'text', created_at: 0 },
+  });
+  params = {
+    ...{ handle, id: operator, token: tokenId, trial: trialId, review: reviewId, run: run.id, photo },
+  };
 });
 
 function paramsFor(path: string): Record<string, string> {
-  const [, kind] = /^\/api\/(me\/tokens|trials|reviews|runs)\b/.exec(path) ?? [];
-  const name = { 'me/tokens': 'token', trials: 'trial', reviews: 'review', runs: 'run' }[kind ?? ''] ?? 'id';
+  const [, kind] = /^\/api\/(me\/tokens|trials|reviews|runs|photos)\b/.exec(path) ?? [];
+  const name =
+    {
+      ...{ 'me/tokens': 'token', trials: 'trial', reviews: 'review', runs: 'run', photos: 'photo' },
+    }[kind ?? ''] ?? 'id';
   return { id: params[name] ?? '', handle: params['handle'] ?? '' };
 }
 

@@ -15,6 +15,7 @@ import { tagSettings, writeFigures } from './board-view.tsx';
 import { HandOverForm } from './HandOverForm.tsx';
 import { NoteForm } from './NoteForm.tsx';
 import { ReadingForm } from './ReadingForm.tsx';
+import { RunPhotos } from './RunPhotos.tsx';
 import { RunStoryList } from './RunStoryList.tsx';
 import { StopButton } from './StopButton.tsx';
 
@@ -127,6 +128,7 @@ export function RunPanel({ run, onClose }: Props) {
               )}
               {more.length > 0 && <ActionMenu label={t('more')} actions={more} />}
             </div>
+            <RunPhotos run={run} />
             <RunStoryList run={run} />
           </>
         )}

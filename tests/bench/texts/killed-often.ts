@@ -1,0 +1,187 @@
+import { once } from 'node:events';
+import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { setTimeout as wait } from 'node:timers/promises';
+import { fileURLToPath } from 'node:url';
+import type { Knex } from 'knex';
+import { createUniformSource } from '../../../src/lib/doe/random/random-numbers.ts';
+import { openDatabase } from '../../../src/server/db/connection.ts';
+import { type StandIns, startStandIns, testAccount } from '../../integration/stand-ins.ts';
+import { type ChildProgram, startProgram } from '../../setup/child-program.ts';
+import { findFreePort } from '../../setup/free-port.ts';
+import { type AnsweringPhones, startPhones } from './answering-phones.ts';
+import { buildCrowd, type CrowdMember, runsATrial } from './crowd.ts';
+
+const main = fileURLToPath(new URL('../../../dist/main/main.mjs', import.meta.url));
+/** Longer than a worker's lease on a text: what the killed one had in hand is looked into at once. */
+const leaseOverMilliseconds = 61_000;
+
+export interface KillPlan {
+  kills: number;
+  trials: number;
+  seed: number;
+  limitMilliseconds: number;
+}
+
+export interface KillOutcome {
+  kills: { web: number; worker: number };
+  seconds: number;
+  /** Runs of all trials, and those whose text reached its phone. */
+  runs: number;
+  reached: number;
+  /** Texts that the service handed to a phone a second time. */
+  duplicates: number;
+  /** Runs with exactly the figure that their phone sent, kept once; and readings kept besides. */
+  keptOnce: number;
+  keptBesides: number;
+  /** Webhooks that nobody heard, because the program was dead. */
+  missed: number;
+}
+
+type Role = 'web' | 'worker';
+
+/** The built product as two programs, web and worker, on a data folder of their own. */
+async function openTwoPrograms() {
+  const folder = mkdtempSync(join(tmpdir(), 'trywell-killed-'));
+  const clockFile = join(folder, 'clock-offset');
+  const port = String(await findFreePort());
+  const url = `http://127.0.0.1:${port}`;
+  const standIns = await startStandIns(url, { ...testAccount, clockOffsetFile: clockFile });
+  const start = (role: Role): Promise<ChildProgram> =>
+    startProgram(main, {
+      ROLE: role,
+      PORT: port,
+      APP_URL: url,
+      DATA_DIR: folder,
+      CLOCK_OFFSET_FILE: clockFile,
+      TWILIO_ACCOUNT_SID: testAccount.accountSid,
+      TWILIO_AUTH_TOKEN: testAccount.authToken,
+      TWILIO_API_URL: standIns.textsUrl,
+      SMTP_PORT: String(standIns.smtpPort),
+      TEXTS_PER_SECOND: '100',
+      LOG_LEVEL: 'error',
+    });
+  const programs = { worker: await start('worker'), web: await start('web') };
+  const db = openDatabase({ kind: 'sqlite', file: join(folder, 'trywell.sqlite') });
+  let ahead = 0;
+  return {
+    standIns,
+    db,
+    /** SIGKILL, as a power cut would, and up again. */
+    async kill(role: Role): Promise<void> {
+      const { process: child } = programs[role];
+      child.kill('SIGKILL');
+      if (child.exitCode === null && child.signalCode === null) await once(child, 'exit');
+      if (role === 'worker') {
+        ahead += leaseOverMilliseconds;
+        writeFileSync(clockFile, String(ahead));
+      }
+      programs[role] = await start(role);
+    },
+    async close(): Promise<void> {
+      await db.destroy();
+      await Promise.all([programs.web.stop(), programs.worker.stop()]);
+      await standIns.stop();
+      rmSync(folder, { recursive: true, force: true });
+    },
+  };
+}
+
+/** How long a program lives at most while no texts pass. */
+const longestLifeMilliseconds = 6_000;
+
+/** Lets a random number of texts pass, then a random part of what one takes on its way. */
+async function liveAWhile(random: () => number, mostTexts: number, phones: AnsweringPhones): Promise<void> {
+  const began = Date.now();
+  const until = phones.passed() + 1 + Math.floor(random() * mostTexts);
+  while (phones.passed() < until && Date.now() - began < longestLifeMilliseconds) await wait(20);
+  await wait(random() * 60);
+}
+
+/** Kills web and worker side by side at random moments; the worker last, so that it looks for what nobody heard. */
+async function killAll(
+  plan: KillPlan,
+  product: { standIns: StandIns; kill(role: Role): Promise<void> },
+  phones: AnsweringPhones,
+): Promise<KillOutcome['kills'] & { missed: number }> {
+  const { kills, trials, seed } = plan;
+  const web = Math.floor(kills * 0.4);
+  // Each run has a text out and one back; the killing is to last for most of them.
+  const texts = trials * runsATrial * 2;
+  // Counted as it goes, since the service keeps only the latest.
+  const missed = new Set<number>();
+  const killRole = async (role: Role, times: number): Promise<void> => {
+    const random = createUniformSource(seed + (role === 'web' ? 1 : 2));
+    for (let time = 0; time < times; time += 1) {
+      await liveAWhile(random, (1.6 * texts) / times, phones);
+      // Late and mixed up by turns.
+      const isReversed = random() < 0.5;
+      await product.standIns.setFaults({
+        delayWebhooks: { upToMilliseconds: 250 },
+        reverseWebhooks: { gatherMilliseconds: isReversed ? 80 : 0 },
+      });
+      await product.kill(role);
+      for (const { number, outcome } of await product.standIns.deliveries()) {
+        if (outcome === 'missed') missed.add(number);
+      }
+    }
+  };
+  await Promise.all([killRole('web', web), killRole('worker', kills - web - 1)]);
+  await product.kill('worker');
+  return { web, worker: kills - web, missed: missed.size };
+}
+
+async function countOpenRuns(db: Knex, crowd: readonly CrowdMember[]): Promise<number> {
+  const ids = crowd.map(({ trialId }) => trialId);
+  const row = await db('runs').whereIn('trial_id', ids).whereNot({ state: 'done' }).count({ n: '*' }).first();
+  return Number(row?.['n']);
+}
+
+/** How the readings in the database compare with what the phones sent. */
+async function compareReadings(db: Knex, crowd: readonly CrowdMember[], phones: AnsweringPhones) {
+  const phoneOf = new Map(crowd.map(({ trialId, phone }) => [trialId, phone]));
+  const rows = await db('readings')
+    .join('runs', 'runs.id', 'readings.run_id')
+    .whereIn('runs.trial_id', [...phoneOf.keys()])
+    .select('runs.trial_id', 'runs.number', 'readings.value', 'readings.state');
+  const valuesOf = new Map<string, number[]>();
+  for (const { trial_id, number, value, state } of rows) {
+    const key = `${phoneOf.get(trial_id)} ${number}`;
+    if (state === 'counts') valuesOf.set(key, [...(valuesOf.get(key) ?? []), value]);
+  }
+  const keptOnce = [...phones.answered].filter(([key, figure]) => {
+    const values = valuesOf.get(key) ?? [];
+    return values.length === 1 && values[0] === figure;
+  }).length;
+  return { keptOnce, keptBesides: rows.length - keptOnce };
+}
+
+/** Runs a crowd's trials to their end while web and worker are killed again and again. */
+export async function runWhileKilled(plan: KillPlan): Promise<KillOutcome> {
+  const product = await openTwoPrograms();
+  try {
+    const { standIns, db } = product;
+    const began = Date.now();
+    await standIns.setFaults({ duplicateWebhooks: true, delayWebhooks: { upToMilliseconds: 250 } });
+    const crowd = await buildCrowd(db, { shops: 1, each: plan.trials });
+    const phones = startPhones(standIns, crowd);
+    const { missed, ...kills } = await killAll(plan, product, phones);
+    while ((await countOpenRuns(db, crowd)) > 0 && Date.now() - began < plan.limitMilliseconds) {
+      await wait(250);
+    }
+    await phones.stop();
+    const { prompts } = phones;
+    return {
+      kills,
+      seconds: Math.round((Date.now() - began) / 1000),
+      runs: plan.trials * runsATrial,
+      reached: prompts.size,
+      duplicates: [...prompts.values()].reduce((sum, times) => sum + times - 1, 0),
+      ...(await compareReadings(db, crowd, phones)),
+      missed,
+    };
+  } finally {
+    await product.close();
+  }
+}
