@@ -82,6 +82,11 @@ export const personalTables: readonly PersonalTable[] = [
     column: 'written_by',
     fields: ['review_id', 'place', 'words', 'created_at', 'settled_at'],
   },
+  {
+    table: 'photos',
+    column: 'sent_by',
+    fields: ['run_id', 'width', 'height', 'source', 'created_at'],
+  },
   { table: 'notes', column: 'written_by', fields: ['trial_id', 'run_id', 'words', 'created_at'] },
   {
     table: 'problems',
