@@ -14,6 +14,44 @@ export interface CheckReadings {
 
 const MOST_PAIRS = 50;
 
+/** The figures that check runs are judged by. Better is positive. */
+export interface CheckComparison {
+  meanAtBest: number;
+  meanAtUsual: number;
+  gain: number;
+  /** Of one run, pooled within both kinds and with the trial's own error; null without spread to judge by. */
+  sd: number | null;
+  df: number;
+  interval: [number, number] | null;
+  /** Where the gain was expected, by the belief that chose the settings. */
+  predicted: [number, number];
+}
+
+/** @throws RangeError when either kind has no run or a figure is not finite */
+export function compareCheckRuns(
+  { basis }: Pick<BestBet, 'basis'>,
+  readings: CheckReadings,
+): CheckComparison {
+  const { atBest, atUsual } = readings;
+  if (atBest.length === 0 || atUsual.length === 0)
+    throw new RangeError('judgeConfirmation: readings need at least one run of each kind');
+  if (![...atBest, ...atUsual].every(Number.isFinite))
+    throw new RangeError('judgeConfirmation: readings must be finite numbers');
+  const { direction, error } = basis;
+  const [meanAtBest, meanAtUsual] = [mean(atBest), mean(atUsual)];
+  const gain = direction * (meanAtBest - meanAtUsual);
+  const share = 1 / atBest.length + 1 / atUsual.length;
+  const predicted = beliefOf(basis.gain, share).interval();
+
+  const df = atBest.length + atUsual.length - 2 + (error?.df ?? 0);
+  const ss = squares(atBest) + squares(atUsual) + (error?.ss ?? 0);
+  const sd = df > 0 ? Math.sqrt(ss / df) : null;
+  const halfWidth =
+    sd === null || !(sd > 0) ? null : studentTUpperQuantile(0.025, df) * sd * Math.sqrt(share);
+  const interval: [number, number] | null = halfWidth === null ? null : [gain - halfWidth, gain + halfWidth];
+  return { meanAtBest, meanAtUsual, gain, sd, df, interval, predicted };
+}
+
 /**
  * Whether check runs confirm the gain. Both kinds were run mixed within one session, so that a good or bad day cancels.
  *
@@ -23,22 +61,8 @@ const MOST_PAIRS = 50;
  * @throws RangeError when either kind has no run or a figure is not finite
  */
 export function judgeConfirmation(brief: Brief, bet: BestBet, readings: CheckReadings): ConfirmationVerdict {
-  const { atBest, atUsual } = readings;
-  if (atBest.length === 0 || atUsual.length === 0)
-    throw new RangeError('judgeConfirmation: readings need at least one run of each kind');
-  if (![...atBest, ...atUsual].every(Number.isFinite))
-    throw new RangeError('judgeConfirmation: readings must be finite numbers');
-  const { direction, error, worthHaving } = bet.basis;
-  const gain = direction * (mean(atBest) - mean(atUsual));
-  const share = 1 / atBest.length + 1 / atUsual.length;
-  const predicted = beliefOf(bet.basis.gain, share).interval();
-
-  const df = atBest.length + atUsual.length - 2 + (error?.df ?? 0);
-  const ss = squares(atBest) + squares(atUsual) + (error?.ss ?? 0);
-  const sd = df > 0 ? Math.sqrt(ss / df) : null;
-  const halfWidth =
-    sd === null || !(sd > 0) ? null : studentTUpperQuantile(0.025, df) * sd * Math.sqrt(share);
-  const interval: [number, number] | null = halfWidth === null ? null : [gain - halfWidth, gain + halfWidth];
+  const { worthHaving } = bet.basis;
+  const { gain, interval, predicted, sd, df } = compareCheckRuns(bet, readings);
 
   const because = whyShort({
     gain,
@@ -63,7 +87,12 @@ export function judgeConfirmation(brief: Brief, bet: BestBet, readings: CheckRea
       furtherPairs: 0,
       facts: about({ kind: 'held', values: shared, refs: { results: [0] } }),
     };
-  const furtherPairs = pairsToTell({ gain, sd, df, pairs: Math.min(atBest.length, atUsual.length) });
+  const furtherPairs = pairsToTell({
+    gain,
+    sd,
+    df,
+    pairs: Math.min(readings.atBest.length, readings.atUsual.length),
+  });
   return {
     outcome: 'notSureYet',
     ...shared,
