@@ -1,3 +1,6 @@
+import type audit from '../../locales/en/audit.json';
+import type auditModel from '../../locales/en/audit-model.json';
+import type auditSource from '../../locales/en/audit-source.json';
 import type board from '../../locales/en/board.json';
 import type common from '../../locales/en/common.json';
 import type errors from '../../locales/en/errors.json';
@@ -50,6 +53,9 @@ declare module 'i18next' {
       verdict: typeof verdict;
       'wizard-plan': typeof wizardPlan;
       'verdict-page': typeof verdictPage;
+      audit: typeof audit;
+      'audit-model': typeof auditModel;
+      'audit-source': typeof auditSource;
     };
   }
 }

@@ -23,6 +23,9 @@ export const namespaces = [
   'safety',
   'wizard-safety',
   'verdict-page',
+  'audit',
+  'audit-model',
+  'audit-source',
 ] as const;
 
 export type Namespace = (typeof namespaces)[number];

@@ -21,3 +21,8 @@ instance.init();
 export function translatorFor(language: Language): Translate {
   return instance.getFixedT(language, namespaces);
 }
+
+/** The words of a plan's review as its island has them, for a page that says the same. */
+export function reviewWordsFor(language: Language): TFunction<'plan-review'> {
+  return instance.getFixedT(language, 'plan-review');
+}

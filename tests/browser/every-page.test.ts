@@ -20,7 +20,7 @@ import { signIn } from '../setup/sign-in.ts';
 interface Visit {
   file: string;
   path: string;
-  as: 'nobody' | 'admin' | 'supervisor';
+  as: 'nobody' | 'admin' | 'supervisor' | 'engineer';
   /** The status to expect where it is not 200. */
   status?: number;
   /** Paper of a fixed size, which a narrow window scrolls. */
@@ -62,6 +62,12 @@ const visits: Visit[] = [
   { file: 'trials/[id]/board.astro', path: '/trials/:runningId/board', as: 'supervisor' },
   { file: 'trials/[id]/paper.astro', path: '/trials/:runningId/paper', as: 'supervisor', isPaper: true },
   { file: 'trials/[id]/review.astro', path: '/trials/:trialId/review', as: 'supervisor' },
+  { file: 'trials/[id]/audit/index.astro', path: '/trials/:runningId/audit', as: 'engineer' },
+  { file: 'trials/[id]/audit/data.astro', path: '/trials/:runningId/audit/data', as: 'engineer' },
+  { file: 'trials/[id]/audit/model.astro', path: '/trials/:runningId/audit/model', as: 'engineer' },
+  { file: 'trials/[id]/audit/checks.astro', path: '/trials/:runningId/audit/checks', as: 'engineer' },
+  { file: 'trials/[id]/audit/prediction.astro', path: '/trials/:runningId/audit/prediction', as: 'engineer' },
+  { file: 'trials/[id]/audit/check-runs.astro', path: '/trials/:runningId/audit/check-runs', as: 'engineer' },
   { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/plan', as: 'supervisor' },
   { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/crew', as: 'supervisor' },
 ];
@@ -89,9 +95,11 @@ beforeAll(async () => {
     nobody: await openPage(browser),
     admin: await openPage(browser),
     supervisor: await openPage(browser),
+    engineer: await openPage(browser),
   };
   await signIn(visitors.admin.page, running.url, 'admin');
   await signIn(visitors.supervisor.page, running.url, 'supervisor');
+  await signIn(visitors.engineer.page, running.url, 'engineer');
   runningId = await addRunningTrial(running);
   trialId = await addDraft(visitors.supervisor.page, running.url);
 });

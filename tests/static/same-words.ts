@@ -13,4 +13,12 @@ export const sameWords: SameWords = {
   'wizard:problem.minutesUnit': ['es', 'pl'],
   'wizard-plan:plan.minutesUnit': ['es', 'pl'],
   'wizard-plan:plan.upToHours': ['es'],
+  'audit:plan.factor': ['es'],
+  'audit:plan.powerLikely': ['es'],
+  'audit:part.model': ['pl'],
+  'audit-model:terms.t': ['es', 'pl', 'vi'],
+  'audit-model:terms.p': ['es'],
+  'audit-model:terms.f': ['es', 'pl', 'vi'],
+  'audit-model:anova.sources.total': ['es'],
+  'audit-model:anova.sources.model': ['pl'],
 };

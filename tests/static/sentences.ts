@@ -4,10 +4,10 @@ import type { Words } from './locale-files.ts';
 export const limits = { longest: 25, average: 15, grade: 6 };
 
 /** Namespaces of the engineer's pages, where the field's standard terms stand; all others are plain. */
-const auditNamespaces = new Set(['audit', 'plan-review']);
+const auditNamespaces = /^(audit(-.+)?|plan-review)$/;
 
 export function isPlain(key: string): boolean {
-  return !auditNamespaces.has(key.slice(0, key.indexOf(':')));
+  return !auditNamespaces.test(key.slice(0, key.indexOf(':')));
 }
 
 export interface Sentence {

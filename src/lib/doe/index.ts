@@ -70,4 +70,5 @@ export { countTimeAndMoney } from './design/time-and-money.ts';
 export { letterAt } from './design/words.ts';
 export * from './distributions/index.ts';
 export * from './facts.ts';
+export { type FigureName, type FigureSource, figureSources } from './figure-sources.ts';
 export { coreVersion } from './version.ts';
