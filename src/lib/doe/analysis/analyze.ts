@@ -1,4 +1,5 @@
 import { decideErrorPlan, isConstantWithin } from '../design/error-plan.ts';
+import { sizeFamilies } from '../design/family-sizes.ts';
 import type { ErrorPlan } from '../design/proposal.ts';
 import { indicatorColumns } from '../linear-algebra/indicators.ts';
 import type { LeastSquaresFit } from '../linear-algebra/least-squares.ts';
@@ -197,7 +198,7 @@ function stratumFinder(
   return (column) => (isConstantWithin(plots, column) ? 'whole' : 'sub');
 }
 
-/** Which effects are judged together: all of the result, those of each stratum by that stratum's error. */
+/** Which effects are judged together, curvature among them. */
 function familyFinder(
   model: ModelLayout,
   withCurvature: ModelLayout,
@@ -208,14 +209,8 @@ function familyFinder(
   const bend = withCurvature.hasCurvature
     ? [stratumOf(withCurvature.columns[withCurvature.blockColumns + 1] ?? [])]
     : [];
-  const isJudged = (stratum: StratumError['name'] | undefined) =>
-    plan.strata?.find(({ name }) => name === stratum)?.rung !== 'none';
-  const strata = new Set([...places, ...bend].filter(isJudged)).size;
-  return (stratum) => ({
-    tests: Math.max(1, [...places, ...bend].filter((place) => place === stratum).length),
-    hasCurvature: bend.includes(stratum),
-    strata: Math.max(1, strata),
-  });
+  const sizeOf = sizeFamilies([...places, ...bend], plan);
+  return (stratum) => ({ ...sizeOf(stratum), hasCurvature: bend.includes(stratum) });
 }
 
 function residualFindings(

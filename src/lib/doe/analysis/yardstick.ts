@@ -1,3 +1,4 @@
+import type { FamilySize } from '../design/family-sizes.ts';
 import { normalUpperTail } from '../distributions/normal.ts';
 import { normalQuantile } from '../distributions/normal-quantile.ts';
 import { studentTTwoSided, studentTUpperQuantile } from '../distributions/student-t.ts';
@@ -22,12 +23,8 @@ export type Yardstick =
   | { kind: 'known'; sd: number };
 
 /** Effects judged together because they share one error estimate. */
-export interface Family {
-  /** How many, curvature included. */
-  tests: number;
+export interface Family extends FamilySize {
   hasCurvature: boolean;
-  /** Strata whose effects are judged: families with independent errors, together one result's. */
-  strata: number;
 }
 
 const UNTESTED: Tested = { se: null, df: null, t: null, p: null, pFamily: null, ci: null };

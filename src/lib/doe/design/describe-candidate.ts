@@ -1,12 +1,17 @@
+import { termColumn } from '../analysis/terms.ts';
 import type { Brief } from '../brief.ts';
+import { indicatorColumns } from '../linear-algebra/indicators.ts';
 import type { Candidate } from './candidate.ts';
 import { catalogue } from './catalogue.ts';
 import { worstEffectVariance } from './effect-variance.ts';
+import { isConstantWithin } from './error-plan.ts';
+import { type JudgedIn, sizeFamilies } from './family-sizes.ts';
 import { groupBy } from './group-by.ts';
 import { listWarnings } from './list-warnings.ts';
 import type { PlanningScale } from './planning-scale.ts';
 import { type HardSettings, promise } from './promises.ts';
 import type { Proposal } from './proposal.ts';
+import { lettersUpTo } from './words.ts';
 
 /** A candidate with its promises and warnings; not yet compared with others. */
 export function describeCandidate(brief: Brief, candidate: Candidate, scale: PlanningScale): Proposal {
@@ -19,7 +24,7 @@ export function describeCandidate(brief: Brief, candidate: Candidate, scale: Pla
   const promises = promise({
     scale,
     errorPlan: wholePlots?.judged === false ? withoutWholeStratum(errorPlan) : errorPlan,
-    tested: structure.terms.length + (centerPoints > 0 ? 1 : 0),
+    familyOf: sizeFamilies(placeEffects(candidate), errorPlan),
     easyVariance: worstEffectVariance(structure, rows, easy),
     ...(grouped ? { hard: describeHard(candidate, settingsWhere(true), wholePlots.count) } : {}),
   });
@@ -48,6 +53,16 @@ export function describeCandidate(brief: Brief, candidate: Candidate, scale: Pla
     ...(structure.irregular === undefined ? {} : { efficiencies: structure.irregular.efficiencies }),
     layout: rows,
   };
+}
+
+/** The stratum in which each tested term, and the bend, will be judged. */
+function placeEffects({ structure, rows }: Candidate): JudgedIn[] {
+  const letters = lettersUpTo(structure.k);
+  const bend = rows.some((row) => row.center) ? [rows.map((row) => (row.center ? 1 : 0))] : [];
+  const columns = [...structure.terms.map((term) => termColumn(term, letters, rows)), ...bend];
+  if (structure.wholePlots === undefined) return columns.map(() => undefined);
+  const plots = indicatorColumns(rows.map((row) => row.wholePlot));
+  return columns.map((column) => (isConstantWithin(plots, column) ? 'whole' : 'sub'));
 }
 
 function describeHard(

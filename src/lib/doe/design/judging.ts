@@ -3,6 +3,7 @@ import { studentTUpperQuantile } from '../distributions/student-t.ts';
 import { studentizedMaximumModulusQuantile } from '../distributions/studentized-maximum-modulus.ts';
 import { assumeActive } from '../tables/assumed-active.ts';
 import { pseudoErrorPower, pseudoErrorSizeForPower } from '../tables/pseudo-error-power.ts';
+import type { FamilySize } from './family-sizes.ts';
 import type { ErrorPlan } from './proposal.ts';
 
 const alpha = 0.05;
@@ -20,16 +21,22 @@ export interface Judging {
   power: (size: number) => number;
 }
 
-/** `tested` effects judged on an error with its own degrees of freedom: exact, however many of them are active. */
-export function judgeByDegrees(df: number, tested: number): Judging {
+/**
+ * A family of effects judged on an error with its own degrees of freedom: exact, however many of them are active. Where strata share the promise about
+ * any effect, each is held to its share of alpha, as in the analysis.
+ */
+export function judgeByDegrees(df: number, { tests, strata }: FamilySize): Judging {
   const limit = remember(`t ${df}`, () => studentTUpperQuantile(alpha / 2, df));
-  const familyLimit = remember(`m ${df} ${tested}`, () =>
-    studentizedMaximumModulusQuantile(alpha, tested, df),
+  const share = -Math.expm1(Math.log1p(-alpha) / strata);
+  const familyLimit = remember(`m ${df} ${tests} ${strata}`, () =>
+    studentizedMaximumModulusQuantile(share, tests, df),
   );
   return {
     likelySize: remember(`t80 ${df}`, () => noncentralityForPower(promisedPower, df, limit)),
-    clearSize: remember(`m80 ${df} ${tested}`, () => noncentralityForPower(promisedPower, df, familyLimit)),
-    assumedActive: tested,
+    clearSize: remember(`m80 ${df} ${tests} ${strata}`, () =>
+      noncentralityForPower(promisedPower, df, familyLimit),
+    ),
+    assumedActive: tests,
     power: (size) => powerBeyond(size, df, limit),
   };
 }

@@ -71,7 +71,9 @@ function judgeSpread(brief: Brief, proposal: Proposal): Fact[] {
     return [];
   const corners = proposal.layout.filter((row) => !row.center).length;
   const standardError = Math.sqrt(trigamma((parts - 1) / 2) / corners);
-  const ratio = Math.exp(judgeByDegrees(df, proposal.terms.length + 1).likelySize * standardError);
+  const ratio = Math.exp(
+    judgeByDegrees(df, { tests: proposal.terms.length + 1, strata: 1 }).likelySize * standardError,
+  );
   return [{ kind: 'judges-spread', values: { parts, ratio }, refs: { results: [0] } }];
 }
 

@@ -1,3 +1,4 @@
+import type { FamilySize, JudgedIn } from './family-sizes.ts';
 import type { Judging } from './judging.ts';
 import { judgeByDegrees, judgeByPseudoError } from './judging.ts';
 import type { PlanningScale } from './planning-scale.ts';
@@ -6,8 +7,8 @@ import type { Detectable, ErrorPlan, ErrorStratum } from './proposal.ts';
 export interface PromiseQuestion {
   scale: PlanningScale;
   errorPlan: ErrorPlan;
-  /** Effects judged together: all tested terms, and curvature if there are middle runs. */
-  tested: number;
+  /** How many effects are judged together in a stratum: tested terms, and curvature if there are middle runs. */
+  familyOf: (stratum: JudgedIn) => FamilySize;
   /** Variance of the least well known main effect of an easy setting, for a run variance of 1; null when all settings are hard. */
   easyVariance: number | null;
   /** Absent when everything is shuffled freely. */
@@ -62,15 +63,16 @@ interface SeenKind {
   standardError: number;
 }
 
-function listKinds({ scale, errorPlan, tested, easyVariance, hard }: PromiseQuestion): SeenKind[] {
+function listKinds({ scale, errorPlan, familyOf, easyVariance, hard }: PromiseQuestion): SeenKind[] {
   const stratum = (name: ErrorStratum['name']) =>
     errorPlan.strata?.find((candidate) => candidate.name === name);
   const kinds: SeenKind[] = [];
-  const easy = judge(hard === undefined ? errorPlan : stratum('sub'), tested);
+  const easy =
+    hard === undefined ? judge(errorPlan, familyOf(undefined)) : judge(stratum('sub'), familyOf('sub'));
   if (easy !== null && easyVariance !== null) {
     kinds.push({ effect: 'easy', judging: easy, standardError: scale.runSd * Math.sqrt(easyVariance) });
   }
-  const whole = hard === undefined ? null : judge(stratum('whole'), tested);
+  const whole = hard === undefined ? null : judge(stratum('whole'), familyOf('whole'));
   if (hard !== undefined && whole !== null) {
     const variance = plotVariance(scale, hard, stratum('whole')?.df ?? 1);
     kinds.push({
@@ -93,8 +95,8 @@ function plotVariance({ plotSd, runSd }: PlanningScale, hard: HardSettings, df: 
   return share > 0 ? corners + share * varianceOf(hard.middleRunsEach) : corners;
 }
 
-function judge(error: ErrorPlan | ErrorStratum | undefined, tested: number): Judging | null {
+function judge(error: ErrorPlan | ErrorStratum | undefined, family: FamilySize): Judging | null {
   if (error === undefined || error.rung === 'none') return null;
-  if (error.df !== null) return judgeByDegrees(error.df, tested);
+  if (error.df !== null) return judgeByDegrees(error.df, family);
   return 'contrasts' in error ? judgeByPseudoError(error) : null;
 }
