@@ -42,7 +42,7 @@ export function reportPower(): void {
 }
 
 export function reportPromises(): void {
-  const trials = 2000;
+  const trials = 20_000;
   const rows = listProposals().flatMap((proposal) =>
     simulatePromises(proposal, trials, createRandomSource(SEED + 6)).map(
       ({ promise, rung, power: found }) => [
@@ -63,7 +63,7 @@ export function reportPromises(): void {
   report(
     'promises',
     'Power at the size promised',
-    `${trials} trials a plan, seed ${SEED + 6} (standard error .009): share of *likely* about a main effect of exactly the promised size; .80 was promised. Runs have standard deviation 1, whole plots add one of .5, as the promise assumes.`,
+    `${trials} trials a plan, seed ${SEED + 6} (standard error .003): share of *likely* about a main effect of exactly the promised size; .80 was promised. Runs have standard deviation 1, whole plots add one of .5, as the promise assumes.`,
     markdownTable(
       [
         'settings',

@@ -21,23 +21,36 @@ export interface Judging {
   power: (size: number) => number;
 }
 
+/** An error estimate pooled from units of unequal variance, as whole plots of corners and of fewer middle runs are. */
+export interface MixedError {
+  /** What the estimate is on average, over the variance that the effect itself has. */
+  excess: number;
+  /** Degrees of freedom that give the spread of the estimate (Satterthwaite 1946); the limits stay those of the plain count. */
+  df: number;
+}
+
 /**
  * A family of effects judged on an error with its own degrees of freedom: exact, however many of them are active. Where strata share the promise about
- * any effect, each is held to its share of alpha, as in the analysis.
+ * any effect, each is held to its share of alpha, as in the analysis. Sizes are in standard errors that the effect has, not in estimated ones.
  */
-export function judgeByDegrees(df: number, { tests, strata }: FamilySize): Judging {
-  const limit = remember(`t ${df}`, () => studentTUpperQuantile(alpha / 2, df));
+export function judgeByDegrees(
+  df: number,
+  { tests, strata }: FamilySize,
+  mixed: MixedError = { excess: 1, df },
+): Judging {
+  const stretch = Math.sqrt(mixed.excess);
   const share = -Math.expm1(Math.log1p(-alpha) / strata);
-  const familyLimit = remember(`m ${df} ${tests} ${strata}`, () =>
-    studentizedMaximumModulusQuantile(share, tests, df),
-  );
+  const limit = stretch * remember(`t ${df}`, () => studentTUpperQuantile(alpha / 2, df));
+  const familyLimit =
+    stretch *
+    remember(`m ${df} ${tests} ${strata}`, () => studentizedMaximumModulusQuantile(share, tests, df));
+  const sizeAt = (asked: number) =>
+    remember(`s ${mixed.df} ${asked}`, () => noncentralityForPower(promisedPower, mixed.df, asked));
   return {
-    likelySize: remember(`t80 ${df}`, () => noncentralityForPower(promisedPower, df, limit)),
-    clearSize: remember(`m80 ${df} ${tests} ${strata}`, () =>
-      noncentralityForPower(promisedPower, df, familyLimit),
-    ),
+    likelySize: sizeAt(limit),
+    clearSize: sizeAt(familyLimit),
     assumedActive: tests,
-    power: (size) => powerBeyond(size, df, limit),
+    power: (size) => powerBeyond(size, mixed.df, limit),
   };
 }
 

@@ -1,5 +1,5 @@
 import type { FamilySize, JudgedIn } from './family-sizes.ts';
-import type { Judging } from './judging.ts';
+import type { Judging, MixedError } from './judging.ts';
 import { judgeByDegrees, judgeByPseudoError } from './judging.ts';
 import type { PlanningScale } from './planning-scale.ts';
 import type { Detectable, ErrorPlan, ErrorStratum } from './proposal.ts';
@@ -72,31 +72,42 @@ function listKinds({ scale, errorPlan, familyOf, easyVariance, hard }: PromiseQu
   if (easy !== null && easyVariance !== null) {
     kinds.push({ effect: 'easy', judging: easy, standardError: scale.runSd * Math.sqrt(easyVariance) });
   }
-  const whole = hard === undefined ? null : judge(stratum('whole'), familyOf('whole'));
-  if (hard !== undefined && whole !== null) {
-    const variance = plotVariance(scale, hard, stratum('whole')?.df ?? 1);
-    kinds.push({
-      effect: 'hardToChange',
-      judging: whole,
-      standardError: Math.sqrt((4 / hard.plots) * hard.inflation * variance),
-    });
+  const ofPlots = stratum('whole');
+  if (hard !== undefined && ofPlots !== undefined) {
+    const { variance, mixed } = mixPlots(scale, hard, ofPlots.df ?? 1);
+    const whole = judge(ofPlots, familyOf('whole'), mixed);
+    const standardError = Math.sqrt((4 / hard.plots) * hard.inflation * variance);
+    if (whole !== null) kinds.push({ effect: 'hardToChange', judging: whole, standardError });
   }
   return kinds;
 }
 
 /**
- * Variance of the mean of a whole plot: its own set-up and its share of runs, as the error of hard settings shows it. Plots of middles hold fewer
- * runs, so their means vary more; they count by their share in the degrees of freedom.
+ * Variance of the mean of a whole plot of corners, its own set-up and its share of runs, and the error that judges it. Plots of middles hold fewer
+ * runs, so their means vary more: they make the error larger than the effect's own, and its degrees of freedom worth less.
  */
-function plotVariance({ plotSd, runSd }: PlanningScale, hard: HardSettings, df: number): number {
+function mixPlots(
+  { plotSd, runSd }: PlanningScale,
+  hard: HardSettings,
+  df: number,
+): { variance: number; mixed: MixedError } {
   const varianceOf = (runs: number) => plotSd ** 2 + runSd ** 2 / runs;
-  const share = Math.min(1, hard.middleDf / df);
-  const corners = (1 - share) * varianceOf(hard.runsEach);
-  return share > 0 ? corners + share * varianceOf(hard.middleRunsEach) : corners;
+  const variance = varianceOf(hard.runsEach);
+  const middleDf = Math.min(df, hard.middleDf);
+  const ratio = middleDf > 0 ? varianceOf(hard.middleRunsEach) / variance : 1;
+  const sum = df - middleDf + middleDf * ratio;
+  return {
+    variance,
+    mixed: { excess: sum / df, df: sum ** 2 / (df - middleDf + middleDf * ratio ** 2) },
+  };
 }
 
-function judge(error: ErrorPlan | ErrorStratum | undefined, family: FamilySize): Judging | null {
+function judge(
+  error: ErrorPlan | ErrorStratum | undefined,
+  family: FamilySize,
+  mixed?: MixedError,
+): Judging | null {
   if (error === undefined || error.rung === 'none') return null;
-  if (error.df !== null) return judgeByDegrees(error.df, family);
+  if (error.df !== null) return judgeByDegrees(error.df, family, mixed);
   return 'contrasts' in error ? judgeByPseudoError(error) : null;
 }
