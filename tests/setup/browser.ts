@@ -57,10 +57,14 @@ export async function openPage(browser: Browser, options: BrowserContextOptions 
  * @param rules only these, such as `color-contrast` where nothing but the colours has changed since the last look
  */
 export async function findAccessFaults(page: Page, rules: string[] | null = null): Promise<string[]> {
-  await page.evaluate(axeSource);
+  // Reading the rules in takes longer than a look at most pages, so each document reads them once.
+  if (!(await page.evaluate(() => 'axe' in globalThis))) await page.evaluate(axeSource);
   return page.evaluate(async (only) => {
     const { axe } = globalThis as unknown as { axe: typeof import('axe-core') };
-    const { violations } = await axe.run(only ? { runOnly: only } : {});
+    const { violations } = await axe.run({
+      resultTypes: ['violations'],
+      ...(only ? { runOnly: only } : {}),
+    });
     return violations.flatMap(({ id, nodes }) => nodes.map((node) => `${id}: ${node.target.join(' ')}`));
   }, rules);
 }

@@ -28,18 +28,21 @@ function newVisitor(): Visitor {
   return new Visitor(running.url, `198.51.100.${visitors}`);
 }
 
+/** What a link is for, and the address that takes it. */
+const addresses = { invite: 'invite', reset: 'reset', setup: 'setup', operator: 't' } as const;
+type Purpose = keyof typeof addresses;
+
 const deadLinks = {
   unknown: () => Promise.resolve('AAAAAAAAAAAAAAAAAAAAAA'),
-  used: (purpose: 'invite' | 'reset' | 'setup') =>
-    plantLink(db, { purpose, shopId, personId: danaId, columns: { used_at: 1 } }),
-  revoked: (purpose: 'invite' | 'reset' | 'setup') =>
+  used: (purpose: Purpose) => plantLink(db, { purpose, shopId, personId: danaId, columns: { used_at: 1 } }),
+  revoked: (purpose: Purpose) =>
     plantLink(db, { purpose, shopId, personId: danaId, columns: { revoked_at: 1 } }),
-  expired: (purpose: 'invite' | 'reset' | 'setup') =>
+  expired: (purpose: Purpose) =>
     plantLink(db, { purpose, shopId, personId: danaId, columns: { expires_at: Date.now() - 1 } }),
   'made for something else': () => plantLink(db, { purpose: 'share', shopId, personId: danaId }),
 };
 
-describe.each(['invite', 'reset', 'setup'] as const)('a dead link to /%s', (purpose) => {
+describe.each(Object.keys(addresses) as Purpose[])('a dead link (%s)', (purpose) => {
   it.each(Object.keys(deadLinks) as (keyof typeof deadLinks)[])('that is %s says only that', async (why) => {
     const token = await deadLinks[why](purpose);
     const before = await db('people').where({ id: danaId }).first('password_hash');
@@ -53,8 +56,8 @@ describe.each(['invite', 'reset', 'setup'] as const)('a dead link to /%s', (purp
       email: 'somebody@another.example',
     };
     for (const answer of [
-      await newVisitor().get(`/${purpose}/${token}`),
-      await newVisitor().postForm(`/${purpose}/${token}`, form),
+      await newVisitor().get(`/${addresses[purpose]}/${token}`),
+      await newVisitor().postForm(`/${addresses[purpose]}/${token}`, form),
     ]) {
       expect(answer.status).toBe(410);
       const page = await answer.text();
