@@ -2,6 +2,7 @@ import node from '@astrojs/node';
 import react from '@astrojs/react';
 import tailwindcss from '@tailwindcss/vite';
 import { defineConfig } from 'astro/config';
+import { noSchemaWriter, pureCore } from './src/commands/build/lean-browser-code.mjs';
 import { figuresFace } from './src/styles/figures-face.mjs';
 
 /** The daily server knows nothing of src/main.ts: this migrates, seeds and starts the worker once it listens. */
@@ -13,6 +14,9 @@ const backgroundWork = {
     },
   },
 };
+
+/** Browsers of the last years; what they know need not be written out for older ones. */
+const browsers = ['chrome111', 'firefox115', 'safari16.4'];
 
 export default defineConfig({
   output: 'server',
@@ -36,8 +40,10 @@ export default defineConfig({
     },
   },
   vite: {
-    plugins: [figuresFace(), tailwindcss()],
+    plugins: [figuresFace(), tailwindcss(), pureCore, noSchemaWriter],
+    // The workers of pages are bundled apart.
+    worker: { plugins: () => [pureCore, noSchemaWriter] },
     // Tokens are written light-dark(); for these browsers the minifier turns them into custom properties.
-    build: { cssMinify: 'lightningcss', cssTarget: ['chrome111', 'firefox115', 'safari16.4'] },
+    build: { target: browsers, minify: 'terser', cssMinify: 'lightningcss', cssTarget: browsers },
   },
 });
