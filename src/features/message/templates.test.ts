@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { demoRunTexts } from '../../../tests/fixtures/run-texts.ts';
+import { demoVerdictTexts } from '../../../tests/fixtures/verdict-texts.ts';
 import { languages } from '../../i18n/languages.ts';
 import { countSegments, isSevenBit } from '../../lib/messages/index.ts';
 import { type TemplateName, type TemplateParams, templateNames, templates } from './templates.ts';
@@ -22,6 +23,7 @@ const samples: { [Name in TemplateName]: TemplateParams<Name> } = {
   planSentBackText: { shop: 'Harrow Lane Foods', reviewer: 'Sam', trial: 'Line 3 seals' },
   planApprovedText: { shop: 'Harrow Lane Foods', reviewer: 'Sam', trial: 'Line 3 seals' },
   ...demoRunTexts,
+  ...demoVerdictTexts,
 };
 
 /** Words and figures among the parameters, however deep; the names of kinds are no words. */
@@ -55,7 +57,8 @@ describe.each(templateNames)('%s', (template) => {
 
 describe('texts in plain letters', () => {
   const texts = templateNames.filter(
-    (name) => templates[name].channel === 'text' && !Object.hasOwn(demoRunTexts, name),
+    (name) =>
+      templates[name].channel === 'text' && !Object.hasOwn({ ...demoRunTexts, ...demoVerdictTexts }, name),
   );
 
   it.each(languages)('fit one segment each in %s with the demo shop', (language) => {

@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { runTemplates } from './run-templates.ts';
 import { mail, text } from './template-kind.ts';
+import { verdictTemplates } from './verdict-templates.ts';
 
 export type { Template } from './template-kind.ts';
 
@@ -100,6 +101,7 @@ export const templates = {
     (t, params) => t('texts:planApprovedText', params),
   ),
   ...runTemplates,
+  ...verdictTemplates,
 } as const;
 
 export type TemplateName = keyof typeof templates;

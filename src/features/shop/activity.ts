@@ -65,6 +65,7 @@ export const activityKinds = [
   'trial.decided',
   'trial.opened-again',
   'trial.followed',
+  'trial.checked-back',
   'verdict.made',
   'verdict.shared',
   'verdict.share-ended',

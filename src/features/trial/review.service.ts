@@ -3,6 +3,7 @@ import { inTransaction } from '../../server/db/in-transaction.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
 import { AppError } from '../../server/errors.ts';
 import { newId } from '../../server/ids.ts';
+import { afterSignOff } from '../verdict/after-sign-off.service.ts';
 import { readStoredAnswers } from './answers.repository.ts';
 import { findLatestPlan } from './plan.repository.ts';
 import { requireComplete } from './readiness.service.ts';
@@ -106,7 +107,8 @@ export function decideReview(
       details: { subject: review.subject, round: review.round, hash: review.subject_hash },
     });
     if (state !== 'taken back') {
-      await tellAsker(inner, { trial, review, decision: state, reviewerId: reader.personId });
+      const follow = review.subject === 'plan' ? tellAsker : afterSignOff;
+      await follow(inner, { trial, review, decision: state, reviewerId: reader.personId });
     }
     return showReview(inner, await findReviewOf(inner, review.id), reader);
   });

@@ -5,6 +5,7 @@ import { holdTrialAs } from '../run/hold-trial.service.ts';
 import { pauseTrial } from '../run/pause-trial.service.ts';
 import { raiseProblemAs, sayChange, settleProblem } from '../run/problem.service.ts';
 import { resumeTrial } from '../run/resume-trial.service.ts';
+import { askVerdictAgain } from '../verdict/ask-sign-off.service.ts';
 import { planChecks } from '../verdict/check-runs.service.ts';
 import { adopt, leaveAsIs, openAgain } from '../verdict/decide.service.ts';
 import { sendForReview } from './review.service.ts';
@@ -24,7 +25,10 @@ type Handler<Event extends TrialEventBody['event']> = (
 
 /** Events of a running trial join here, with their body in `trialEventSchema`. */
 const handlers: { [Event in TrialEventBody['event']]: Handler<Event> } = {
-  'send for review': sendForReview,
+  'send for review': (scope, which, reader) =>
+    which.trial.state === 'readings in'
+      ? askVerdictAgain(scope, which, reader)
+      : sendForReview(scope, which, reader),
   start: startTrial,
   adopt,
   'not now': leaveAsIs,

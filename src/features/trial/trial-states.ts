@@ -130,6 +130,14 @@ export const transitions: readonly Transition[] = [
   { from: 'held', event: 'judge', by: ['trial.run'], to: 'readings in' },
   { from: 'readings in', event: 'verdict made', by: ['product'], to: 'deciding', when: ['no review due'] },
   { from: 'readings in', event: 'verdict made', by: ['product'], to: 'verdict review', when: ['review due'] },
+  // A verdict that was sent back may be asked about again as it stands.
+  {
+    from: 'readings in',
+    event: 'send for review',
+    by: ['trial.write'],
+    to: 'verdict review',
+    when: ['review due'],
+  },
   // A figure that was put right makes the next verdict, and what was agreed to is asked about anew.
   { from: 'readings in', event: 'reading corrected', by: ['product'], to: 'readings in' },
   { from: 'verdict review', event: 'reading corrected', by: ['product'], to: 'readings in' },

@@ -4,12 +4,14 @@ import { AppError } from '../../server/errors.ts';
 import { findShop } from '../shop/shop.repository.ts';
 import { readStoredAnswers } from '../trial/answers.repository.ts';
 import { namesHazard } from '../trial/missing-answers.ts';
-import { openReview } from '../trial/review.service.ts';
 import type { Trial } from '../trial/trial.ts';
 import { findStep, findSteps, type TrialReader, takeStep } from '../trial/trial-reader.service.ts';
+import { announceAdoption } from './adopted.service.ts';
+import { askSignOff, engineersBeside } from './ask-sign-off.service.ts';
 import { insertDecision } from './decision.repository.ts';
 import type { Adopt, NotNow, OpenAgain } from './decision.schema.ts';
 import type { DecisionOutcome } from './decision.ts';
+import { cancelCheckBacks } from './sign-off.repository.ts';
 import type { StoredVerdict } from './stored-verdict.ts';
 import { findVerdict } from './verdict.repository.ts';
 
@@ -60,7 +62,7 @@ async function keepDecision(
 /**
  * Takes the new settings over. They go to the engineer first where the shop's rules say so. Settings whose check runs did
  * not hold are taken over only as unchecked, with a reason.
- * @throws AppError `not-now`, `forbidden`, `changed-meanwhile`, `invalid` naming the field
+ * @throws AppError `not-now`, `forbidden`, `changed-meanwhile`, `invalid` naming the field, `no-reviewer`
  */
 export async function adopt(
   scope: ShopScope,
@@ -76,17 +78,14 @@ export async function adopt(
   const due = await isReviewDue(scope, trial.id);
   const step = steps.find(({ when }) => when?.includes(due ? 'review due' : 'no review due'));
   if (!step) throw new RangeError('adopt: the table of states has no step for it');
+  const engineers = due ? await engineersBeside(scope, reader.personId) : [];
+  if (due && engineers.length === 0) throw new AppError('no-reviewer');
   await takeStep(scope, trial, step, revision);
   const outcome = held ? 'adopt' : 'adopt unchecked';
   await keepDecision(scope, { trial, verdict, outcome, note, personId: reader.personId });
-  if (!due) return;
-  await openReview(scope, {
-    trial_id: trial.id,
-    subject: 'adoption',
-    subject_hash: verdict.inputHash,
-    state: 'asked',
-    personId: reader.personId,
-  });
+  if (!due) return announceAdoption(scope, { trial, verdict });
+  const asked = { hash: verdict.inputHash, askedBy: reader.personId, engineers };
+  await askSignOff(scope, { trial, what: 'adoption', ...asked });
 }
 
 /** Leaves the machine as it is, for now or for good. @throws AppError `not-now`, `forbidden`, `changed-meanwhile` */
@@ -121,5 +120,6 @@ export async function openAgain(
     note: reason,
     decidedBy: reader.personId,
   });
+  await cancelCheckBacks(scope, trial.id);
   await recordActivity(scope, { kind: 'trial.opened-again', subjectId: trial.id, trialId: trial.id });
 }

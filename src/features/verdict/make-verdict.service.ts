@@ -11,6 +11,7 @@ import { findLatestPlan } from '../trial/plan.repository.ts';
 import { openReview } from '../trial/review.service.ts';
 import { findTrial, updateTrial } from '../trial/trial.repository.ts';
 import type { Trial } from '../trial/trial.ts';
+import { askSignOff, engineersBeside, wasSentBack } from './ask-sign-off.service.ts';
 import { type Judgement, judgeTrial, type TrialToJudge } from './judge-trial.service.ts';
 import { findVerdict, findVerdictOfInput, insertVerdict } from './verdict.repository.ts';
 import { listVerdictRuns } from './verdict-runs.repository.ts';
@@ -45,20 +46,18 @@ export async function makeVerdict(scope: ShopScope, trialId: string): Promise<bo
   const input = await readTrialToJudge(scope, trialId);
   const judgement = input && judgeTrial(input);
   if (!judgement) return false;
-  const reviewDue = await isReviewDue(scope, trialId);
-  return inTransaction(scope, (inner) => keepVerdict(inner, trial, judgement, reviewDue));
+  return inTransaction(scope, (inner) => keepVerdict(inner, trial, judgement));
 }
 
-async function keepVerdict(
-  scope: ShopScope,
-  trial: Trial,
-  judgement: Judgement,
-  reviewDue: boolean,
-): Promise<boolean> {
+async function keepVerdict(scope: ShopScope, trial: Trial, judgement: Judgement): Promise<boolean> {
+  // What an engineer sent back waits for another reading, or for somebody to ask again.
+  if (await wasSentBack(scope, trial.id, judgement.inputHash)) return false;
+  const due = await isReviewDue(scope, trial.id);
+  const engineers = due ? await engineersBeside(scope, trial.ownerId) : [];
   const moved = await updateTrial(
     scope,
     { id: trial.id, from: ['readings in'], revision: trial.revision },
-    { state: reviewDue ? 'verdict review' : 'deciding' },
+    { state: engineers.length > 0 ? 'verdict review' : 'deciding' },
   );
   if (!moved) return false;
   const { inputHash, coreVersion, facts, results } = judgement;
@@ -81,12 +80,16 @@ async function keepVerdict(
     trialId: trial.id,
     details: { n, inputHash, coreVersion },
   });
-  if (reviewDue) {
+  if (engineers.length > 0) {
+    const asked = { hash: inputHash, askedBy: trial.ownerId, engineers };
+    await askSignOff(scope, { trial, what: 'verdict', ...asked });
+  } else if (due) {
+    // Nobody else could look: that stands on record, and the trial does not hang.
     await openReview(scope, {
       trial_id: trial.id,
       subject: 'verdict',
       subject_hash: inputHash,
-      state: 'asked',
+      state: 'unchecked',
       personId: trial.ownerId,
     });
   }

@@ -1,6 +1,7 @@
 import type { BestBet, Brief, ConfirmationVerdict, Fact, Verdict } from '../../lib/doe/index.ts';
 import type { CautionName, HazardName, StopRule } from '../trial/answer-choices.ts';
 import type { TrialState } from '../trial/trial-states.ts';
+import type { Decision } from './decision.ts';
 
 /** A run as the verdict's pages show it. */
 export interface ViewedRun {
@@ -43,7 +44,7 @@ export interface VerdictView {
   value: { partsPerWeek: number | null; costOfBadPart: number | null; currency: string };
   /** From the first run to the last reading; null where nobody knows. */
   hours: number | null;
-  decisions: { outcome: string; note: string; at: number }[];
+  decisions: Decision[];
   mayDecide: boolean;
   /** Whether an engineer must agree first. */
   reviewDue: boolean;

@@ -32,6 +32,7 @@ const bodies: Record<string, Attempt['body']> = {
   'POST /api/trials/[id]/practice': json({}),
   'POST /api/trials/[id]/events': json({ event: 'start', revision: 1 }),
   'POST /api/trials/[id]/share': json({}),
+  'POST /api/trials/[id]/check-back': json({ holds: true }),
   'POST /api/trials/[id]/next': json({ id: newId(), reason: 'untie' }),
   'POST /api/runs/[id]/events': json({ event: 'skip', revision: 1, submission: newId() }),
   'POST /api/reviews/[id]/approve': json({ round: 1 }),

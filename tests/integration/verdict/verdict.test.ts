@@ -78,6 +78,7 @@ describe('a verdict', () => {
 
   it('waits for the engineer where the rules say so', async () => {
     const scene = await setTheScene({ verdict_review: 'always' });
+    await buildPerson(scene.scope, ['engineer'], { password_hash: 'x' });
     const id = await buildMeasuredTrial(scene.scope, { ownerId: scene.ownerId, read: hotter });
     await makeVerdict(scene.scope, id);
     expect(await look(scene, id)).toMatchObject({
@@ -147,6 +148,7 @@ describe('after a verdict', () => {
 
   it('an adoption goes to the engineer where the rules say so', async () => {
     const scene = await setTheScene({ adoption_review: 'always' });
+    await buildPerson(scene.scope, ['engineer'], { password_hash: 'x' });
     const id = await buildMeasuredTrial(scene.scope, { ownerId: scene.ownerId, read: hotter });
     await makeVerdict(scene.scope, id);
     await act(scene, id, { event: 'adopt', unchecked: true, note: 'an urgent order' });

@@ -1,6 +1,7 @@
 import { useTranslation } from 'react-i18next';
 import { Table, type TableColumn } from '../../../components/ui/Table.tsx';
 import type { Formats } from '../../../i18n/format.ts';
+import { machineAddress } from '../../verdict/machine-history.ts';
 import type { ListTrials, PublicTrial } from '../trial.schema.ts';
 import { trialAddress } from '../trial-address.ts';
 import { sortedTrialsAddress } from '../trials-address.ts';
@@ -41,7 +42,12 @@ export function TrialsTable({ trials, list, formats, moves }: Props) {
       key: 'machine',
       header: t('column.machine'),
       sortHref: sortedTrialsAddress(list, 'machine'),
-      cell: ({ machine }) => <span className="wrap-anywhere">{machine}</span>,
+      cell: ({ machine }) =>
+        machine !== '' && (
+          <a className="wrap-anywhere" href={machineAddress(machine)}>
+            {machine}
+          </a>
+        ),
     },
     { key: 'state', header: t('column.state'), cell: ({ state }) => <TrialStateMark state={state} /> },
     { key: 'who', header: t('column.who'), cell: ({ ownerName }) => ownerName },

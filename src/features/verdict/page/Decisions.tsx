@@ -1,11 +1,5 @@
 import type { PageWording } from './page-wording.ts';
 
-const outcomes = ['adopt', 'adopt unchecked', 'not now', "keep today's", 'opened again'] as const;
-
-function isOutcome(text: string): text is (typeof outcomes)[number] {
-  return outcomes.some((known) => known === text);
-}
-
 /** What was decided so far, newest first, without a name. */
 export function Decisions({ view, t, formats }: PageWording) {
   if (view.decisions.length === 0) return null;
@@ -15,7 +9,7 @@ export function Decisions({ view, t, formats }: PageWording) {
       <ul className="verdict-lines">
         {view.decisions.map(({ outcome, note, at }) => (
           <li key={at}>
-            <strong>{isOutcome(outcome) ? t(`verdict-page:outcome.${outcome}`) : outcome}</strong>
+            <strong>{t(`verdict-page:outcome.${outcome}`)}</strong>
             {` · ${formats.dateTime(at)}`}
             {note !== '' && <span className="block">{note}</span>}
           </li>

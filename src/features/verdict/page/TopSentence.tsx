@@ -1,7 +1,13 @@
+import type { ReactNode } from 'react';
 import { Callout } from '../../../components/ui/Callout.tsx';
 import { listDials, movedPlaces } from '../headline-words.ts';
 import { sayFact } from '../verdict-words.ts';
 import { keepsToday, type PageWording } from './page-wording.ts';
+
+interface Props extends PageWording {
+  /** Where the engineer's word stands, for those inside. */
+  readonly signOff?: ReactNode;
+}
 
 /** One or two sentences: after check runs what they said, before them what the trial said. */
 export function sayTop(wording: PageWording): string {
@@ -19,7 +25,7 @@ function sayBest(wording: PageWording): string | null {
   });
 }
 
-export function TopSentence(wording: PageWording) {
+export function TopSentence({ signOff, ...wording }: Props) {
   const { view, t, formats } = wording;
   const best = sayBest(wording);
   const made = view.runs.filter(({ end }) => end !== 'notRun').length;
@@ -44,11 +50,12 @@ export function TopSentence(wording: PageWording) {
           actions={<a href={`/trials/${view.trialId}/verdict`}>{t('verdict-page:newer.link')}</a>}
         />
       )}
-      {view.reviewDue && (
-        <Callout tone="caution" title={t('verdict-page:review.title')}>
-          {t('verdict-page:review.words')}
-        </Callout>
-      )}
+      {signOff ??
+        (view.reviewDue && (
+          <Callout tone="caution" title={t('verdict-page:review.title')}>
+            {t('verdict-page:review.words')}
+          </Callout>
+        ))}
     </div>
   );
 }

@@ -17,6 +17,9 @@ interface Props extends PageWording {
   readonly trySettings?: ReactNode;
   readonly decide?: ReactNode;
   readonly share?: ReactNode;
+  readonly signOff?: ReactNode;
+  /** How settings hold, and opening again. */
+  readonly after?: ReactNode;
   /** How the next trial begins, and those that began already. */
   readonly nextTrial?: ReactNode;
   readonly following?: ReactNode;
@@ -28,13 +31,15 @@ export function VerdictBody({
   trySettings,
   decide,
   share,
+  signOff,
+  after,
   nextTrial,
   following,
   ...wording
 }: Props) {
   return (
     <div className="verdict">
-      <TopSentence {...wording} />
+      <TopSentence {...wording} signOff={signOff} />
       <WhatToSet {...wording} />
       <HowMuchBetter {...wording} />
       <CanYouTrust {...wording} checkRuns={checkRuns} />
@@ -49,6 +54,7 @@ export function VerdictBody({
       <div className="no-print">{nextTrial}</div>
       <Decisions {...wording} />
       <div className="no-print">{decide}</div>
+      <div className="no-print">{after}</div>
       <div className="no-print">{share}</div>
     </div>
   );
