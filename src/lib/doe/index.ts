@@ -71,4 +71,5 @@ export { letterAt } from './design/words.ts';
 export * from './distributions/index.ts';
 export * from './facts.ts';
 export { type FigureName, type FigureSource, figureSources } from './figure-sources.ts';
+export { listPseudoErrorTails } from './tables/pseudo-error-limits.ts';
 export { coreVersion } from './version.ts';

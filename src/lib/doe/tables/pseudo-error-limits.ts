@@ -75,3 +75,16 @@ function cubicThrough(values: readonly number[], place: number): number {
     (at(start + 3) * x * (x - 1) * (x - 2)) / 6
   );
 }
+
+/** The table's row for such a plan, for whoever works its limits out anew: ln of the tail at t = exp(start + index x step). */
+export function listPseudoErrorTails(plan: PseudoErrorPlan): {
+  start: number;
+  step: number;
+  tails: Record<PseudoErrorStatistic, readonly number[]>;
+} | null {
+  const row = rows.get(`${plan.contrasts}:${plan.replicateDf}`);
+  if (row === undefined) return null;
+  const { single, outside, family, familyAndOutside } = row;
+  const { start, step } = table.grid;
+  return { start, step, tails: { single, outside, family, familyAndOutside } };
+}
