@@ -7,6 +7,7 @@ import type errors from '../../locales/en/errors.json';
 import type front from '../../locales/en/front.json';
 import type mail from '../../locales/en/mail.json';
 import type myPage from '../../locales/en/my-page.json';
+import type auditPack from '../../locales/en/audit-pack.json';
 import type people from '../../locales/en/people.json';
 import type phone from '../../locales/en/phone.json';
 import type planFacts from '../../locales/en/plan-facts.json';
@@ -30,6 +31,7 @@ declare module 'i18next' {
   interface CustomTypeOptions {
     defaultNS: 'common';
     resources: {
+      'audit-pack': typeof auditPack;
       'wizard-safety': typeof wizardSafety;
       safety: typeof safety;
       'plan-review': typeof planReview;

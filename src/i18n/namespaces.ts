@@ -26,6 +26,7 @@ export const namespaces = [
   'audit',
   'audit-model',
   'audit-source',
+  'audit-pack',
 ] as const;
 
 export type Namespace = (typeof namespaces)[number];

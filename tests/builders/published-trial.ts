@@ -144,8 +144,7 @@ export async function buildPublishedTrial(
     );
     const actual = JSON.stringify({ v: 1, values: reached });
     await db('runs').where({ id: runId }).update({ state: 'done', end: 'measured', actual });
-    const figure =
-      source?.n === undefined ? { value: source?.y } : { rejects: source.y, lot: source.n };
+    const figure = source?.n === undefined ? { value: source?.y } : { rejects: source.y, lot: source.n };
     await db('readings').insert({
       ...figure,
       id: newId(),

@@ -35,6 +35,15 @@ export const browserTools = [
   },
 ];
 
+/** What the integration tests need besides: the audit pack is worked out again by a program that is not ours. @type {Tool[]} */
+export const recomputeTools = [
+  {
+    programs: ['Rscript'],
+    packages: ['r-base-core'],
+    purpose: 'R',
+  },
+];
+
 /**
  * @param {string} program
  * @returns {string | undefined} where it lies on the PATH

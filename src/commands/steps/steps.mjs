@@ -4,7 +4,7 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { buildProductIfChanged } from '../build/product.mjs';
 import { runChild } from '../machine/child.mjs';
-import { browserTools, findMissing, installDebianPackages } from '../machine/debian.mjs';
+import { browserTools, findMissing, installDebianPackages, recomputeTools } from '../machine/debian.mjs';
 import { installPackages } from '../machine/packages.mjs';
 import { countReport } from './vitest-report.mjs';
 
@@ -50,18 +50,26 @@ export const unitStep = { name: 'unit', run: () => runTests(['unit', 'dom']) };
 /** @type {Step} */
 export const integrationStep = {
   name: 'integration',
-  run: () => runTests(['integration']),
+  run: async () => {
+    await installTools(recomputeTools);
+    return runTests(['integration']);
+  },
 };
 
 /** @type {Step} */
 export const browserStep = {
   name: 'browser',
   run: async () => {
-    const missing = findMissing(browserTools);
-    if (missing.length > 0) await installDebianPackages(missing);
+    await installTools(browserTools);
     return runTests(['browser']);
   },
 };
+
+/** @param {import('../machine/debian.mjs').Tool[]} tools */
+async function installTools(tools) {
+  const missing = findMissing(tools);
+  if (missing.length > 0) await installDebianPackages(missing);
+}
 
 /**
  * Runs a checker; its words are shown only when it finds something.

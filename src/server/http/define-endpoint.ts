@@ -23,6 +23,8 @@ interface Declaration<Params, Query, Body, Output> {
   /** Names each public field: whatever else a service returns does not leave the house. */
   output: z.ZodType<Output>;
   status?: number;
+  /** What it answers with, where that is no JSON. */
+  mediaType?: string;
   /** Whether a program may call it with a person's token; without it only a session opens it. */
   byToken?: boolean;
 }

@@ -18,7 +18,7 @@ export interface StoredResult {
 }
 
 /** The stored results of a verdict; they were written by the core, or checked against it when they were brought in. */
-function resultsOf(verdict: TrialFile['verdicts'][number] | undefined): StoredResult[] {
+export function resultsOf(verdict: TrialFile['verdicts'][number] | undefined): StoredResult[] {
   return (verdict?.analysis.results ?? []) as unknown as StoredResult[];
 }
 
@@ -42,7 +42,20 @@ function listResults(results: readonly StoredResult[]): CsvCell[][] {
   const rungOf = ({ errorPlan }: Analysis, name: string) =>
     errorPlan.strata?.find((stratum) => stratum.name === name)?.rung ?? null;
   return [
-    ['result', 'name', 'unit', 'kind', 'lot_size', 'scale', 'alpha', 'terms', 'rung', 'rung_whole', 'rung_sub', 'regular'],
+    [
+      'result',
+      'name',
+      'unit',
+      'kind',
+      'lot_size',
+      'scale',
+      'alpha',
+      'terms',
+      'rung',
+      'rung_whole',
+      'rung_sub',
+      'regular',
+    ],
     ...results.map(({ spec, input, analysis }, result): CsvCell[] => [
       result,
       spec.name,

@@ -27,7 +27,11 @@ function listTest(part: string, item: string, { se, df, t, p, pFamily, ci }: Tes
 
 function listEffect(estimate: TermEstimate): Loose[] {
   const { term, effect, ss } = estimate;
-  return [['effect', term, 'effect', effect], ['effect', term, 'ss', ss], ...listTest('effect', term, estimate)];
+  return [
+    ['effect', term, 'effect', effect],
+    ['effect', term, 'ss', ss],
+    ...listTest('effect', term, estimate),
+  ];
 }
 
 function listError({ error, basis, within, lenth }: Analysis): Loose[] {
@@ -44,7 +48,9 @@ function listError({ error, basis, within, lenth }: Analysis): Loose[] {
     ['within', 'sd', 'value', within?.sd],
     ['within', 'df', 'value', within?.df],
     ['within', 'parts', 'value', within?.parts],
-    ...(['s0', 'pse', 'd', 'me', 'sme'] as const).map((name): Loose => ['lenth', name, 'value', lenth?.[name]]),
+    ...(['s0', 'pse', 'd', 'me', 'sme'] as const).map(
+      (name): Loose => ['lenth', name, 'value', lenth?.[name]],
+    ),
   ];
 }
 

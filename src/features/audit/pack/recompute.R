@@ -410,8 +410,8 @@ analyze <- function(spec) {
 # ---- beside the product's own ------------------------------------------------------------------------------------------------
 results <- read("results.csv")
 for (index in seq_len(nrow(results))) { mine$result <- results$result[index]; analyze(as.list(results[index, ])) }
-own <- do.call(rbind, lapply(mine$rows, function(row) data.frame(result = row[[1]], part = row[[2]], item = row[[3]],
-  statistic = row[[4]], recomputed = row[[5]], scale = row[[6]], stringsAsFactors = FALSE)))
+pick <- function(place) sapply(mine$rows, `[[`, place)
+own <- data.frame(result = pick(1), part = pick(2), item = pick(3), statistic = pick(4), recomputed = pick(5), scale = pick(6), stringsAsFactors = FALSE)
 product <- read("product.csv"); product$value <- num(product$value)
 key <- function(table) paste(table$result, table$part, table$item, table$statistic)
 own$product <- product$value[match(key(own), key(product))]
