@@ -1,5 +1,6 @@
 import type audit from '../../locales/en/audit.json';
 import type auditModel from '../../locales/en/audit-model.json';
+import type auditPack from '../../locales/en/audit-pack.json';
 import type auditSource from '../../locales/en/audit-source.json';
 import type board from '../../locales/en/board.json';
 import type common from '../../locales/en/common.json';
@@ -7,7 +8,6 @@ import type errors from '../../locales/en/errors.json';
 import type front from '../../locales/en/front.json';
 import type mail from '../../locales/en/mail.json';
 import type myPage from '../../locales/en/my-page.json';
-import type auditPack from '../../locales/en/audit-pack.json';
 import type people from '../../locales/en/people.json';
 import type phone from '../../locales/en/phone.json';
 import type planFacts from '../../locales/en/plan-facts.json';

@@ -18,7 +18,7 @@ function effectsOf(name: string, { intercept, terms, basis }: Analysis, { t }: P
     t('audit-pack:report.effect'),
     t('audit-pack:report.se'),
     t('audit-pack:report.interval', { level }),
-    t('audit-pack:report.p'),
+    'p',
     t('audit-pack:report.pFamily'),
   ];
   const rows = [intercept, ...terms].map(({ term, effect, se, ci, p, pFamily, aliasedWith }) => [
@@ -38,8 +38,8 @@ function varianceOf(name: string, { anova }: Analysis, { t }: PackReader): strin
     t('audit-pack:report.df'),
     t('audit-pack:report.ss'),
     t('audit-pack:report.ms'),
-    t('audit-pack:report.f'),
-    t('audit-pack:report.p'),
+    'F',
+    'p',
   ];
   const rows = anova.map(({ source, df, ss, ms, f, p }) => [
     t(`audit-pack:report.source.${source}`),

@@ -74,7 +74,8 @@ function readingsHtml({ runs }: TrialFile, { brief }: Plan, { t }: PackReader): 
 
 function verdictHtml(file: TrialFile, said: readonly string[], { t, formats }: PackReader): string {
   const verdict = file.verdicts.at(-1);
-  if (!verdict) return sectionHtml(t('audit-pack:report.plan'), `<p>${escapeHtml(t('audit-pack:report.noVerdict'))}</p>`);
+  if (!verdict)
+    return sectionHtml(t('audit-pack:report.plan'), `<p>${escapeHtml(t('audit-pack:report.noVerdict'))}</p>`);
   return sectionHtml(
     t('audit-pack:report.verdict', { n: verdict.n }),
     ...said.map((sentence) => `<p>${escapeHtml(sentence)}</p>`),
@@ -95,7 +96,9 @@ function historyHtml({ decisions, reviews }: TrialFile, { t, formats }: PackRead
     [formats.dateTime(at), t(`audit-pack:report.outcome.${outcome}`), note].filter(Boolean).join(': '),
   );
   const reviewed = reviews.map(({ subject, round, state, decidedAt, askedAt, subjectHash }) => {
-    const what = [t(`audit-pack:report.subject.${subject}`), t('audit-pack:report.round', { round })].join(', ');
+    const what = [t(`audit-pack:report.subject.${subject}`), t('audit-pack:report.round', { round })].join(
+      ', ',
+    );
     const how = [t(`audit-pack:report.reviewState.${state}`), subjectHash].join(', ');
     return `${formats.dateTime(decidedAt ?? askedAt)}: ${what}: ${how}`;
   });
