@@ -23,6 +23,8 @@ export async function startLoopbackServer(routes: readonly Route[], port: number
   const server = createServer((request, response) => {
     answerRequest(routes, request, response).catch(() => response.destroy());
   });
+  // Longer than any caller keeps a line open: one that is closed at that very moment would lose a request.
+  server.keepAliveTimeout = 120_000;
   await listen(server, port);
   const address = server.address() as AddressInfo;
   return {

@@ -43,6 +43,8 @@ export const runPromptSchema = z.strictObject({
   /** The numbers come later: only DONE is wanted now. */
   later: z.boolean(),
   hazard: z.boolean(),
+  /** Made to warm the machine up. */
+  warmUp: z.boolean().optional(),
 });
 export type RunPrompt = z.output<typeof runPromptSchema>;
 
@@ -62,10 +64,10 @@ export function writeLead(t: Translate, { what, run, values = '' }: Lead): strin
  * the line and nothing behind it. No name or value is ever cut: `tooLongBy` says beforehand what must be shortened.
  */
 export function writeRunPrompt(t: Translate, prompt: RunPrompt): string {
-  const { lead, machine, run, runs, settings, ask, later, hazard } = prompt;
+  const { lead, machine, run, runs, settings, ask, later, hazard, warmUp } = prompt;
   return [
     ...(lead ? [writeLead(t, lead)] : []),
-    t('run-texts:run.head', { machine, run, runs }),
+    warmUp ? t('run-texts:run.warmUp', { machine, run }) : t('run-texts:run.head', { machine, run, runs }),
     ...settings.map(({ name, value }) => `${name} ${value}`),
     writePreparation(t, prompt),
     later ? t('run-texts:run.whenMade') : writeAsk(t, ask),

@@ -46,6 +46,15 @@ const toCrew = {
   cannotNoted: text({ ...answer, params: z.strictObject({ actual: words, caller: words }) }, (t, params) =>
     t('run-texts:cannotNoted', params),
   ),
+  cannotUse: text({ ...told, params: z.strictObject({ run, machine: words }) }, (t, params) =>
+    t('run-texts:cannotUse', params),
+  ),
+  cannotLater: text({ ...told, params: z.strictObject({ run, machine: words }) }, (t, params) =>
+    t('run-texts:cannotLater', params),
+  ),
+  cannotOut: text({ ...told, params: z.strictObject({ run, machine: words }) }, (t, params) =>
+    t('run-texts:cannotOut', params),
+  ),
   photoNoted: text({ ...answer, params: z.strictObject({ run }) }, (t, params) =>
     t('run-texts:photoNoted', params),
   ),

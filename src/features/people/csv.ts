@@ -70,14 +70,18 @@ export function countCsvRows(text: string): number {
   return count;
 }
 
-/**
- * Writes rows with commas and quotes where needed. A cell that a spreadsheet would compute gets an apostrophe in front, so
- * that no name and no number becomes a formula.
- */
+const plainNegative = /^-\d+([.,]\d+)?$/;
+
+/** A cell that a spreadsheet would compute gets an apostrophe in front; a plain negative number is left a number. */
+function guardFormula(cell: string): string {
+  return /^[=+\-@\t\r]/.test(cell) && !plainNegative.test(cell) ? `'${cell}` : cell;
+}
+
+/** Writes rows with commas and quotes where needed, so that no name becomes a formula. */
 export function writeCsv(rows: readonly (readonly string[])[]): string {
   const text = Papa.unparse(
-    rows.map((row) => [...row]),
-    { escapeFormulae: true, newline: '\r\n' },
+    rows.map((row) => row.map(guardFormula)),
+    { newline: '\r\n' },
   );
   return `${byteOrderMark}${text}\r\n`;
 }

@@ -7,10 +7,9 @@ import { listResultItems } from '../run/result-items.ts';
 import { listRuns } from '../run/run.repository.ts';
 import type { Run } from '../run/run.ts';
 import { requirePlan } from '../run/run-reader.service.ts';
+import { safetyOf } from '../run/safety-of.ts';
 import { findShop } from '../shop/shop.repository.ts';
-import { readFinished } from '../trial/answer-problem.ts';
 import { readStoredAnswers } from '../trial/answers.repository.ts';
-import type { Answers } from '../trial/answers.schema.ts';
 import { settingMarkOf } from '../trial/setting-mark.ts';
 import { findTrialOf } from '../trial/trial-reader.service.ts';
 import { openPhone, type PhoneVisit } from './phone-link.service.ts';
@@ -49,21 +48,6 @@ function toPhoneRun(run: Run, runs: readonly Run[], factors: readonly FactorSpec
       mark: settingMarkOf(factor, run.coded[place] ?? 0),
     })),
     ...settling(run, before, factors),
-  };
-}
-
-function safetyOf(answers: Answers, language: string) {
-  const hazards = readFinished(answers, 'hazards');
-  const stop = readFinished(answers, 'stop');
-  const call = readFinished(answers, 'call');
-  const parts = readFinished(answers, 'parts');
-  const own = 'value' in stop ? Object.entries(stop.value.own) : [];
-  return {
-    hazards: 'value' in hazards ? hazards.value.ticked.map(({ hazard }) => hazard) : [],
-    stopRules: 'value' in stop ? stop.value.picked : [],
-    ownStopRule: (own.find(([spoken]) => spoken === language) ?? own[0])?.[1] ?? '',
-    call: 'value' in call ? call.value.lines.map(({ when, whom }) => ({ when, whom })) : [],
-    label: 'value' in parts ? parts.value.label : '',
   };
 }
 

@@ -39,6 +39,7 @@ function LiveBoard({ language, timeZone, first }: Omit<Props, 'words'>) {
   const { busy, fault, submit, clearFault } = useSubmission();
   const { toasts, show, close } = useToasts();
   const [openRun, setOpenRun] = useState<string | null>(null);
+  const [isHandingOver, setHandingOver] = useState(false);
   const run = board.runs.find(({ id }) => id === openRun);
 
   async function send(work: () => Promise<unknown>): Promise<boolean> {
@@ -67,16 +68,27 @@ function LiveBoard({ language, timeZone, first }: Omit<Props, 'words'>) {
     <BoardContext value={tools}>
       <div className="board">
         <BoardHead />
-        <BoardNotices lostSince={lostSince} isPanelOpen={run !== undefined} />
+        <BoardNotices
+          lostSince={lostSince}
+          isPanelOpen={run !== undefined}
+          onHandOver={(id) => {
+            clearFault();
+            setOpenRun(id);
+            setHandingOver(true);
+          }}
+        />
         <BoardRack
           onOpen={(id) => {
             clearFault();
             setOpenRun(id);
+            setHandingOver(false);
           }}
         />
         <BoardSide />
       </div>
-      {run && <RunPanel key={run.id} run={run} onClose={() => setOpenRun(null)} />}
+      {run && (
+        <RunPanel key={run.id} run={run} isHandingOver={isHandingOver} onClose={() => setOpenRun(null)} />
+      )}
       <ToastList label={t('notices')}>
         {toasts.map(({ id, tone, words }) => (
           <Toast key={id} tone={tone} closeLabel={t('close')} onClose={() => close(id)}>

@@ -38,18 +38,20 @@ async function listConcerned(scope: ShopScope, trial: Trial, runs: readonly Run[
  * Tells those on shift, before all other texts, that a trial is stopped and what to set back to, in the transaction at
  * hand. Whoever has no phone, or never agreed to texts, must be told by voice: the board says who.
  * @param about.stop names this stop, so that each is told once of each
+ * @returns those who have no phone to text
  */
 export async function announceHold(
   scope: ShopScope,
   about: { trial: Trial; runs: readonly Run[]; stop: number },
-): Promise<void> {
+): Promise<string[]> {
   const { trial, runs, stop } = about;
   await noteSetBack(scope, trial.id, 'asked');
   const { brief } = await requirePlan(scope, trial.id);
   const { answers } = await readStoredAnswers(scope, trial.id);
   const caller = answers.call?.lines[0]?.whom?.trim() ?? '';
+  const unreached: string[] = [];
   for (const personId of await listConcerned(scope, trial, runs)) {
-    await queueMessage(scope, {
+    const sent = await queueMessage(scope, {
       personId,
       template: 'stopped',
       params: { machine: trial.machine, settings: listUsualSettings(brief), caller },
@@ -57,5 +59,7 @@ export async function announceHold(
       urgent: true,
       trialId: trial.id,
     });
+    if (!sent.queued && sent.reason === 'no-address') unreached.push(personId);
   }
+  return unreached;
 }

@@ -2,6 +2,7 @@ import { now } from '../../server/clock.ts';
 import { recordActivity } from '../../server/db/activity-log.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
 import { readConversation } from '../message/conversation.repository.ts';
+import { areTextsUsedUp } from '../message/monthly-texts.service.ts';
 import type { Lead } from '../message/run-prompt.ts';
 import { listOpenProblems } from './problem.repository.ts';
 import { blockingKinds } from './problem-kinds.ts';
@@ -36,6 +37,7 @@ export async function askNextRun(
   options: { lead?: Lead; from?: string; isWished?: boolean } = {},
 ): Promise<Asked | undefined> {
   if (trial.state !== 'running') return undefined;
+  if (await areTextsUsedUp(scope)) return undefined;
   const problems = await listOpenProblems(scope, trial.id);
   if (problems.some(({ kind }) => blockingKinds.includes(kind))) return undefined;
   const runs = await listRuns(scope, trial.id);

@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { callServer, NoConnection } from '../../components/island/call-server.ts';
 import { type Board, boardSchema, type RunStory, runStorySchema } from './board.schema.ts';
+import { type ReadingsPreview, readingsPreviewSchema } from './readings-file.schema.ts';
 import { type RunAnswer, type RunEventInput, runAnswerSchema } from './run-event.schema.ts';
 import type { RunTrialEventInput } from './trial-run-event.schema.ts';
 
@@ -45,4 +46,23 @@ export function runStoryCall(runId: string): Promise<RunStory> {
 
 export async function removePhotoCall(id: string): Promise<void> {
   await callServer(`/api/photos/${id}`, { method: 'DELETE', output: z.undefined() });
+}
+
+/** The number of somebody who was told of a stop. Each look is on record. */
+export function phoneCall(trialId: string, personId: string): Promise<{ phone: string }> {
+  return callServer(`/api/trials/${trialId}/phone`, {
+    method: 'POST',
+    body: { personId },
+    output: z.object({ phone: z.string() }),
+  });
+}
+
+/** Readings as a file: looked at, or, with the digest of what was looked at, kept. */
+export function readingsFileCall(trialId: string, file: Blob, digest?: string): Promise<ReadingsPreview> {
+  const query = digest === undefined ? 'preview=1' : `digest=${digest}`;
+  return callServer(`/api/trials/${trialId}/readings/import?${query}`, {
+    method: 'POST',
+    body: file,
+    output: readingsPreviewSchema,
+  });
 }

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { textStandings } from '../message/monthly-texts.ts';
 import '../people/schema-settings.ts';
 import { trialEvents, trialStates } from '../trial/trial-states.ts';
 import { problemKinds } from './problem-kinds.ts';
@@ -46,6 +47,8 @@ export const boardRunSchema = z.object({
   photos: z.array(
     z.object({ id: z.string(), width: z.number(), height: z.number(), at: z.number(), by: z.string() }),
   ),
+  /** Why nobody may ever answer for it: texts do not arrive, or all reminders are used up. */
+  unanswered: z.enum(['undelivered', 'reminded']).nullable(),
   /** What this reader may do with it now. */
   events: z.array(z.enum(runEvents)),
 });
@@ -111,13 +114,22 @@ export const boardSchema = z.object({
       at: z.number(),
       told: z.array(
         z.object({
+          personId: z.string(),
           name: z.string(),
-          text: z.enum(['on its way', 'sent', 'got', 'failed']),
+          text: z.enum(['on its way', 'sent', 'got', 'failed', 'no phone']),
           answeredAt: z.number().nullable(),
+          /** Whether this reader may see the number. */
+          mayCall: z.boolean(),
         }),
       ),
     })
     .nullable(),
+  /** What this trial's texts came to so far, and how much of the shop's month is used; null: it has no limit. */
+  texts: z.object({
+    sent: z.number(),
+    parts: z.number(),
+    month: z.object({ used: z.number(), limit: z.number(), standing: z.enum(textStandings) }).nullable(),
+  }),
   /** Everybody who may be given a run. */
   crew: z.array(person),
   minutesPerRun: z.number().nullable(),

@@ -33,12 +33,12 @@ export function holdTrial(scope: ShopScope, trialId: string): Promise<void> {
       const change = { state: back.to, askedAt: null, remindAt: null };
       await updateRun(inner, { id: run.id, from: [back.from] }, change);
     }
-    await announceHold(inner, { trial, runs, stop: trial.revision });
+    const unreached = await announceHold(inner, { trial, runs, stop: trial.revision });
     await recordActivity(inner, {
       kind: 'trial.held',
       subjectId: trialId,
       trialId,
-      details: { from: step.from, takenBack: inHand.map(({ number }) => number), cancelled },
+      details: { from: step.from, takenBack: inHand.map(({ number }) => number), cancelled, unreached },
     });
   });
 }

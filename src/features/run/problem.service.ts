@@ -6,11 +6,13 @@ import { AppError } from '../../server/errors.ts';
 import type { Trial } from '../trial/trial.ts';
 import { findTrialOf, type TrialReader } from '../trial/trial-reader.service.ts';
 import { announceProblem } from './announce-problem.service.ts';
+import type { CannotDecision } from './cannot-decision.ts';
 import { beginStretch, type SaidChange } from './change-stretch.service.ts';
-import { insertProblem, settleProblems } from './problem.repository.ts';
+import { insertProblem, listOpenProblems, settleProblems } from './problem.repository.ts';
 import type { ProblemKind } from './problem-kinds.ts';
 import { touchBoard } from './run.repository.ts';
 import { findRunOf, isBeingRun } from './run-reader.service.ts';
+import { settleCannot } from './settle-cannot.service.ts';
 
 export interface RaiseProblem {
   /** Sent twice, it is one problem. */
@@ -49,17 +51,27 @@ function requireSupervisor(trial: Trial, reader: TrialReader): void {
 /** A problem was dealt with: prompts go on. What was repaired or changed for it begins a stretch. */
 export async function settleProblem(
   scope: ShopScope,
-  which: { trial: Trial; problemId: string; change?: SaidChange | undefined },
+  which: {
+    trial: Trial;
+    problemId: string;
+    change?: SaidChange | undefined;
+    decision?: CannotDecision | undefined;
+  },
   reader: TrialReader,
 ): Promise<void> {
-  const { trial, problemId, change } = which;
+  const { trial, problemId, change, decision } = which;
   requireSupervisor(trial, reader);
+  const open = (await listOpenProblems(scope, trial.id)).find(({ id }) => id === problemId);
   // Settled by somebody else meanwhile: that is just as well.
   const settled = await settleProblems(scope, { trialId: trial.id, id: problemId }, reader.personId);
   if (settled === 0) return;
   await touchBoard(scope, trial.id);
   await recordActivity(scope, { kind: 'problem.settled', subjectId: problemId, trialId: trial.id });
   if (change) await beginStretch(scope, trial.id, change);
+  const runId = open?.kind === 'cannot' ? open.run_id : null;
+  if (decision !== undefined && runId !== null) {
+    await settleCannot(scope, { runId, decision, because: problemId });
+  }
 }
 
 /** A problem that somebody signed in saw. */

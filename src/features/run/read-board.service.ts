@@ -1,6 +1,8 @@
 import { rolesMay } from '../../server/auth/permissions.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
 import { AppError } from '../../server/errors.ts';
+import { readMonthlyTexts } from '../message/monthly-texts.service.ts';
+import { countTextsSent } from '../message/text-count.repository.ts';
 import { readNames } from '../people/people.repository.ts';
 import type { StoredPlan } from '../trial/plan.repository.ts';
 import type { Trial } from '../trial/trial.ts';
@@ -23,6 +25,7 @@ import { requirePlan } from './run-reader.service.ts';
 import { readSetBack } from './set-back.repository.ts';
 import { listStretches } from './stretch.repository.ts';
 import { stampOfTexts } from './talk.repository.ts';
+import { listUnanswered, type Unanswered } from './unanswered.repository.ts';
 
 /**
  * Names what a board shows, so that whoever has it already is told so.
@@ -67,11 +70,12 @@ function toBoardRun(
     runs: readonly Run[];
     readings: readonly Reading[];
     photos: readonly StoredPhoto[];
+    unanswered: ReadonlyMap<string, Unanswered>;
     names: ReadonlyMap<string, string>;
     reader: TrialReader;
   },
 ): BoardRun {
-  const { runs, readings, photos, names, reader } = about;
+  const { runs, readings, photos, unanswered, names, reader } = about;
   const toPerson = (id: string | null) => (id === null ? null : { id, name: names.get(id) ?? '' });
   const { id, number, block, center, warmUp, coded, planned, actual, state, end, revision, label } = run;
   const { askedAt, madeAt, measuredAt, closedAt } = run;
@@ -82,6 +86,7 @@ function toBoardRun(
     measurer: toPerson(run.measurerId),
     repeats: runs.find((other) => other.id === run.repeatsRunId)?.number ?? null,
     figures: toFigures(readings.filter(({ runId }) => runId === id)),
+    unanswered: unanswered.get(id) ?? null,
     photos: photos
       .filter(({ run_id }) => run_id === id)
       .map(({ id: photo, width, height, created_at, sent_by }) => ({
@@ -102,6 +107,11 @@ async function readEvents(scope: ShopScope, trial: Trial, reader: TrialReader): 
   return [...events];
 }
 
+async function readTexts(scope: ShopScope, trialId: string): Promise<Board['texts']> {
+  const { texts, parts } = await countTextsSent(scope, { trialId });
+  return { sent: texts, parts, month: await readMonthlyTexts(scope) };
+}
+
 /**
  * Everything that the board of a trial shows, for whoever reads it.
  * @throws AppError `not-found`; `not-now` for a trial that was never started
@@ -120,6 +130,7 @@ export async function readBoard(scope: ShopScope, trialId: string, reader: Trial
     scope,
     runs.map(({ id }) => id),
   );
+  const unanswered = await listUnanswered(scope, runs);
   const problems = await listOpenProblems(scope, trialId);
   const people = runs.flatMap(({ personId, measurerId }) => [personId, measurerId]);
   const senders = [...problems.map(({ raised_by }) => raised_by), ...photos.map(({ sent_by }) => sent_by)];
@@ -130,7 +141,7 @@ export async function readBoard(scope: ShopScope, trialId: string, reader: Trial
     ...{ trialId, number, title, machine, phase, state, revision, stamp },
     settings: toSettings(plan),
     results: listResultItems(plan.brief),
-    runs: runs.map((run) => toBoardRun(run, { runs, readings, photos, names, reader })),
+    runs: runs.map((run) => toBoardRun(run, { runs, readings, photos, unanswered, names, reader })),
     problems: problems.map(({ id, kind, run_id, words, raised_by, raised_at }) => ({
       id,
       kind,
@@ -148,7 +159,8 @@ export async function readBoard(scope: ShopScope, trialId: string, reader: Trial
       at,
     })),
     setBack: await readSetBack(scope, trialId),
-    stop: state === 'held' ? await readStop(scope, trialId) : null,
+    stop: state === 'held' ? await readStop(scope, trialId, reader) : null,
+    texts: await readTexts(scope, trialId),
     crew: await listOperators(scope),
     minutesPerRun: plan.brief.budget.minutesPerRun ?? null,
     events: await readEvents(scope, trial, reader),

@@ -4,6 +4,7 @@ import { inTransaction } from '../../server/db/in-transaction.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
 import { findAddressee } from '../message/addressee.repository.ts';
 import { countMessages } from '../message/message.repository.ts';
+import { areTextsUsedUp } from '../message/monthly-texts.service.ts';
 import { workerScope } from '../message/sending.service.ts';
 import { askNextRun } from './ask-next.service.ts';
 import { findRun, touchBoard, updateRun } from './run.repository.ts';
@@ -42,6 +43,12 @@ export async function remindOfRuns(db: Knex): Promise<number> {
 }
 
 async function remind(scope: ShopScope, trial: RunningTrial, run: Run): Promise<void> {
+  // The month's texts are used up: the run waits on the board, which says so.
+  if (await areTextsUsedUp(scope)) {
+    const later = now() + trial.remindMinutes * minute;
+    await updateRun(scope, { id: run.id, from: [run.state] }, { remindAt: later });
+    return;
+  }
   const isMade = run.state !== 'asked';
   const holderId = isMade ? run.measurerId : run.personId;
   const person = holderId === null ? null : await findOnDuty(scope, trial, holderId);

@@ -3,7 +3,8 @@ import { inTransaction } from '../../server/db/in-transaction.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
 import { AppError } from '../../server/errors.ts';
 import { findTrialOf, type TrialReader } from '../trial/trial-reader.service.ts';
-import { findRun, insertRepeat, touchBoard } from './run.repository.ts';
+import { findRun, touchBoard } from './run.repository.ts';
+import { insertAddedRun } from './run-order.repository.ts';
 import { findRunOf, requireRunStep, runChangedMeanwhile } from './run-reader.service.ts';
 import { runOn } from './skip-run.service.ts';
 
@@ -27,7 +28,8 @@ export function repeatRun(
       throw await runChangedMeanwhile(inner, run.id);
     }
     await runOn(inner, await findTrialOf(inner, run.trialId), 'repeat a run', reader);
-    if (!(await insertRepeat(inner, run, which.submission))) throw new AppError('already-there');
+    const repeat = { ...run, id: which.submission, repeatsRunId: run.id, warmUp: false, place: null };
+    if (!(await insertAddedRun(inner, repeat))) throw new AppError('already-there');
     await touchBoard(inner, run.trialId);
     await recordActivity(inner, {
       kind: 'run.repeated',

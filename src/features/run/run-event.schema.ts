@@ -50,6 +50,7 @@ export const runEventSchema = z.discriminatedUnion('event', [
   z.strictObject({ event: z.literal('skip'), ...seen }),
   z.strictObject({ event: z.literal('put back'), ...seen }),
   z.strictObject({ event: z.literal('repeat'), ...seen }),
+  z.strictObject({ event: z.literal('send now'), ...seen }),
   z.strictObject({ event: z.literal('hand over'), ...seen, personId: z.uuidv7() }),
   z.strictObject({ event: z.literal('note'), submission, words: z.string().trim().min(1).max(500) }),
   z.strictObject({

@@ -14,6 +14,7 @@ import type { Run } from './run.ts';
 import type { RunAnswer, RunEventBody } from './run-event.schema.ts';
 import { findRunOf } from './run-reader.service.ts';
 import { type RunActor, type RunEvent, runEventsOpenTo, runSteps } from './run-states.ts';
+import { sendNow } from './send-now.service.ts';
 import { setActual } from './set-actual.service.ts';
 import { putBackRun, skipRun } from './skip-run.service.ts';
 
@@ -39,6 +40,7 @@ const handlers: { [Event in RunEventBody['event']]: Handler<Event> } = {
   skip: (scope, wish) => skipRun(scope, wish).then(() => nothingMissing),
   'put back': (scope, wish, reader) => putBackRun(scope, wish, reader).then(() => nothingMissing),
   repeat: (scope, wish, reader) => repeatRun(scope, wish, reader).then(() => nothingMissing),
+  'send now': (scope, wish) => sendNow(scope, wish).then(() => nothingMissing),
   'hand over': (scope, wish) => handOverRun(scope, wish).then(() => nothingMissing),
   note: (scope, wish, { personId }) => noteRun(scope, { ...wish, by: personId }).then(() => nothingMissing),
   'set actual': (scope, wish) => setActual(scope, wish).then(() => nothingMissing),

@@ -62,6 +62,7 @@ export function describePrompt(trial: RunningTrial, run: Run, runs: number): Run
     ask: askFor(main),
     later: trial.resultsLater,
     hazard: trial.hazard,
+    ...(run.warmUp ? { warmUp: true } : {}),
   };
 }
 

@@ -137,38 +137,6 @@ export async function updateRun(scope: ShopScope, which: RunCondition, change: R
   return changed > 0;
 }
 
-/** Adds a waiting run with the settings of another, after all others of its trial. @returns false when the id is taken */
-export async function insertRepeat(scope: ShopScope, run: Run, id: string): Promise<boolean> {
-  const { db, shopId } = scope;
-  const last = await db('runs')
-    .where({ shop_id: shopId, trial_id: run.trialId })
-    .max({ number: 'number', place: 'place' })
-    .first();
-  const added = await db('runs')
-    .insert({
-      id,
-      shop_id: shopId,
-      trial_id: run.trialId,
-      plan_id: run.planId,
-      number: Number(last?.['number'] ?? 0) + 1,
-      place: Number(last?.['place'] ?? 0) + 1,
-      block: run.block,
-      whole_plot: run.wholePlot,
-      group_key: run.group,
-      center: run.center,
-      coded: JSON.stringify({ v: 1, x: run.coded }),
-      planned: JSON.stringify({ v: 1, values: run.planned }),
-      state: 'waiting',
-      person_id: run.personId,
-      measurer_id: run.measurerId,
-      repeats_run_id: run.id,
-    })
-    .onConflict('id')
-    .ignore()
-    .returning('id');
-  return added.length > 0;
-}
-
 /** Lets every board of the trial see that something on it changed. Every write that a board shows ends here. */
 export async function touchBoard(scope: ShopScope, trialId: string): Promise<void> {
   await scope

@@ -1,21 +1,21 @@
 import { now } from '../../server/clock.ts';
-import { recordActivity } from '../../server/db/activity-log.ts';
 import { newId } from '../../server/ids.ts';
 import { hadMessage } from '../message/message.repository.ts';
 import { makePhoneLink } from '../phone/phone-link.service.ts';
 import { askNextRun } from './ask-next.service.ts';
+import { confirmSetBack } from './back-to-usual.service.ts';
 import { remindLater, reportCannotReach } from './cannot-reach.service.ts';
 import { beginStretch } from './change-stretch.service.ts';
 import { goOn } from './go-on.service.ts';
 import { makeRun } from './make-run.service.ts';
 import { raiseProblem } from './problem.service.ts';
-import { touchBoard, updateRun } from './run.repository.ts';
+import { updateRun } from './run.repository.ts';
 import type { Run } from './run.ts';
 import { findCaller } from './run-people.service.ts';
 import { isBeingRun } from './run-reader.service.ts';
 import { askFor, settingsOfRun, writeFigure } from './run-words.ts';
 import { readRunningTrial } from './running-trial.service.ts';
-import { listTrialsAtMachine, noteSetBack, readSetBack } from './set-back.repository.ts';
+import { listTrialsAtMachine, readSetBack } from './set-back.repository.ts';
 import { skipRun } from './skip-run.service.ts';
 import { findStretch } from './stretch.repository.ts';
 import type { Talk, TalkResult } from './talk.service.ts';
@@ -185,9 +185,7 @@ export async function noteUsualSettings(talk: Talk): Promise<TalkResult> {
     if ((await readSetBack(scope, trialId)) !== 'asked') continue;
     const templates = ['stopped', 'backToUsual', 'endedEarly'];
     if (!(await hadMessage(scope, { templates, trialId, personId: person.personId }))) continue;
-    await noteSetBack(scope, trialId, 'done');
-    await touchBoard(scope, trialId);
-    await recordActivity(scope, { kind: 'trial.set-back', subjectId: trialId, trialId });
+    await confirmSetBack(scope, trialId);
     await tell(
       scope,
       person.personId,

@@ -1,5 +1,7 @@
 import { z } from 'zod';
 import '../people/schema-settings.ts';
+import { addedRunKinds } from './added-run.ts';
+import { cannotDecisions } from './cannot-decision.ts';
 import { changeKinds } from './stretch.ts';
 
 const revision = z.number().int().positive();
@@ -30,8 +32,12 @@ export const runTrialEventSchemas = [
     event: z.literal('settle a problem'),
     problemId: z.uuidv7(),
     change: change.optional(),
+    /** What becomes of the run whose setting cannot be reached. */
+    decision: z.enum(cannotDecisions).optional(),
   }),
   z.strictObject({ event: z.literal('something changed'), ...change.shape }),
+  z.strictObject({ event: z.literal('back to usual') }),
+  z.strictObject({ event: z.literal('add a run'), id: z.uuidv7(), kind: z.enum(addedRunKinds) }),
 ] as const;
 export type RunTrialEvent = z.output<(typeof runTrialEventSchemas)[number]>;
 export type RunTrialEventInput = z.input<(typeof runTrialEventSchemas)[number]>;

@@ -49,6 +49,7 @@ export const activityKinds = [
   'run.skipped',
   'run.put-back',
   'run.repeated',
+  'run.added',
   'run.handed-over',
   'run.actual-set',
   'run.noted',

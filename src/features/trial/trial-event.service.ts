@@ -1,5 +1,7 @@
 import { inTransaction } from '../../server/db/in-transaction.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
+import { addRunAs } from '../run/add-run.service.ts';
+import { confirmSetBackAs } from '../run/back-to-usual.service.ts';
 import { endEarly } from '../run/end-early.service.ts';
 import { holdTrialAs } from '../run/hold-trial.service.ts';
 import { pauseTrial } from '../run/pause-trial.service.ts';
@@ -41,6 +43,8 @@ const handlers: { [Event in TrialEventBody['event']]: Handler<Event> } = {
   'raise a problem': raiseProblemAs,
   'settle a problem': settleProblem,
   'something changed': sayChange,
+  'back to usual': confirmSetBackAs,
+  'add a run': addRunAs,
 };
 
 /**

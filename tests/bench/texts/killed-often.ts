@@ -1,21 +1,10 @@
-import { once } from 'node:events';
-import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
-import { tmpdir } from 'node:os';
-import { join } from 'node:path';
 import { setTimeout as wait } from 'node:timers/promises';
-import { fileURLToPath } from 'node:url';
 import type { Knex } from 'knex';
 import { createUniformSource } from '../../../src/lib/doe/random/random-numbers.ts';
-import { openDatabase } from '../../../src/server/db/connection.ts';
-import { type StandIns, startStandIns, testAccount } from '../../integration/stand-ins.ts';
-import { type ChildProgram, startProgram } from '../../setup/child-program.ts';
-import { findFreePort } from '../../setup/free-port.ts';
+import type { StandIns } from '../../integration/stand-ins.ts';
 import { type AnsweringPhones, startPhones } from './answering-phones.ts';
 import { buildCrowd, type CrowdMember, runsATrial } from './crowd.ts';
-
-const main = fileURLToPath(new URL('../../../dist/main/main.mjs', import.meta.url));
-/** Longer than a worker's lease on a text: what the killed one had in hand is looked into at once. */
-const leaseOverMilliseconds = 61_000;
+import { openTwoPrograms, type Role } from './two-programs.ts';
 
 export interface KillPlan {
   kills: number;
@@ -37,55 +26,6 @@ export interface KillOutcome {
   keptBesides: number;
   /** Webhooks that nobody heard, because the program was dead. */
   missed: number;
-}
-
-type Role = 'web' | 'worker';
-
-/** The built product as two programs, web and worker, on a data folder of their own. */
-async function openTwoPrograms() {
-  const folder = mkdtempSync(join(tmpdir(), 'trywell-killed-'));
-  const clockFile = join(folder, 'clock-offset');
-  const port = String(await findFreePort());
-  const url = `http://127.0.0.1:${port}`;
-  const standIns = await startStandIns(url, { ...testAccount, clockOffsetFile: clockFile });
-  const start = (role: Role): Promise<ChildProgram> =>
-    startProgram(main, {
-      ROLE: role,
-      PORT: port,
-      APP_URL: url,
-      DATA_DIR: folder,
-      CLOCK_OFFSET_FILE: clockFile,
-      TWILIO_ACCOUNT_SID: testAccount.accountSid,
-      TWILIO_AUTH_TOKEN: testAccount.authToken,
-      TWILIO_API_URL: standIns.textsUrl,
-      SMTP_PORT: String(standIns.smtpPort),
-      TEXTS_PER_SECOND: '100',
-      LOG_LEVEL: 'error',
-    });
-  const programs = { worker: await start('worker'), web: await start('web') };
-  const db = openDatabase({ kind: 'sqlite', file: join(folder, 'trywell.sqlite') });
-  let ahead = 0;
-  return {
-    standIns,
-    db,
-    /** SIGKILL, as a power cut would, and up again. */
-    async kill(role: Role): Promise<void> {
-      const { process: child } = programs[role];
-      child.kill('SIGKILL');
-      if (child.exitCode === null && child.signalCode === null) await once(child, 'exit');
-      if (role === 'worker') {
-        ahead += leaseOverMilliseconds;
-        writeFileSync(clockFile, String(ahead));
-      }
-      programs[role] = await start(role);
-    },
-    async close(): Promise<void> {
-      await db.destroy();
-      await Promise.all([programs.web.stop(), programs.worker.stop()]);
-      await standIns.stop();
-      rmSync(folder, { recursive: true, force: true });
-    },
-  };
 }
 
 /** How long a program lives at most while no texts pass. */

@@ -34,6 +34,8 @@ const bodies: Record<string, Attempt['body']> = {
   'POST /api/trials/[id]/share': json({}),
   'POST /api/trials/[id]/check-back': json({ holds: true }),
   'POST /api/trials/[id]/next': json({ id: newId(), reason: 'untie' }),
+  'POST /api/trials/[id]/readings/import': { type: 'text/csv', text: 'run,x\n1,2' },
+  'POST /api/trials/[id]/phone': json({ personId: newId() }),
   'POST /api/runs/[id]/events': json({ event: 'skip', revision: 1, submission: newId() }),
   'POST /api/reviews/[id]/approve': json({ round: 1 }),
   'POST /api/reviews/[id]/send-back': json({ round: 1 }),

@@ -11,10 +11,12 @@ import { PanelActions } from './PanelActions.tsx';
 interface Props {
   readonly run: BoardRun;
   readonly onBack: () => void;
+  /** What follows once the values are kept. */
+  readonly onSaved?: () => Promise<void>;
 }
 
 /** What the dials were really set to, setting by setting. */
-export function ActualForm({ run, onBack }: Props) {
+export function ActualForm({ run, onBack, onSaved }: Props) {
   const { t } = useTranslation(['board', 'errors']);
   const { board, doRun, say } = useBoardTools();
   const [typed, setTyped] = useState(() => (run.actual ?? run.planned).map(String));
@@ -33,6 +35,7 @@ export function ActualForm({ run, onBack }: Props) {
     if (actual.length < values.length) return;
     const { revision } = run;
     if (!(await doRun(run.id, { event: 'set actual', revision, submission: v7(), actual }))) return;
+    await onSaved?.();
     say('good', t('board:actualKept', { run: run.number }));
     onBack();
   }

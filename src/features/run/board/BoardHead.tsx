@@ -37,6 +37,12 @@ export function BoardHead() {
         <p className="page-head-note" aria-live="polite">
           {t('progress', { done, count: board.runs.length })}
           {left && <> · {left}</>}
+          {board.texts.sent > 0 && (
+            <>
+              {' '}
+              · {t('texts', { count: board.texts.sent, parts: t('textParts', { count: board.texts.parts }) })}
+            </>
+          )}
         </p>
       </div>
       <div className="board-head-actions">

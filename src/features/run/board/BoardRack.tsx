@@ -12,6 +12,7 @@ function useFoot(): (run: BoardRun) => string {
     if (run.end === 'failed' || run.end === 'beyondGauge') return t(`end.${run.end}`);
     const figures = main ? writeFigures(run, main, formats) : '';
     if (figures !== '') return figures;
+    if (run.warmUp) return t('warmUp');
     const who = run.state === 'made' ? (run.measurer ?? run.person) : run.person;
     const since = run.state === 'made' ? run.madeAt : run.state === 'asked' ? run.askedAt : null;
     if (!who) return '';

@@ -4,9 +4,11 @@ import { Button } from '../../../components/ui/Button.tsx';
 import { ButtonLink } from '../../../components/ui/ButtonLink.tsx';
 import { ConfirmDialog } from '../../../components/ui/ConfirmDialog.tsx';
 import type { ChangeKind } from '../stretch.ts';
+import { AddRun } from './AddRun.tsx';
 import { useBoardTools } from './board-context.tsx';
 import { isOpenRun } from './board-view.tsx';
 import { ChangeDialog } from './ChangeDialog.tsx';
+import { LoadReadings } from './LoadReadings.tsx';
 import { TypeAll } from './TypeAll.tsx';
 
 const offered = ['new batch', 'repair', 'long stop', 'other'] as const satisfies readonly ChangeKind[];
@@ -35,6 +37,7 @@ export function BoardSide() {
   const { board, doTrial, busy, say } = useBoardTools();
   const [change, setChange] = useState<ChangeKind | 'problem' | null>(null);
   const [isTyping, setTyping] = useState(false);
+  const [isLoading, setLoading] = useState(false);
   const [isEnding, setEnding] = useState(false);
   const open = board.runs.filter(isOpenRun).length;
   const isBeingRun = ['running', 'paused', 'held'].includes(board.state);
@@ -69,6 +72,7 @@ export function BoardSide() {
             <Stretches />
           </section>
         )}
+        <AddRun />
         <section aria-labelledby="on-paper">
           <h2 id="on-paper">{t('paperTitle')}</h2>
           <p className="text-steel">{t('paperWords')}</p>
@@ -77,10 +81,18 @@ export function BoardSide() {
               {t('print')}
             </ButtonLink>
             {board.mayRun && isBeingRun && open > 0 && (
-              <Button icon="edit" onClick={() => setTyping(true)}>
-                {t('typeAll')}
-              </Button>
+              <>
+                <Button icon="edit" onClick={() => setTyping(true)}>
+                  {t('typeAll')}
+                </Button>
+                <Button icon="upload" onClick={() => setLoading(true)}>
+                  {t('load.title')}
+                </Button>
+              </>
             )}
+            <ButtonLink icon="download" href={`/api/trials/${board.trialId}/readings.csv`} download>
+              {t('saveFile')}
+            </ButtonLink>
           </div>
         </section>
         {board.events.includes('judge') && (
@@ -95,6 +107,7 @@ export function BoardSide() {
           </section>
         )}
       </div>
+      {isLoading && <LoadReadings onClose={() => setLoading(false)} />}
       {change && <ChangeDialog kind={change} onClose={() => setChange(null)} />}
       <ConfirmDialog
         open={isEnding}

@@ -11,7 +11,7 @@ import type { RunEvent } from '../run-states.ts';
 import { ActualForm } from './ActualForm.tsx';
 import { BoardFault } from './BoardFault.tsx';
 import { useBoardTools } from './board-context.tsx';
-import { tagSettings, writeFigures } from './board-view.tsx';
+import { findCurrent, tagSettings, writeFigures } from './board-view.tsx';
 import { HandOverForm } from './HandOverForm.tsx';
 import { NoteForm } from './NoteForm.tsx';
 import { ReadingForm } from './ReadingForm.tsx';
@@ -23,17 +23,19 @@ type Mode = 'look' | 'record' | 'correct' | 'hand over' | 'note' | 'set actual';
 
 interface Props {
   readonly run: BoardRun;
+  /** Opened to be given to somebody else. */
+  readonly isHandingOver?: boolean;
   readonly onClose: () => void;
 }
 
 /** Things that are done with one press and no form. */
-const pressed = ['make', 'skip', 'put back', 'repeat', 'confirm', 'deny'] as const;
+const pressed = ['make', 'skip', 'put back', 'repeat', 'confirm', 'deny', 'send now'] as const;
 
 /** One run: what it is set to, all that was said about it, and what can be done with it. */
-export function RunPanel({ run, onClose }: Props) {
+export function RunPanel({ run, isHandingOver = false, onClose }: Props) {
   const { t } = useTranslation('board');
   const { board, formats, doRun, busy, fault, clearFault, say } = useBoardTools();
-  const [mode, setMode] = useState<Mode>('look');
+  const [mode, setMode] = useState<Mode>(isHandingOver ? 'hand over' : 'look');
   const may = (event: RunEvent) => run.events.includes(event);
   const back = () => {
     clearFault();
@@ -56,7 +58,10 @@ export function RunPanel({ run, onClose }: Props) {
     label: t(`do.${key}`),
     onPick: () => void press(key),
   });
+  // Only the run whose turn it is can be sent.
+  const isNext = findCurrent(board.runs)?.id === run.id && board.state === 'running';
   const more = [
+    ...(may('send now') && isNext ? [pressing('send now')] : []),
     ...(may('make') ? [pressing('make')] : []),
     ...(may('skip') ? [pressing('skip')] : []),
     ...(may('repeat') ? [pressing('repeat')] : []),
@@ -74,6 +79,7 @@ export function RunPanel({ run, onClose }: Props) {
     >
       <div className="grid gap-6">
         <JobTagSettings settings={tagSettings(board, run, formats)} />
+        {run.warmUp && <p className="field-help">{t('warmUp')}</p>}
         {run.actual && <p className="field-help">{t('setOtherwise')}</p>}
         {mode === 'look' && (
           <>
