@@ -1,8 +1,10 @@
+import sharp from 'sharp';
 import { describe, expect, it } from 'vitest';
 import { actOnPhone } from '../../../src/features/phone/phone-act.service.ts';
 import type { PhoneForm } from '../../../src/features/phone/phone-form.schema.ts';
 import { makePhoneLink } from '../../../src/features/phone/phone-link.service.ts';
 import { readPhonePage } from '../../../src/features/phone/phone-page.service.ts';
+import { addPhonePhoto } from '../../../src/features/phone/phone-photo.service.ts';
 import { AppError } from '../../../src/server/errors.ts';
 import { newId } from '../../../src/server/ids.ts';
 import { buildRunningTrial } from '../../builders/measured-trial.ts';
@@ -82,6 +84,56 @@ describe('a phone page', () => {
     expect(await told.press('problem', { words: 'jaw not heating' })).toBe('told');
     const problems = await told.scope.db('problems').where({ trial_id: told.trialId });
     expect(problems.map(({ words }) => words)).toEqual(['jaw not heating']);
+  });
+
+  it('asks an odd number back once, as by text, and takes another one in its place', async () => {
+    const { scope, ana, visit, press, runId, stateOf } = await handOut();
+    const odd = { 'r0-1': '361', 'r0-2': '359', 'r0-3': '360' };
+    expect(await press('send', odd)).toBe('odd');
+    expect(await stateOf(runId)).toBe('doubtful');
+    expect((await readPhonePage(visit)).run?.state).toBe('doubtful');
+    const talk = await scope.db('conversations').where({ person_id: ana }).first();
+    expect(talk).toMatchObject({ state: 'sure', run_id: runId });
+    expect(await press('send', strengths)).toBe('saved');
+    expect(await stateOf(runId)).toBe('done');
+
+    const right = await handOut();
+    await right.press('send', odd);
+    expect(await right.press('right')).toBe('saved');
+    expect(await right.stateOf(right.runId)).toBe('done');
+  });
+
+  it('puts off a run, and passes on how far a setting got', async () => {
+    const { scope, trialId, press, runId, stateOf } = await handOut();
+    expect(await press('later')).toBe('later');
+    const { remind_at } = await scope.db('runs').where({ id: runId }).first('remind_at');
+    expect(remind_at).toBeGreaterThan(Date.now());
+    await expect(press('cannot')).rejects.toMatchObject({
+      fields: [{ pointer: '#/words', code: 'missing' }],
+    });
+    const submission = newId();
+    expect(await press('cannot', { words: 'JAW TEMP 155' }, submission)).toBe('asked');
+    expect(await press('cannot', { words: 'JAW TEMP 155' }, submission)).toBe('asked');
+    expect(await stateOf(runId)).toBe('asked');
+    const problems = await scope.db('problems').where({ trial_id: trialId });
+    expect(problems).toMatchObject([{ kind: 'cannot', run_id: runId, words: 'JAW TEMP 155' }]);
+  });
+
+  it('takes a picture of its person’s own run, and of nobody else’s', async () => {
+    const { scope, trialId, visit, runId } = await handOut();
+    const image = sharp({ create: { width: 20, height: 10, channels: 3, background: '#123456' } });
+    const file = (content: Uint8Array) => new File([new Uint8Array(content)], 'photo.jpg');
+    const picture = file(await image.jpeg().toBuffer());
+    expect(await addPhonePhoto(visit, runId, picture)).toBe('photo');
+    expect(await addPhonePhoto(visit, runId, picture)).toBe('photo');
+    expect(await scope.db('photos').where({ run_id: runId })).toHaveLength(1);
+    expect(await addPhonePhoto(visit, runId, file(new Uint8Array([1, 2, 3])))).toBe('photoRefused');
+    expect(await addPhonePhoto(visit, runId, null)).toBe('photoRefused');
+    const other = await scope.db('runs').where({ trial_id: trialId, number: 2 }).first('id');
+    expect(await addPhonePhoto(visit, other.id, picture)).toBe('behind');
+    await expect(addPhonePhoto({ ...visit, token: 'gone' }, runId, picture)).rejects.toMatchObject({
+      code: 'gone',
+    });
   });
 
   it('stops the trial on DANGER', async () => {
