@@ -1,6 +1,8 @@
 import type audit from '../../locales/en/audit.json';
 import type auditModel from '../../locales/en/audit-model.json';
+import type auditModels from '../../locales/en/audit-models.json';
 import type auditPack from '../../locales/en/audit-pack.json';
+import type auditReview from '../../locales/en/audit-review.json';
 import type auditSource from '../../locales/en/audit-source.json';
 import type board from '../../locales/en/board.json';
 import type common from '../../locales/en/common.json';
@@ -57,6 +59,8 @@ declare module 'i18next' {
       'verdict-page': typeof verdictPage;
       audit: typeof audit;
       'audit-model': typeof auditModel;
+      'audit-models': typeof auditModels;
+      'audit-review': typeof auditReview;
       'audit-source': typeof auditSource;
     };
   }

@@ -25,6 +25,8 @@ export const namespaces = [
   'verdict-page',
   'audit',
   'audit-model',
+  'audit-models',
+  'audit-review',
   'audit-source',
   'audit-pack',
 ] as const;

@@ -16,6 +16,8 @@ export const sameWords: SameWords = {
   'audit:plan.factor': ['es'],
   'audit:plan.powerLikely': ['es'],
   'audit:part.model': ['pl'],
+  'audit-models:model': ['pl'],
+  'audit-review:group.settings': ['es'],
   'audit-model:terms.t': ['es', 'pl', 'vi'],
   'audit-model:terms.p': ['es'],
   'audit-model:terms.f': ['es', 'pl', 'vi'],

@@ -6,7 +6,7 @@ import type { Translate } from '../../i18n/translator.ts';
 export interface AuditFigures {
   /** About six significant digits. */
   one(value: number): string;
-  /** For a column: as many decimals for all as show five digits of the largest. */
+  /** For a column: as many decimals for all as show six digits of the largest. */
   column(values: readonly (number | null)[]): (value: number) => string;
   /** A probability; below a ten-thousandth only that. */
   p(value: number): string;
@@ -59,7 +59,7 @@ export function auditFiguresFor(language: Language): AuditFigures {
       const sizes = values.flatMap((value) =>
         value !== null && Number.isFinite(value) ? [Math.abs(value)] : [],
       );
-      const decimals = decimalsFor(Math.max(0, ...sizes), 5);
+      const decimals = decimalsFor(Math.max(0, ...sizes), 6);
       return (value) => write(value, decimals);
     },
     p: (value) => (value < 1e-4 ? `< ${fixed(4).format(1e-4)}` : fixed(4).format(value)),

@@ -68,6 +68,8 @@ export const activityKinds = [
   'trial.followed',
   'trial.checked-back',
   'verdict.made',
+  'model.saved',
+  'model.removed',
   'verdict.shared',
   'verdict.share-ended',
   'review.asked',

@@ -1,3 +1,5 @@
+import { ButtonLink } from '../../../components/ui/ButtonLink.tsx';
+import { Callout } from '../../../components/ui/Callout.tsx';
 import { PageHead } from '../../../components/ui/PageHead.tsx';
 import { SectionTabs } from '../../../components/ui/SectionTabs.tsx';
 import type { AuditFrameView } from '../audit-view.ts';
@@ -11,7 +13,7 @@ interface Props extends AuditWording {
 }
 
 /** Pages on which it matters which result is looked at. */
-const byResult: readonly AuditPart[] = ['model', 'checks', 'prediction'];
+const byResult: readonly AuditPart[] = ['model', 'checks', 'prediction', 'models'];
 
 function isOpen(part: AuditPart, frame: AuditFrameView): boolean {
   return part !== 'check-runs' || frame.hasCheckRuns;
@@ -19,7 +21,7 @@ function isOpen(part: AuditPart, frame: AuditFrameView): boolean {
 
 /** The head of every page of an audit: which trial, its pages, which result, and what waits for the reader's sign-off. */
 export function AuditHead({ frame, part, look = {}, t }: Props) {
-  const { trialId, results } = frame;
+  const { trialId, results, waitsFor } = frame;
   return (
     <>
       <PageHead
@@ -31,6 +33,17 @@ export function AuditHead({ frame, part, look = {}, t }: Props) {
             : { href: '/trials', label: t('audit:toTrials') }
         }
       />
+      {waitsFor && part !== 'sign-off' && (
+        <Callout
+          tone="info"
+          title={t(`audit:waits.${waitsFor}`)}
+          actions={
+            <ButtonLink href={auditAddress(trialId, 'sign-off')} kind="secondary" iconEnd="arrow-right">
+              {t('audit:waits.open')}
+            </ButtonLink>
+          }
+        />
+      )}
       <SectionTabs
         label={t('audit:pages')}
         tabs={auditParts

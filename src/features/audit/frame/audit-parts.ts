@@ -1,5 +1,14 @@
 /** The pages of an audit, in the order in which an engineer asks. */
-export const auditParts = ['plan', 'data', 'model', 'checks', 'prediction', 'check-runs'] as const;
+export const auditParts = [
+  'plan',
+  'data',
+  'model',
+  'checks',
+  'prediction',
+  'check-runs',
+  'models',
+  'sign-off',
+] as const;
 export type AuditPart = (typeof auditParts)[number];
 
 /** Which result of the trial is looked at, and by which model; its own unless told. */

@@ -18,9 +18,9 @@ function readRow(row: Element): CellText[] {
 }
 
 function sortBy(table: HTMLTableElement, column: number, direction: Direction): void {
-  const body = table.tBodies[0];
+  const body = table.querySelector('tbody');
   if (!body) return;
-  const rows = [...body.rows];
+  const rows = [...body.querySelectorAll('tr')];
   const order = sortPlaces(
     rows.map((row) => readRow(row)[column] ?? { words: '', figure: null, exact: null }),
     direction,
@@ -61,7 +61,7 @@ function makeSortable(table: HTMLTableElement, icons: readonly Element[]): void 
 /** The header's words and every row as they stand, for a spreadsheet. */
 function textOf(table: HTMLTableElement, decimalMark: string): string {
   const words = [...table.querySelectorAll('thead th')].map(({ textContent }) => (textContent ?? '').trim());
-  const rows = [...(table.tBodies[0]?.rows ?? [])].map(readRow);
+  const rows = [...table.querySelectorAll('tbody tr')].map(readRow);
   return toTabs(words, rows, decimalMark);
 }
 
@@ -71,7 +71,7 @@ export function enhanceTables(page: ParentNode): void {
     const table = frame.querySelector('table');
     const button = frame.querySelector<HTMLButtonElement>('[data-copy-table]');
     if (!table || !button?.hidden) continue;
-    if (table.tBodies[0]?.querySelector('.table-empty')) continue;
+    if (table.querySelector('.table-empty')) continue;
     const icons = frame.querySelector<HTMLTemplateElement>('[data-sort-icons]')?.content.children ?? [];
     makeSortable(table, [...icons]);
     button.hidden = false;

@@ -4,7 +4,7 @@ import { v7 } from 'uuid';
 import { Button } from '../../../components/ui/Button.tsx';
 import { TextArea } from '../../../components/ui/TextArea.tsx';
 import { addCommentCall } from '../trial.queries.ts';
-import { useReview } from './review-context.tsx';
+import { useReviewWork } from './review-context.tsx';
 
 interface Props {
   readonly label: string;
@@ -14,7 +14,7 @@ interface Props {
 /** Opens a field for a remark on one line. What was typed stays until it has arrived. */
 export function AddRemark({ label, place }: Props) {
   const { t } = useTranslation('plan-review');
-  const { run, work } = useReview();
+  const { run, work } = useReviewWork();
   const [isOpen, setOpen] = useState(false);
   const [words, setWords] = useState('');
   const [isEmpty, setEmpty] = useState(false);

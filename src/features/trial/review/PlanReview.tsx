@@ -8,7 +8,7 @@ import { HardestPart } from './HardestPart.tsx';
 import { QuestionReviewPart } from './QuestionReviewPart.tsx';
 import { ReviewActions } from './ReviewActions.tsx';
 import { ReviewStanding } from './ReviewStanding.tsx';
-import { ReviewContext, useReviewOf } from './review-context.tsx';
+import { ReviewContext, ReviewWorkContext, useReviewOf } from './review-context.tsx';
 import { SafetyReviewPart } from './SafetyReviewPart.tsx';
 
 interface Props {
@@ -22,14 +22,16 @@ function Review({ first, shop }: Pick<Props, 'first' | 'shop'>) {
   const review = useReviewOf(first, shop);
   return (
     <ReviewContext value={review}>
-      <div className="grid grid-cols-[minmax(0,1fr)] gap-4">
-        <ReviewStanding />
-        <QuestionReviewPart />
-        <SafetyReviewPart />
-        <HardestPart />
-        <AuditPart />
-        <ReviewActions />
-      </div>
+      <ReviewWorkContext value={review}>
+        <div className="grid grid-cols-[minmax(0,1fr)] gap-4">
+          <ReviewStanding />
+          <QuestionReviewPart />
+          <SafetyReviewPart />
+          <HardestPart />
+          <AuditPart />
+          <ReviewActions />
+        </div>
+      </ReviewWorkContext>
     </ReviewContext>
   );
 }

@@ -6,12 +6,12 @@ import { ButtonLink } from '../../../components/ui/ButtonLink.tsx';
 import { Callout } from '../../../components/ui/Callout.tsx';
 import { ConfirmDialog } from '../../../components/ui/ConfirmDialog.tsx';
 import { decideReviewCall } from '../trial.queries.ts';
-import { useReview } from './review-context.tsx';
+import { useReviewWork } from './review-context.tsx';
 
 /** Approve, or send back with at least one remark; neither for whoever asked. */
 export function ReviewActions() {
   const { t } = useTranslation('plan-review');
-  const { trial, review, work, run } = useReview();
+  const { subject, backHref, review, work, run } = useReviewWork();
   const [asking, setAsking] = useState(false);
   const [lacksRemark, setLacksRemark] = useState(false);
   const mayDecide = review?.state === 'asked' && review.mayDecide;
@@ -34,7 +34,7 @@ export function ReviewActions() {
           {t('needsRemark')}
         </Callout>
       )}
-      <ActionBar secondary={<ButtonLink href={`/trials/${trial.trialId}/start`}>{t('back')}</ButtonLink>}>
+      <ActionBar secondary={<ButtonLink href={backHref}>{t('back')}</ButtonLink>}>
         {mayDecide && (
           <>
             <Button busy={work === 'send-back'} busyLabel={t('sendingBack')} onClick={sendBack}>
@@ -48,7 +48,7 @@ export function ReviewActions() {
       </ActionBar>
       <ConfirmDialog
         open={asking}
-        title={t('approveTitle')}
+        title={t(`approveTitle.${subject}`)}
         confirmLabel={t('approve')}
         busyLabel={t('approving')}
         cancelLabel={t('cancel')}
@@ -57,7 +57,7 @@ export function ReviewActions() {
         onConfirm={() => void approve()}
         onCancel={() => setAsking(false)}
       >
-        {t('approveWords')}
+        {t(`approveWords.${subject}`)}
       </ConfirmDialog>
     </>
   );
@@ -65,7 +65,7 @@ export function ReviewActions() {
 
 function ReviewFault() {
   const { t } = useTranslation('plan-review');
-  const { fault } = useReview();
+  const { fault } = useReviewWork();
   if (!fault) return null;
   const words = {
     offline: () => t('offline'),

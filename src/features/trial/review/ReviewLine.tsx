@@ -4,7 +4,7 @@ import { Icon } from '../../../components/ui/Icon.tsx';
 import { formatsFor } from '../../../i18n/format.ts';
 import type { Language } from '../../../i18n/languages.ts';
 import { AddRemark } from './AddRemark.tsx';
-import { useReview } from './review-context.tsx';
+import { useReviewWork } from './review-context.tsx';
 
 interface Props {
   readonly label: string;
@@ -16,8 +16,8 @@ interface Props {
 /** One line of what is looked at, with what was remarked on it. */
 export function ReviewLine({ label, place, children }: Props) {
   const { t, i18n } = useTranslation('plan-review');
-  const { review, shop } = useReview();
-  const { dateTime } = formatsFor(i18n.language as Language, shop.timeZone);
+  const { review, timeZone } = useReviewWork();
+  const { dateTime } = formatsFor(i18n.language as Language, timeZone);
   const remarks = review?.comments.filter((comment) => comment.place === place) ?? [];
   return (
     <div className="review-line">
