@@ -71,6 +71,8 @@ const visits: Visit[] = [
   { file: 'trials/[id]/audit/checks.astro', path: '/trials/:runningId/audit/checks', as: 'engineer' },
   { file: 'trials/[id]/audit/prediction.astro', path: '/trials/:runningId/audit/prediction', as: 'engineer' },
   { file: 'trials/[id]/audit/check-runs.astro', path: '/trials/:runningId/audit/check-runs', as: 'engineer' },
+  { file: 'trials/[id]/audit/models.astro', path: '/trials/:runningId/audit/models', as: 'engineer' },
+  { file: 'trials/[id]/audit/sign-off.astro', path: '/trials/:runningId/audit/sign-off', as: 'engineer' },
   { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/plan', as: 'supervisor' },
   { file: 'trials/[id]/[step].astro', path: '/trials/:trialId/crew', as: 'supervisor' },
 ];

@@ -28,6 +28,13 @@ const bodies: Record<string, Attempt['body']> = {
     content: { change: '3' },
     save: '6f1d2c3b-8a4e-4d5f-9b60-7c8d9e0f1a2b',
   }),
+  'PUT /api/trials/[id]/models/[model]': json({
+    name: 'A stranger’s model',
+    spec: {
+      ...{ result: 0, terms: ['A'], refuseHierarchy: false, transform: { kind: 'none' }, without: [] },
+      ...{ stretchesAsBlocks: false, error: 'ladder' },
+    },
+  }),
   'POST /api/trials/[id]/plan': json({ revision: 1, proposalId: 'any' }),
   'POST /api/trials/[id]/practice': json({}),
   'POST /api/trials/[id]/events': json({ event: 'start', revision: 1 }),
@@ -125,7 +132,7 @@ function paramsFor(path: string): Record<string, string> {
     {
       ...{ 'me/tokens': 'token', trials: 'trial', reviews: 'review', runs: 'run', photos: 'photo' },
     }[kind ?? ''] ?? 'id';
-  return { id: params[name] ?? '', handle: params['handle'] ?? '' };
+  return { id: params[name] ?? '', handle: params['handle'] ?? '', model: newId() };
 }
 
 const table = endpoints.map((endpoint) => ({ ...endpoint, name: `${endpoint.method} ${endpoint.path}` }));

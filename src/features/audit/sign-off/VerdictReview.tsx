@@ -8,19 +8,7 @@ import { ReviewPart } from '../../trial/review/ReviewPart.tsx';
 import { ReviewStanding } from '../../trial/review/ReviewStanding.tsx';
 import { ReviewWorkContext, useReviewWorkOf } from '../../trial/review/review-context.tsx';
 import type { PublicReview } from '../../trial/review.schema.ts';
-
-export interface SignOffLine {
-  readonly place: string;
-  readonly label: string;
-  readonly words: string;
-  /** Where its figures stand; null for what somebody decided. */
-  readonly href: string | null;
-}
-
-export interface SignOffPart {
-  readonly title: string;
-  readonly lines: readonly SignOffLine[];
-}
+import type { SignOffPart } from './sign-off-line.ts';
 
 interface Props {
   readonly language: Language;

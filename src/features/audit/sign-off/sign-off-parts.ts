@@ -1,6 +1,6 @@
 import type { PageWording } from '../../verdict/page/page-wording.ts';
 import { statementGroups, statementsOf } from '../statements.ts';
-import type { SignOffLine, SignOffPart } from './VerdictReview.tsx';
+import type { SignOffLine, SignOffPart } from './sign-off-line.ts';
 
 /** The statements of a verdict, group by group, as lines to be signed off. */
 function verdictParts(wording: PageWording): SignOffPart[] {
