@@ -69,8 +69,18 @@ export function errorLines({ analysis }: AuditModelView, { t, figures }: AuditWo
   ];
 }
 
+function scaleWords(
+  { analysis, transform }: Pick<AuditModelView, 'analysis' | 'transform'>,
+  t: AuditWording['t'],
+  figures: AuditWording['figures'],
+): string {
+  if (transform.kind === 'none') return t(`audit-model:fit.scales.${analysis.scale}`);
+  const words = t(`audit-models:transform.${transform.kind}`);
+  return transform.kind === 'boxCox' ? `${words}, \u03bb = ${figures.tick(transform.lambda)}` : words;
+}
+
 /** How well the model describes the readings. */
-export function fitLines({ analysis }: AuditModelView, { t, figures }: AuditWording): ModelLine[] {
+export function fitLines({ analysis, transform }: AuditModelView, { t, figures }: AuditWording): ModelLine[] {
   const { lackOfFit, r2, r2Adjusted, r2Predicted, press, n, alpha } = {
     ...analysis,
     alpha: analysis.basis.alpha,
@@ -78,7 +88,11 @@ export function fitLines({ analysis }: AuditModelView, { t, figures }: AuditWord
   const none = t('audit-model:none');
   return [
     { key: 'n', label: t('audit-model:fit.n'), value: figures.tick(n) },
-    { key: 'scale', label: t('audit-model:fit.scale'), value: t(`audit-model:fit.scales.${analysis.scale}`) },
+    {
+      key: 'scale',
+      label: t('audit-model:fit.scale'),
+      value: scaleWords({ analysis, transform }, t, figures),
+    },
     { key: 'alpha', label: t('audit-model:fit.alpha'), value: figures.tick(alpha) },
     { key: 'r2', label: 'R\u00b2', value: figures.one(r2) },
     { key: 'r2Adjusted', label: t('audit-model:fit.adjusted'), value: figures.one(r2Adjusted) },
