@@ -35,7 +35,8 @@ export function erasePerson(
 ): Promise<Person> {
   return inTransaction(scope, async (inner) => {
     const person = await findPersonInReach(inner, which.id, reader);
-    await recordActivity(inner, { kind: 'person.erased', subjectId: which.id });
+    const details = { before: person.roles, after: [] };
+    await recordActivity(inner, { kind: 'person.erased', subjectId: which.id, details });
     const name = await writeFormerName(inner, person);
     await forgetTextsOfPerson(inner, which.id);
     const countsAsAdmin = person.active && person.roles.includes('admin');

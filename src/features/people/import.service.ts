@@ -92,7 +92,9 @@ async function addAll(scope: ShopScope, people: readonly ImportedPerson[], diges
   }
   await insertPeople(scope, added);
   // One line for the whole file; who got a role that signs in stands in it by id.
-  const signingIn = added.filter(({ roles }) => signsIn(roles)).map(({ id, roles }) => ({ id, roles }));
+  const signingIn = added
+    .filter(({ roles }) => signsIn(roles))
+    .map(({ id, roles }) => ({ id, before: [], after: roles }));
   await recordActivity(scope, {
     kind: 'people.imported',
     subjectId: digest,

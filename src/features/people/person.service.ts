@@ -32,7 +32,7 @@ export async function addPerson(scope: ShopScope, input: AddPerson, reader: Peop
       await recordActivity(inner, {
         kind: 'person.added',
         subjectId: id,
-        details: { kind: fields.kind, roles: fields.roles, safetyPerson: fields.safetyPerson },
+        details: { kind: fields.kind, safetyPerson: fields.safetyPerson, before: [], after: fields.roles },
       });
       if (invite) await inviteWithin(inner, await findPersonInReach(inner, id, reader));
     }

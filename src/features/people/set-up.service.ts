@@ -77,7 +77,7 @@ export async function setUpShop(visit: Visit, setUp: SetUp, browser: Browser): P
     await recordActivity(scope, {
       kind: 'person.added',
       subjectId: personId,
-      details: { roles: ['admin'] },
+      details: { before: [], after: ['admin'] },
     });
     return openSession(scope, personId, browser);
   });

@@ -43,7 +43,12 @@ export function confirmReading(
       kind: which.isRight ? 'reading.confirmed' : 'reading.denied',
       subjectId: run.id,
       trialId: run.trialId,
-      details: { run: run.number, figures: logFigures(askedBack) },
+      details: {
+        run: run.number,
+        asked: logFigures(askedBack),
+        before: logFigures(counted),
+        after: logFigures(which.isRight ? [...counted, ...askedBack] : counted),
+      },
     });
     if (isDone) await closeIfLastRun(inner, run.trialId);
   });

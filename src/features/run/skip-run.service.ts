@@ -5,7 +5,7 @@ import type { ShopScope } from '../../server/db/scope.ts';
 import type { Trial } from '../trial/trial.ts';
 import { findStep, findTrialOf, type TrialReader, takeStep } from '../trial/trial-reader.service.ts';
 import { closeIfLastRun } from './close-trial.service.ts';
-import { standing } from './keep-figures.service.ts';
+import { logFigures, standing } from './keep-figures.service.ts';
 import { cancelUnsentPrompts } from './prompts.repository.ts';
 import { listReadings, setReadingStates } from './readings.repository.ts';
 import type { Run } from './run.ts';
@@ -14,15 +14,19 @@ import { findRunOf, isBeingRun, requireBeingRun, requireRunStep, takeRunStep } f
 /** Closes one run as not run, without looking at whether it was the last. What it read so far no longer counts. */
 export async function closeAsNotRun(scope: ShopScope, run: Run, revision?: number): Promise<void> {
   const step = requireRunStep(run, 'skip');
-  const stood = standing(await listReadings(scope, [run.id])).map(({ id }) => id);
-  await setReadingStates(scope, stood, 'not used');
+  const stood = standing(await listReadings(scope, [run.id]));
+  await setReadingStates(
+    scope,
+    stood.map(({ id }) => id),
+    'not used',
+  );
   await takeRunStep(scope, run, step, { revision, end: 'notRun', closedAt: now(), remindAt: null });
   await cancelUnsentPrompts(scope, { trialId: run.trialId, runId: run.id });
   await recordActivity(scope, {
     kind: 'run.skipped',
     subjectId: run.id,
     trialId: run.trialId,
-    details: { run: run.number, before: run.state, readings: stood.length },
+    details: { run: run.number, state: run.state, before: logFigures(stood), after: [] },
   });
 }
 

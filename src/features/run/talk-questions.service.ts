@@ -1,8 +1,10 @@
 import { findRunMention, readRunChoice } from '../../lib/messages/index.ts';
+import { recordActivity } from '../../server/db/activity-log.ts';
 import { findTemplateOf } from '../message/message.repository.ts';
 import type { QueuedMessage } from '../message/message.service.ts';
 import { confirmReading } from './confirm-reading.service.ts';
 import { correctReading } from './correct-reading.service.ts';
+import { logFigures } from './keep-figures.service.ts';
 import { listReadings, setReadingStates } from './readings.repository.ts';
 import { recordRun } from './record-run.service.ts';
 import type { Reading, Run } from './run.ts';
@@ -117,6 +119,12 @@ export async function chooseRun(talk: Talk): Promise<TalkResult | undefined> {
     pending.map(({ id }) => id),
     'not used',
   );
+  await recordActivity(scope, {
+    kind: 'reading.denied',
+    subjectId: run.id,
+    trialId: run.trialId,
+    details: { run: run.number, before: logFigures(pending), after: [] },
+  });
   const values = valuesOf(trial, pending);
   if (chosen.state !== 'done') {
     return keepReading(talk, trial, chosen, { asksBack: chosen.id !== run.id, values });

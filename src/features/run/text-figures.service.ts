@@ -1,6 +1,7 @@
 import type { Reply } from '../../lib/messages/index.ts';
+import { recordActivity } from '../../server/db/activity-log.ts';
 import type { ShopScope } from '../../server/db/scope.ts';
-import type { Submission } from './keep-figures.service.ts';
+import { logFigures, type Submission } from './keep-figures.service.ts';
 import { isFarOff, type Range, widenRange } from './plausible.ts';
 import { insertReading, listReadings } from './readings.repository.ts';
 import { completeFigure, listResultItems } from './result-items.ts';
@@ -91,5 +92,11 @@ export async function setApart(
       await insertReading(scope, run.id, { ...completeFigure(items, figure), ...from, state: 'asked back' }),
     );
   }
+  await recordActivity(scope, {
+    kind: 'reading.set-apart',
+    subjectId: run.id,
+    trialId: run.trialId,
+    details: { run: run.number, source: from.source, before: [], after: logFigures(figures) },
+  });
   return ids[0] ?? null;
 }

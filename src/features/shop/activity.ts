@@ -56,6 +56,7 @@ export const activityKinds = [
   'reading.corrected',
   'reading.confirmed',
   'reading.denied',
+  'reading.set-apart',
   'reading.imported',
   'photo.added',
   'photo.removed',

@@ -39,6 +39,7 @@ export async function planChecks(
   }));
   await takeStep(scope, trial, step, revision);
   const id = newId();
+  const hash = hashOf(runs);
   await insertPlan(scope, {
     ...plan,
     id,
@@ -47,7 +48,7 @@ export async function planChecks(
     phase: 'check',
     seed,
     coreVersion,
-    hash: hashOf(runs),
+    hash,
     chosenBy: reader.personId,
   });
   const { answers } = await readStoredAnswers(scope, trial.id);
@@ -57,6 +58,6 @@ export async function planChecks(
     kind: 'trial.check-runs',
     subjectId: trial.id,
     trialId: trial.id,
-    details: { pairs: runs.length / 2, seed },
+    details: { pairs: runs.length / 2, seed, before: last.hash, after: hash },
   });
 }
