@@ -4,6 +4,7 @@ import { Callout } from '../../../components/ui/Callout.tsx';
 import { formatsFor } from '../../../i18n/format.ts';
 import type { Language } from '../../../i18n/languages.ts';
 import type { QuestionName } from '../answers.schema.ts';
+import { wordOfChoice } from './choice-words.ts';
 import { differencesOf } from './describe-difference.ts';
 import type { AnswerConflict } from './stored-answers.ts';
 import type { WizardShop } from './wizard-context.ts';
@@ -15,15 +16,14 @@ interface Props {
 }
 
 function Conflict({ conflict, shop, onResolve }: Omit<Props, 'conflicts'> & { conflict: AnswerConflict }) {
-  const { t, i18n } = useTranslation('wizard-frame');
+  const { t, i18n } = useTranslation(['wizard-frame', 'wizard-safety', 'wizard-plan', 'safety']);
   const { question, mine, theirs } = conflict;
   const { time } = formatsFor(i18n.language as Language, shop.timeZone);
 
   function wordsOf(one: unknown, other: unknown): string {
-    const words = differencesOf(one, other).map((difference) => {
-      if (difference.kind === 'typed') return difference.text;
-      return difference.kind === 'choice' ? t(`chosen.${difference.name}`) : t('conflict.otherChoice');
-    });
+    const words = differencesOf(one, other).map(({ kind, text }) =>
+      kind === 'typed' ? text : wordOfChoice(text, t),
+    );
     return words.length > 0 ? words.join(' · ') : t('conflict.nothing');
   }
 

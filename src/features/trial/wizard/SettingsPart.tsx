@@ -97,7 +97,7 @@ export function SettingsPart() {
       {mayWrite && (
         <>
           <div className="button-row">
-            <Button icon="plus" disabled={isFull} onClick={() => add('number')}>
+            <Button id="add-number" icon="plus" disabled={isFull} onClick={() => add('number')}>
               {t('settings.addNumber')}
             </Button>
             <Button icon="plus" disabled={isFull} onClick={() => add('choice')}>

@@ -1,33 +1,5 @@
-/** A choice of the first pages that has a short word of its own (`chosen` in the words of the frame). */
-export const wordedChoices = [
-  'more',
-  'less',
-  'target',
-  'measured',
-  'scored',
-  'rejects',
-  'flaws',
-  'operator',
-  'other',
-  'atOnce',
-  'minutes',
-  'later',
-  'mean',
-  'part',
-  'low',
-  'high',
-  'neither',
-  'notSure',
-  'noLimit',
-  'hard',
-] as const;
-export type WordedChoice = (typeof wordedChoices)[number];
-
-/** One thing that stands differently in two answers: what was typed, a choice with a word, or some other choice. */
-export type Difference =
-  | { kind: 'typed'; text: string }
-  | { kind: 'choice'; name: WordedChoice }
-  | { kind: 'other choice' };
+/** One thing that stands differently in two answers: what was typed, or a choice by its name. */
+export type Difference = { kind: 'typed' | 'choice'; text: string };
 
 /** Fields that hold one of a list of names instead of what somebody typed. */
 const choiceFields =
@@ -49,9 +21,7 @@ function describe(path: string, value: unknown): Difference {
     typeof value === 'boolean' ||
     choiceFields.test(path) ||
     (/(^|\.)usual$/.test(path) && (name === 'low' || name === 'high'));
-  if (!isChoice) return { kind: 'typed', text: name };
-  const worded = wordedChoices.find((each) => each === name);
-  return worded ? { kind: 'choice', name: worded } : { kind: 'other choice' };
+  return { kind: isChoice ? 'choice' : 'typed', text: name };
 }
 
 /** What stands in `one` and not, or otherwise, in `other`, in the order of the form. */

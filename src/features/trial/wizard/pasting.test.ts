@@ -40,10 +40,10 @@ describe('two answers to one question', () => {
     const theirs = { settings: [{ ...setting, id: 'b', low: '145' }] };
     expect(differencesOf(mine, theirs)).toEqual([
       { kind: 'typed', text: '140' },
-      { kind: 'choice', name: 'hard' },
+      { kind: 'choice', text: 'hard' },
     ]);
     expect(differencesOf(theirs, mine)).toEqual([{ kind: 'typed', text: '145' }]);
-    expect(differencesOf({ wish: 'more' }, null)).toEqual([{ kind: 'choice', name: 'more' }]);
-    expect(differencesOf({ fate: 'hold' }, {})).toEqual([{ kind: 'other choice' }]);
+    expect(differencesOf({ wish: 'more' }, null)).toEqual([{ kind: 'choice', text: 'more' }]);
+    expect(differencesOf({ fate: 'hold' }, {})).toEqual([{ kind: 'choice', text: 'hold' }]);
   });
 });

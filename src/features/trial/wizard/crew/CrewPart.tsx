@@ -40,7 +40,7 @@ export function CrewPart() {
       ))}
       {mayWrite && fields.length < mostShifts && (
         <div>
-          <Button icon="plus" onClick={add}>
+          <Button id="add-shift" icon="plus" onClick={add}>
             {fields.length === 0 ? t('crew.addFirst') : t('crew.add')}
           </Button>
         </div>
