@@ -14,7 +14,9 @@ const environmentReaders = [
 export function findEnvironmentReads(sources: Source[]): string[] {
   const bound = sources.filter(({ path }) => !environmentReaders.some((reader) => reader.test(path)));
   return bound.flatMap((source) =>
-    [...walk(parseSource(source))].filter(readsEnvironment).map((node) => placeOf(source, node)),
+    walk(parseSource(source))
+      .filter(readsEnvironment)
+      .map((node) => placeOf(source, node)),
   );
 }
 
@@ -58,7 +60,9 @@ const statement =
 export function findStrayQueries(sources: Source[]): string[] {
   const bound = sources.filter(({ path }) => !databaseSpeakers.some((speaker) => speaker.test(path)));
   return bound.flatMap((source) =>
-    [...walk(parseSource(source))].filter(isQuery).map((node) => placeOf(source, node)),
+    walk(parseSource(source))
+      .filter(isQuery)
+      .map((node) => placeOf(source, node)),
   );
 }
 
@@ -87,7 +91,9 @@ const unrun = new Set(['skip', 'only', 'todo', 'skipIf', 'runIf', 'fails']);
 export function findUnrunTests(sources: Source[]): string[] {
   const tests = sources.filter(({ path }) => /^tests\/|\.(test|bench)\.tsx?$/.test(path));
   return tests.flatMap((source) =>
-    [...walk(parseSource(source))].filter(isUnrun).map((node) => placeOf(source, node)),
+    walk(parseSource(source))
+      .filter(isUnrun)
+      .map((node) => placeOf(source, node)),
   );
 }
 

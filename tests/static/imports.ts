@@ -10,7 +10,7 @@ export interface Import {
 
 /** What a file imports or exports from elsewhere, dynamic imports and import types among it. */
 export function importsOf(source: Source): Import[] {
-  return [...walk(parseSource(source))].flatMap((node): Import[] => {
+  return walk(parseSource(source)).flatMap((node): Import[] => {
     if (ts.isImportDeclaration(node) && ts.isStringLiteral(node.moduleSpecifier))
       return [{ specifier: node.moduleSpecifier.text, isTypeOnly: node.importClause?.isTypeOnly ?? false }];
     if (ts.isExportDeclaration(node) && node.moduleSpecifier && ts.isStringLiteral(node.moduleSpecifier))

@@ -17,7 +17,7 @@ export interface KeyUsage {
 export function findKeyUsage(sources: Source[]): KeyUsage {
   const product = sources.filter(({ path }) => path.startsWith('src/') && layerOf(path)?.name !== 'tests');
   const keys = product.flatMap((source) =>
-    [...walk(parseSource(source))].flatMap((node) => keyArgument(node) ?? []),
+    walk(parseSource(source)).flatMap((node) => keyArgument(node) ?? []),
   );
   const used = new Set(keys.flatMap((key) => (ts.isStringLiteralLike(key) ? [key.text] : [])));
   const unreadable: string[] = [];
@@ -30,7 +30,7 @@ export function findKeyUsage(sources: Source[]): KeyUsage {
   for (const source of builders) {
     const tree = program.getSourceFile(virtualPath(source));
     if (!tree) throw new RangeError(`findKeyUsage: ${source.path} is not in the program`);
-    for (const key of [...walk(tree)].flatMap((node) => keyArgument(node) ?? [])) {
+    for (const key of walk(tree).flatMap((node) => keyArgument(node) ?? [])) {
       const texts = possibleTexts(checker, key);
       if (!texts) unreadable.push(`${source.path}: ${key.getText(tree)}`);
       for (const text of texts ?? []) used.add(text);

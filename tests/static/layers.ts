@@ -124,7 +124,7 @@ export const layers: Layer[] = [
   {
     name: 'configuration',
     paths: /^(knexfile\.ts|astro\.config\.mjs)$/,
-    mayImport: ['server', 'styles'],
+    mayImport: ['server', 'styles', 'commands'],
     underAstro: true,
     forDevelopment: true,
   },

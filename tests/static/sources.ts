@@ -55,14 +55,20 @@ function tsxOfAstro({ path, text }: Source): string {
   return convertToTSX(text, { filename: path, includeScripts: true, includeStyles: false }).code;
 }
 
-/** All nodes of a tree, parents before children. */
-export function* walk(node: ts.Node): Generator<ts.Node> {
-  yield node;
-  const children: ts.Node[] = [];
-  ts.forEachChild(node, (child) => {
-    children.push(child);
-  });
-  for (const child of children) yield* walk(child);
+const listed = new WeakMap<ts.Node, ts.Node[]>();
+
+/** All nodes of a tree, parents before children. Several rules walk the same trees, so a list is kept. */
+export function walk(node: ts.Node): readonly ts.Node[] {
+  const known = listed.get(node);
+  if (known) return known;
+  const nodes: ts.Node[] = [];
+  const visit = (each: ts.Node): void => {
+    nodes.push(each);
+    ts.forEachChild(each, visit);
+  };
+  visit(node);
+  listed.set(node, nodes);
+  return nodes;
 }
 
 /** Where a node stands, as `path:line`. The line of an Astro file may be off by one. */

@@ -33,7 +33,7 @@ export function findStrayWords(sources: Source[]): string[] {
       readByPeople.test(path) && !developerPages.test(path) && !/\.(test|bench)\.tsx?$/.test(path),
   );
   return bound.flatMap((source) =>
-    [...walk(parseSource(source))]
+    walk(parseSource(source))
       .filter((node) => isStray(node))
       .map((node) => `${placeOf(source, node)}: ${node.getText().trim()}`),
   );
