@@ -31,6 +31,7 @@ export function crewMember(more: Partial<CrewMember> & Pick<CrewMember, 'id'>): 
     safetyPerson: false,
     consent: 'agreed',
     consentAt: 0,
+    textingHours: ['Mon–Fri 06:00–14:00'],
     ...more,
   };
 }

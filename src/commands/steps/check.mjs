@@ -2,4 +2,4 @@
 import { runSteps } from './run-steps.mjs';
 import { installStep, lintStep, typesStep, unitStep } from './steps.mjs';
 
-await runSteps([installStep, typesStep, lintStep, unitStep]);
+await runSteps([installStep, [[typesStep, lintStep], [unitStep]]]);

@@ -10,22 +10,36 @@ import { RunningTally } from './tally.mjs';
 
 /**
  * Runs the steps one after the other and prints how long each took. The exit code is 0 only with no failure.
- * @param {Step[]} steps
+ * @param {(Step | Step[][])[]} steps where lanes stand, the lanes run side by side, the steps of a lane one after the other
  */
 export async function runSteps(steps) {
   const tally = new RunningTally();
   for (const signal of leavingSignals) process.on(signal, () => void leave(signal));
   const start = Date.now();
   for (const step of steps) {
-    tally.open(step.name);
-    const stepStart = Date.now();
-    const counted = await runStep(step);
-    if (isLeaving) process.exit(1);
-    tally.add(counted);
-    console.log(`  ${describeStep(step.name, counted, Date.now() - stepStart)}`);
-    if (step.essential && counted.failed > 0) break;
+    const lanes = Array.isArray(step) ? step : [[step]];
+    const ended = await Promise.all(lanes.map((lane) => runLane(lane, tally)));
+    if (ended.includes('cannot go on')) break;
   }
   console.log(`  ${'all steps'.padEnd(12)} ${formatSeconds(Date.now() - start).padStart(36)}`);
+}
+
+/**
+ * @param {Step[]} lane
+ * @param {RunningTally} tally
+ * @returns {Promise<'done' | 'cannot go on'>}
+ */
+async function runLane(lane, tally) {
+  for (const step of lane) {
+    tally.open(step.name);
+    const start = Date.now();
+    const counted = await runStep(step);
+    if (isLeaving) process.exit(1);
+    tally.add(step.name, counted);
+    console.log(`  ${describeStep(step.name, counted, Date.now() - start)}`);
+    if (step.essential && counted.failed > 0) return 'cannot go on';
+  }
+  return 'done';
 }
 
 /**

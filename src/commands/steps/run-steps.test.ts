@@ -70,6 +70,24 @@ describe('runSteps ends with its counts', () => {
     expect(end).toMatchObject({ code: 1, lastLine: '0 passed, 1 failed' });
   });
 
+  it('and counts steps that run side by side, also one that never ends', async () => {
+    const meet = (name: string) =>
+      `{ name: '${name}', run: async () => {
+        globalThis.here = (globalThis.here ?? 0) + 1;
+        while (globalThis.here < 2) await new Promise((done) => setTimeout(done, 5));
+        return { passed: 1, failed: 0 };
+      } }`;
+    const lanes = `[[${meet('one')}], [${meet('other')}]]`;
+    expect(await waitForEnd(startSteps(lanes, passing))).toMatchObject({
+      code: 0,
+      lastLine: '5 passed, 0 failed',
+    });
+    const stuck = `[[{ name: 'stuck', run: () => new Promise(() => {}) }], [${passing}]]`;
+    const end = await waitForEnd(startSteps(stuck));
+    expect(end).toMatchObject({ code: 1, lastLine: '3 passed, 1 failed' });
+    expect(end.output).toContain('stuck did not come to its end');
+  });
+
   it.each(['SIGINT', 'SIGTERM', 'SIGHUP'] as const)('and 1 on %s, its programs ended', async (signal) => {
     const child = startSteps(
       passing,

@@ -9,7 +9,8 @@
 export class RunningTally {
   passed = 0;
   failed = 0;
-  #openStep = '';
+  /** @type {Set<string>} */
+  #open = new Set();
 
   constructor() {
     process.on('uncaughtException', (error) => {
@@ -21,19 +22,22 @@ export class RunningTally {
 
   /** @param {string} name */
   open(name) {
-    this.#openStep = name;
+    this.#open.add(name);
   }
 
-  /** @param {Tally} counted of the step that was open */
-  add({ passed, failed }) {
+  /**
+   * @param {string} name of a step that was open
+   * @param {Tally} counted
+   */
+  add(name, { passed, failed }) {
     this.passed += passed;
     this.failed += failed;
-    this.#openStep = '';
+    this.#open.delete(name);
   }
 
   #close() {
-    if (this.#openStep !== '') {
-      console.log(`  ${this.#openStep} did not come to its end`);
+    for (const name of this.#open) {
+      console.log(`  ${name} did not come to its end`);
       this.failed += 1;
     }
     if (this.passed === 0 && this.failed === 0) this.failed = 1;

@@ -10,4 +10,5 @@ import {
   unitStep,
 } from './steps.mjs';
 
-await runSteps([installStep, typesStep, lintStep, unitStep, buildStep, integrationStep, browserStep]);
+// The first checkers and the build use one core each; unit tests fill what they leave.
+await runSteps([installStep, [[typesStep, lintStep, buildStep], [unitStep]], integrationStep, browserStep]);

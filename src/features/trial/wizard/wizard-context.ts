@@ -13,6 +13,8 @@ export interface CrewMember {
   safetyPerson: boolean;
   consent: 'unasked' | 'asked' | 'agreed' | 'opted out';
   consentAt: number | null;
+  /** When they may be texted, a line for each shift; none where no hours are kept, so that nothing may go out. */
+  textingHours: readonly string[];
 }
 
 /** What the wizard knows of the shop. */

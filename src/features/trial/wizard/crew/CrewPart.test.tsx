@@ -14,6 +14,7 @@ const person = (id: string, name: string, more: Partial<CrewMember> = {}): CrewM
   safetyPerson: false,
   consent: 'agreed',
   consentAt: Date.UTC(2026, 2, 3, 12),
+  textingHours: ['Mon–Fri 06:00–14:00'],
   ...more,
 });
 const people = [

@@ -70,6 +70,13 @@ export function PersonWay({ form, person }: Props) {
             </span>
             {words}
           </p>
+          {consent === 'agreed' && (
+            <p>
+              {person.textingHours.length > 0
+                ? t('crew.hours', { hours: formats.list([...person.textingHours]) })
+                : t('crew.noHours', { name })}
+            </p>
+          )}
           <TrialFault fault={fault} />
           {mayWrite && consent !== 'agreed' && (
             <div className="button-row">

@@ -11,6 +11,7 @@ const person = (id: string, roles: string[], more: Partial<CrewMember> = {}): Cr
   safetyPerson: false,
   consent: 'agreed',
   consentAt: 0,
+  textingHours: ['Mon–Fri 06:00–14:00'],
   ...more,
 });
 const people = [
