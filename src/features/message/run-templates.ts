@@ -55,6 +55,9 @@ const toCrew = {
   cannotOut: text({ ...told, params: z.strictObject({ run, machine: words }) }, (t, params) =>
     t('run-texts:cannotOut', params),
   ),
+  whoIsOn: text({ ...told, params: z.strictObject({ machine: words }) }, (t, params) =>
+    t('run-texts:whoIsOn', params),
+  ),
   photoNoted: text({ ...answer, params: z.strictObject({ run }) }, (t, params) =>
     t('run-texts:photoNoted', params),
   ),

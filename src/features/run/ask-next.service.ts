@@ -4,6 +4,7 @@ import type { ShopScope } from '../../server/db/scope.ts';
 import { readConversation } from '../message/conversation.repository.ts';
 import { areTextsUsedUp } from '../message/monthly-texts.service.ts';
 import type { Lead } from '../message/run-prompt.ts';
+import { askWhoIsOn } from './line-phone.service.ts';
 import { listOpenProblems } from './problem.repository.ts';
 import { blockingKinds } from './problem-kinds.ts';
 import { listRuns } from './run.repository.ts';
@@ -59,6 +60,7 @@ export async function askNextRun(
   const { lead } = options;
   const prompt = describePrompt(trial, asked, runs.length);
   const params = lead && options.from === personId ? { ...prompt, lead } : prompt;
+  await askWhoIsOn(scope, trial, personId);
   const sent = await tell(
     scope,
     personId,

@@ -6,6 +6,7 @@ import { type ConversationAction, conversationTable } from '../message/conversat
 import type { InboxText } from '../message/inbox.repository.ts';
 import type { ConversationState } from '../message/text-reading.ts';
 import { holdByText } from './hold-by-text.service.ts';
+import { takeInitials } from './line-phone.service.ts';
 import type { Run } from './run.ts';
 import { crewOf } from './run-people.service.ts';
 import { readRunningTrial } from './running-trial.service.ts';
@@ -103,6 +104,8 @@ export async function converse(
 
   const read = await readWith(talk);
   const action = conversationTable[stateOf(conversation, person, inHand)][read.reply.intent];
+  const signed = read.reply.intent === 'unreadable' ? await takeInitials(read) : undefined;
+  if (signed) return { ...signed, intent: 'initials' };
   const result = await handlers[action](read);
   return { ...result, intent: read.reply.intent };
 }

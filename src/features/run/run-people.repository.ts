@@ -16,6 +16,15 @@ export async function listOperators(scope: ShopScope): Promise<CrewPerson[]> {
   return z.array(personRow).parse(rows);
 }
 
+/** Whether this is a phone of a place, which whoever is on shift holds. */
+export async function isLinePhone(scope: ShopScope, id: string): Promise<boolean> {
+  const row: unknown = await scope
+    .db('people')
+    .where({ shop_id: scope.shopId, id, kind: 'line phone' })
+    .first('id');
+  return row !== undefined;
+}
+
 export async function isActivePerson(scope: ShopScope, id: string): Promise<boolean> {
   const row: unknown = await scope
     .db('people')

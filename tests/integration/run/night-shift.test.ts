@@ -54,3 +54,19 @@ it('keeps with each reading who sent it', async () => {
   const readings = await database()('readings').where({ run_id: (await runNow(shop, 1)).id });
   expect(readings.map(({ entered_by, value }) => [entered_by, value])).toEqual([[ola, 41.5]]);
 });
+
+it('asks a line phone once a shift who is on, and keeps the initials with the run', async () => {
+  await database()('people').where({ id: crew.ana }).update({ kind: 'line phone' });
+  const shop = await startTrial(crew);
+  const asks = async () => (await received(crew)).filter((body) => body.startsWith('Line 3: who is on'));
+  expect(await asks()).toEqual(['Line 3: who is on now? Text your initials, like AK.']);
+  const before = (await received(crew)).length;
+  await reply(shop, 'A.K.');
+  expect((await received(crew)).length).toBe(before);
+  const notes = await database()('notes').where({ trial_id: shop.trialId });
+  expect(notes).toMatchObject([{ words: 'A.K.', run_id: (await runNow(shop, 1)).id, written_by: crew.ana }]);
+  await passTime(10 * minute);
+  await reply(shop, '41.5');
+  expect((await runNow(shop, 2)).state).toBe('asked');
+  expect(await asks()).toHaveLength(1);
+});
