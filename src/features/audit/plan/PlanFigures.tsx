@@ -24,7 +24,7 @@ export function PlanFigures({ plan, tReview, ...wording }: Props) {
   const lines = auditLines(proposal, { t: tReview, formats, unit, worth }).map(({ key, label, lines }) => ({
     key,
     label,
-    anchor: key.startsWith('detectable') ? key.replace('/', '-') : key,
+    anchor: `plan-${key.replace('/', '-')}`,
     value: lines.map((line) => <p key={line}>{line}</p>),
   }));
   const origin = [
