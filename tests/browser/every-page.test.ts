@@ -48,6 +48,7 @@ const visits: Visit[] = [
   { file: 'trials/[id]/verdict.astro', path: '/trials/none/verdict', as: 'admin', status: 404 },
   { file: 'trials/[id]/card.astro', path: '/trials/none/card', as: 'admin', status: 404 },
   { file: 'trials/machine.astro', path: '/trials/machine?name=Line%203', as: 'admin' },
+  { file: 'trials/[id]/report.astro', path: '/trials/none/report', as: 'admin', status: 404 },
   { file: 'people/index.astro', path: '/people', as: 'admin' },
   { file: 'people/new.astro', path: '/people/new', as: 'admin' },
   { file: 'people/[id].astro', path: '/people/:personId', as: 'admin' },

@@ -1,6 +1,6 @@
 import type { VerdictView } from '../../src/features/verdict/verdict-view.ts';
 import type { Brief, FactorSpec } from '../../src/lib/doe/index.ts';
-import { referenceExamples } from './reference-examples.ts';
+import { publishedTrial } from './published-trials.ts';
 import { luck, type MadeTrial, makeView, planFor, type Reading } from './verdict-view.ts';
 
 export { resultsOf } from './verdict-view.ts';
@@ -101,39 +101,6 @@ const at = (x: readonly number[], place: number) => x[place] ?? 0;
 const strongTruth = (x: readonly number[]) => 36 + 3 * at(x, 0) + 1.6 * at(x, 1) + 0.1 * at(x, 2);
 const strong = () => sealTrial(seals, strongTruth, 11);
 
-/** A published factorial with its own readings, under names of the shop's kind. */
-function published(id: string, response: Partial<Brief['response']>): MadeTrial {
-  const example = referenceExamples.find((each) => each.id === id);
-  if (!example) throw new RangeError(`published: no example ${id}`);
-  const letters = (example.factors ?? []).map(({ letter }) => letter);
-  const names = ['Heat', 'Pressure', 'Mix', 'Stir speed', 'Feed'];
-  const brief = lonely({
-    response: { name: 'flow', unit: 'l/h', kind: 'measured', goal: 'more', worthHaving: 5, ...response },
-    factors: letters.map((_, place) => ({
-      kind: 'number',
-      name: names[place] ?? '',
-      unit: ['°C', 'bar', '%', 'rpm', 'kg'][place] ?? '',
-      low: 10,
-      high: 20,
-      usual: 10,
-    })),
-    noise: null,
-  });
-  const plan = example.runs.map((run, index) => {
-    const coded = letters.map((letter) => run.coded?.[letter] ?? 0);
-    return {
-      order: index + 1,
-      standard: index + 1,
-      block: run.block ?? 1,
-      group: coded.join(' '),
-      center: run.centre ?? false,
-      coded,
-      actual: coded.map((level) => 15 + 5 * level),
-    };
-  });
-  return { brief, plan, readings: example.runs.map(({ y }) => [{ y }]) };
-}
-
 function rejectsTrial(): MadeTrial {
   const brief = lonely({
     response: {
@@ -200,9 +167,9 @@ const made = {
       9,
       0.1,
     ),
-  batches: () => published('filtration-2-4-two-blocks', {}),
+  batches: () => publishedTrial('filtration-2-4-two-blocks', {}),
   nothing: () => sealTrial(lonely({ response: unlimited, factors: [jaw, dwell, film] }), () => 36, 21, 0.4),
-  tied: () => published('filtration-2-4-1-half', {}),
+  tied: () => publishedTrial('filtration-2-4-1-half', {}),
   oddReading: () => {
     const trial = sealTrial(lonely({ factors: [jaw, dwell, press] }), strongTruth, 8);
     return withRuns(trial, (place) => (place === 3 ? { y: 4.1, parts: [4.1, 4.0, 4.2] } : null));

@@ -71,7 +71,10 @@ export function resultWords(wording: Wording, result = 0): ResultWords {
     roughChange(change, interval) {
       const spread = (halfWidth(interval) ?? 0) * scale;
       const step = stepThatShows([change * scale], roundingStep(change * scale, spread, 'rough'));
-      const amount = withUnit(write(Math.abs(change) * scale, step));
+      const whole = Math.abs(change) * scale;
+      // Two figures of one change on a page must not look like two changes.
+      const isFar = Math.abs(Math.round(whole / step) * step - whole) > 0.05 * whole;
+      const amount = withUnit(write(whole, isFar ? stepOfChange(change, interval) : step));
       return t(`verdict:change.${change < 0 ? 'lower' : 'higher'}.alone`, { amount });
     },
     change(change, interval) {

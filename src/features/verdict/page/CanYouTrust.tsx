@@ -74,7 +74,8 @@ export function CanYouTrust({ checkRuns, ...wording }: Props) {
     'bends',
     'odd-reading',
   );
-  const sure = sentences([saySure(wording), sayGuess(wording)]);
+  const failed = view.verdict.headline.kind === 'some-runs-failed' ? t('verdict-page:trust.failed') : null;
+  const sure = sentences([saySure(wording), sayGuess(wording), failed]);
   const [check] = confirmation ? [] : factsOf(verdict.next, 'check-runs');
   const [odd] = factsOf(verdict.next, 'measure-again');
   const again = odd ? t('verdict-page:trust.first', { runs: sayRuns(wording, odd.refs.runs ?? []) }) : null;

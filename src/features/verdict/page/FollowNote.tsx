@@ -11,12 +11,14 @@ interface Props {
 /** Which trial this one follows, why, and so why its answers stand there already. */
 export function FollowNote({ t, trial, reason }: Props) {
   return (
-    <Callout tone="info">
-      {t('verdict-page:follow.after')}{' '}
-      <a href={`/trials/${trial.id}/verdict`}>
-        {t('verdict-page:follow.trial', { number: trial.number, title: trial.title })}
-      </a>
-      {`. ${t(`verdict-page:follow.why.${reason}`)} ${t('verdict-page:follow.check')}`}
-    </Callout>
+    <div className="mb-6">
+      <Callout tone="info">
+        {t('verdict-page:follow.after')}{' '}
+        <a href={`/trials/${trial.id}/verdict`}>
+          {t('verdict-page:follow.trial', { number: trial.number, title: trial.title })}
+        </a>
+        {`. ${t(`verdict-page:follow.why.${reason}`)} ${t('verdict-page:follow.check')}`}
+      </Callout>
+    </div>
   );
 }

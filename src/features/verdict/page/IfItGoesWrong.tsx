@@ -2,7 +2,7 @@ import { type Hazard, HazardSign } from '../../../components/ui/HazardSign.tsx';
 import type { HazardName } from '../../trial/answer-choices.ts';
 import { listDials, movedPlaces } from '../headline-words.ts';
 import { resultWords } from '../result-words.ts';
-import { sentences } from '../wording.ts';
+import { capitalize, sentences } from '../wording.ts';
 import { Numbered } from './Numbered.tsx';
 import { keepsToday, type PageWording } from './page-wording.ts';
 
@@ -65,7 +65,7 @@ export function CallLines({ view, t }: PageWording) {
   return (
     <ul className="verdict-calls">
       {view.call.map(({ when, whom }) => (
-        <li key={`${when} ${whom}`}>{t('verdict-page:wrong.call', { when, whom })}</li>
+        <li key={`${when} ${whom}`}>{capitalize(t('verdict-page:wrong.call', { when, whom }))}</li>
       ))}
     </ul>
   );

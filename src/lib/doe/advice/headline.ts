@@ -34,7 +34,9 @@ export function chooseHeadline({ bet, calls, details, failures, missing, planned
   const values = { gain: bet.versusUsual, interval: bet.gainInterval };
   const moved = calls.filter((call) => call.kind === 'matters' && call.values.sure !== 'not');
   const factors = [...new Set(moved.flatMap((call) => call.refs.factors ?? []))];
-  if (moved.some((call) => call.kind === 'matters' && call.values.sure === 'clear'))
+  // A gain is clear only if it is one: settings that are clear may still pull it both ways.
+  const isGain = bet.basis.direction === 1 ? bet.gainInterval[0] > 0 : bet.gainInterval[1] < 0;
+  if (isGain && moved.some((call) => call.kind === 'matters' && call.values.sure === 'clear'))
     return { kind: 'clear-gain', values, refs: { factors } };
   if (moved.length > 0) return { kind: 'likely-gain', values, refs: { factors } };
   return { kind: 'possible-gain', values, refs: {} };
