@@ -1,7 +1,7 @@
 import type { Page } from 'playwright-core';
 import { describe, expect, it } from 'vitest';
 import { withAppInBrowser } from '../setup/app-in-browser.ts';
-import { findAccessFaults, openAwake, openPage, takeShot } from '../setup/browser.ts';
+import { findAccessFaults, openPage, takeShot } from '../setup/browser.ts';
 import { signIn } from '../setup/sign-in.ts';
 
 const at = withAppInBrowser();
@@ -9,6 +9,18 @@ const at = withAppInBrowser();
 async function countPages(page: Page, format: 'A4' | 'Letter'): Promise<number> {
   const pdf = (await page.pdf({ format, preferCSSPageSize: true })).toString('latin1');
   return pdf.match(/\/Type \/Page\n/g)?.length ?? 0;
+}
+
+/** Opens a page and reads it down to its end: what needs a script wakes when it comes into view. */
+async function openWhole(page: Page, address: string): Promise<void> {
+  await page.goto(address, { waitUntil: 'load' });
+  await page.evaluate(async () => {
+    for (let y = 0; y < document.documentElement.scrollHeight; y += 400) {
+      window.scrollTo(0, y);
+      await new Promise((resolve) => setTimeout(resolve, 30));
+    }
+  });
+  await page.waitForFunction(() => document.querySelector('astro-island[ssr]') === null);
 }
 
 /** The page as it stands, for eyes and ears, wide and narrow. */
@@ -36,7 +48,7 @@ describe('a verdict', () => {
     await signIn(page, at.running.url, 'supervisor');
     await page.goto(`${at.running.url}/trials`);
     const path = (await page.locator('a[href$="/verdict"]').first().getAttribute('href')) ?? '';
-    const open = (part = 'verdict') => openAwake(page, `${at.running.url}${path.replace(/verdict$/, part)}`);
+    const open = (part = 'verdict') => openWhole(page, `${at.running.url}${path.replace(/verdict$/, part)}`);
 
     await open();
     expect(await page.getByRole('heading', { level: 1 }).textContent()).toMatch(/^Set JAW TEMP to 160/);
@@ -71,7 +83,7 @@ describe('a verdict', () => {
     await page.getByText('Do the new settings hold?').waitFor();
     await look(page, 'closed');
 
-    await openAwake(page, `${at.running.url}/trials/machine?name=Line%203`);
+    await page.goto(`${at.running.url}/trials/machine?name=Line%203`);
     expect(await page.getByRole('region', { name: 'Settings in use' }).textContent()).toContain('160 °C');
     await look(page, 'machine');
     expect(complaints).toEqual([]);

@@ -63,6 +63,8 @@ export function HowMuchBetter(wording: PageWording) {
   const { interval } = bet;
   const keeps = keepsToday(view);
   const limit = limitWords(wording, brief.response);
+  const { goal, target: aim } = brief.response;
+  const target = goal === 'target' && aim !== undefined ? figure(aim, { manner: 'fine' }) : null;
   const { limitProbability, partInterval } = bet.main;
   return (
     <Numbered number={2} id="how-much-better" title={t('verdict-page:part.better')}>
@@ -78,6 +80,7 @@ export function HowMuchBetter(wording: PageWording) {
         {!keeps && partInterval && (
           <Figure label={t('verdict-page:better.single')}>{range(partInterval)}</Figure>
         )}
+        {target && <Figure label={t('verdict-page:better.target')}>{target}</Figure>}
         {limit && <Figure label={limit[0]}>{limit[1]}</Figure>}
       </dl>
       {keeps ? (

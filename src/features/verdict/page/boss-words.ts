@@ -32,8 +32,17 @@ function sayFound(wording: PageWording): string {
     case 'trial-spoilt':
       return t('verdict-page:boss.spoilt');
     default: {
-      const { spec, roughChange } = resultWords(wording);
+      const { spec, roughChange, figure } = resultWords(wording);
       const { bet } = view;
+      if (spec.goal === 'target')
+        return capitalize(
+          t(`verdict-page:boss.target.${gainKey(view)}`, {
+            settings: listDials(wording, bet.actual, movedPlaces(view), 'at'),
+            result: spec.name,
+            expected: figure(bet.predicted, { interval: bet.interval }),
+            target: figure(spec.target ?? 0, { manner: 'fine' }),
+          }),
+        );
       return capitalize(
         t(`verdict-page:boss.${gainKey(view)}`, {
           settings: listDials(wording, bet.actual, movedPlaces(view), 'at'),
