@@ -4,13 +4,12 @@ import type { ShopScope } from '../../server/db/scope.ts';
 import { readVerdict } from '../verdict/read-verdict.service.ts';
 import { sayFact } from '../verdict/verdict-words.ts';
 import { listCheckTables } from './pack/check-tables.ts';
-import { toJsonSchema } from './pack/json-schema.ts';
+import { writeTrialFileSchema } from './pack/json-schema.ts';
 import { listScriptWords, type PackReader, packFiles, writeReadme } from './pack/pack-words.ts';
 import { listReadingRows } from './pack/readings-table.ts';
 import script from './pack/recompute.R?raw';
 import { writeReport } from './pack/report.ts';
 import { type CsvCell, writeSafeCsv } from './pack/safe-csv.ts';
-import { trialFileSchema } from './pack/trial-file.schema.ts';
 import { writeZip, type ZipEntry } from './pack/zip.ts';
 import { readTrialFile, writeTrialFile } from './trial-file.service.ts';
 
@@ -72,7 +71,7 @@ export async function listPackEntries(
   const texts = {
     'README.txt': `\uFEFF${writeReadme(file, reader, now())}`,
     [packFiles.trial]: writeTrialFile(file),
-    [packFiles.schema]: `${JSON.stringify(toJsonSchema(trialFileSchema, 'input'), null, 1)}\n`,
+    [packFiles.schema]: `${JSON.stringify(writeTrialFileSchema(), null, 1)}\n`,
     [packFiles.report]: writeReport(file, await sayVerdict(scope, trialId, reader), reader),
     [packFiles.script]: script,
   };

@@ -3,6 +3,6 @@ import { listTrials } from '../../../features/trial/trial.service.ts';
 import { defineEndpoint } from '../../../server/http/define-endpoint.ts';
 
 export const GET = defineEndpoint(
-  { access: 'trial.read', query: listTrialsSchema, output: trialsPageSchema },
+  { access: 'trial.read', byToken: true, query: listTrialsSchema, output: trialsPageSchema },
   ({ scope, query }) => listTrials(scope, query),
 );
