@@ -41,7 +41,10 @@ export function RunSheet({ board, runs, label, t, formats }: Props) {
         {
           key: 'label',
           header: t('board:paper.label'),
-          cell: ({ number }) => (label === '' ? box() : `${label} ${number}`),
+          cell: ({ number, warmUp }) => {
+            if (warmUp) return t('board:warmUp');
+            return label === '' ? box() : `${label} ${number}`;
+          },
         },
         { key: 'remarks', header: t('board:paper.remarks'), cell: box },
       ]}

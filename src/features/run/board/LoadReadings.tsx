@@ -2,8 +2,10 @@ import { type ChangeEvent, useState } from 'react';
 import { useTranslation } from 'react-i18next';
 import { readSubmissionFault } from '../../../components/island/use-submission.ts';
 import { Button } from '../../../components/ui/Button.tsx';
+import { buttonClass } from '../../../components/ui/button-class.ts';
 import { Callout } from '../../../components/ui/Callout.tsx';
 import { Dialog } from '../../../components/ui/Dialog.tsx';
+import { Icon } from '../../../components/ui/Icon.tsx';
 import { readingsFileCall } from '../board.queries.ts';
 import type { ReadingsPreview } from '../readings-file.schema.ts';
 import { useBoardTools } from './board-context.tsx';
@@ -46,6 +48,7 @@ export function LoadReadings({ onClose }: { readonly onClose: () => void }) {
   const { t } = useTranslation('board');
   const { board, refreshBoard, say } = useBoardTools();
   const [file, setFile] = useState<Blob | null>(null);
+  const [name, setName] = useState('');
   const [preview, setPreview] = useState<ReadingsPreview | null>(null);
   const [fault, setFault] = useState<string | null>(null);
   const [busy, setBusy] = useState(false);
@@ -71,6 +74,7 @@ export function LoadReadings({ onClose }: { readonly onClose: () => void }) {
     if (chosen.size > limitBytes) return setFault(t('load.tooLarge'));
     const blob = new Blob([chosen], { type: 'text/csv' });
     setFile(blob);
+    setName(chosen.name);
     setPreview(await send(blob));
   }
   async function keep(): Promise<void> {
@@ -98,10 +102,22 @@ export function LoadReadings({ onClose }: { readonly onClose: () => void }) {
     >
       <div className="grid gap-4">
         <p>{t('load.words')}</p>
-        <label className="field-label" htmlFor="readings-file">
-          {t('load.file')}
-        </label>
-        <input id="readings-file" type="file" accept=".csv,text/csv" onChange={look} />
+        <div className="flex flex-wrap items-center gap-3">
+          <label
+            className={`${buttonClass({})} has-focus-visible:outline-3 has-focus-visible:outline-petrol`}
+          >
+            <Icon name="paper" />
+            {t('load.file')}
+            <input
+              id="readings-file"
+              type="file"
+              accept=".csv,text/csv"
+              className="sr-only"
+              onChange={look}
+            />
+          </label>
+          <span>{name}</span>
+        </div>
         {fault !== null && <Callout tone="caution" title={fault} live="assertive" />}
         {preview && <Findings preview={preview} />}
       </div>
