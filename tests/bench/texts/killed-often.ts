@@ -99,12 +99,11 @@ async function compareReadings(db: Knex, crowd: readonly CrowdMember[], phones: 
 
 /** Runs a crowd's trials to their end while web and worker are killed again and again. */
 export async function runWhileKilled(plan: KillPlan): Promise<KillOutcome> {
-  const product = await openTwoPrograms();
+  const product = await openTwoPrograms((db) => buildCrowd(db, { shops: 1, each: plan.trials }));
   try {
-    const { standIns, db } = product;
+    const { standIns, db, prepared: crowd } = product;
     const began = Date.now();
     await standIns.setFaults({ duplicateWebhooks: true, delayWebhooks: { upToMilliseconds: 250 } });
-    const crowd = await buildCrowd(db, { shops: 1, each: plan.trials });
     const phones = startPhones(standIns, crowd);
     const { missed, ...kills } = await killAll(plan, product, phones);
     while ((await countOpenRuns(db, crowd)) > 0 && Date.now() - began < plan.limitMilliseconds) {

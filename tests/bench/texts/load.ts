@@ -83,9 +83,9 @@ const percentile = (sorted: readonly number[], share: number): string =>
   `${(sorted[Math.min(sorted.length - 1, Math.floor(sorted.length * share))] ?? 0).toFixed(1)} ms`;
 
 const machine = describeMachine();
-const product = await openTwoPrograms();
+const product = await openTwoPrograms((db) => buildCrowd(db, { shops, each }));
 try {
-  const crowd = await buildCrowd(product.db, { shops, each });
+  const crowd = product.prepared;
   const { answers, sendingSeconds } = await replyForAMinute(product.url, crowd);
   const left = await countTexts(product.db, { state: 'new' });
   const drained = await drain(product.db);

@@ -3,6 +3,7 @@ import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
+import type { Knex } from 'knex';
 import { openDatabase } from '../../../src/server/db/connection.ts';
 import { startStandIns, testAccount } from '../../integration/stand-ins.ts';
 import { type ChildProgram, startProgram } from '../../setup/child-program.ts';
@@ -14,8 +15,11 @@ const leaseOverMilliseconds = 61_000;
 
 export type Role = 'web' | 'worker';
 
-/** The built product as two programs, web and worker, on a data folder of their own. */
-export async function openTwoPrograms() {
+/**
+ * The built product as two programs, web and worker, on a data folder of their own.
+ * @param prepare fills the database before they start
+ */
+export async function openTwoPrograms<Prepared>(prepare: (db: Knex) => Promise<Prepared>) {
   const folder = mkdtempSync(join(tmpdir(), 'trywell-killed-'));
   const clockFile = join(folder, 'clock-offset');
   const port = String(await findFreePort());
@@ -35,13 +39,17 @@ export async function openTwoPrograms() {
       TEXTS_PER_SECOND: '100',
       LOG_LEVEL: 'error',
     });
-  const programs = { worker: await start('worker'), web: await start('web') };
+  // The first start makes the tables; what is prepared then has the database to itself.
+  await (await start('worker')).stop();
   const db = openDatabase({ kind: 'sqlite', file: join(folder, 'trywell.sqlite') });
+  const prepared = await prepare(db);
+  const programs = { worker: await start('worker'), web: await start('web') };
   let ahead = 0;
   return {
     url,
     standIns,
     db,
+    prepared,
     /** SIGKILL, as a power cut would, and up again. */
     async kill(role: Role): Promise<void> {
       const { process: child } = programs[role];
