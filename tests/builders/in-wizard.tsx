@@ -9,6 +9,8 @@ import {
   WizardContext,
   type WizardShop,
 } from '../../src/features/trial/wizard/wizard-context.ts';
+import { workOutSoFar } from '../../src/features/trial/wizard/work-out-so-far.ts';
+import type { Namespace } from '../../src/i18n/namespaces.ts';
 import { wordsFor } from '../../src/i18n/resources.ts';
 
 export const nothingSoFar: SoFar = {
@@ -50,8 +52,11 @@ export function wizardShop(more: Partial<WizardShop> = {}): WizardShop {
 interface Around {
   answers?: Answers;
   shop?: WizardShop;
-  soFar?: SoFar;
+  /** `worked out`: from the answers as they stand, at once. */
+  soFar?: SoFar | 'worked out';
   mayWrite?: boolean;
+  /** Those of the page that the part stands on. */
+  namespaces?: readonly Namespace[];
 }
 
 interface Kept {
@@ -59,14 +64,23 @@ interface Kept {
   checks: Set<(focus: boolean) => Promise<boolean>>;
 }
 
+/** The trial that the parts believe to be on. */
+export const shownTrialId = 'trial';
+
 /** There is nobody to save to. */
 async function flush(): Promise<void> {}
 
 /** Keeps the answers in memory, where the test can look at them. */
-function MemoryFrame(props: Required<Omit<Around, 'answers'>> & { kept: Kept; children: ReactNode }) {
-  const { kept, children, shop, soFar, mayWrite } = props;
+function MemoryFrame(
+  props: Required<Omit<Around, 'answers' | 'namespaces'>> & { kept: Kept; children: ReactNode },
+) {
+  const { kept, children, shop, mayWrite } = props;
   const [answers, setAnswers] = useState(kept.answers);
   kept.answers = answers;
+  const soFar = useMemo(
+    () => (props.soFar === 'worked out' ? workOutSoFar(answers) : props.soFar),
+    [answers, props.soFar],
+  );
   const forms = useMemo(
     (): WizardForms => ({
       contentOf: (question) => kept.answers[question],
@@ -82,7 +96,9 @@ function MemoryFrame(props: Required<Omit<Around, 'answers'>> & { kept: Kept; ch
     [kept, mayWrite],
   );
   return (
-    <WizardContext value={{ trialId: 'trial', answers, mayWrite, soFar, shop, change: forms.fill, flush }}>
+    <WizardContext
+      value={{ trialId: shownTrialId, answers, mayWrite, soFar, shop, change: forms.fill, flush }}
+    >
       <WizardFormsContext value={forms}>
         <fieldset disabled={!mayWrite}>{children}</fieldset>
       </WizardFormsContext>
@@ -93,10 +109,16 @@ function MemoryFrame(props: Required<Omit<Around, 'answers'>> & { kept: Kept; ch
 /** Renders what a page of the wizard asks with all that it leans on, and tells what was answered. */
 export function renderInWizard(
   children: ReactNode,
-  { answers = {}, shop = wizardShop(), soFar = nothingSoFar, mayWrite = true }: Around = {},
+  {
+    answers = {},
+    shop = wizardShop(),
+    soFar = nothingSoFar,
+    mayWrite = true,
+    namespaces = ['wizard-safety', 'safety'],
+  }: Around = {},
 ): RenderResult & { answers: () => Answers; check: () => Promise<void> } {
   const kept: Kept = { answers, checks: new Set() };
-  const words = wordsFor('en', ['wizard-frame', 'wizard-safety', 'safety', 'errors']);
+  const words = wordsFor('en', ['wizard-frame', 'errors', ...namespaces]);
   const rendered = render(
     <IslandRoot language="en" words={words}>
       <MemoryFrame kept={kept} shop={shop} soFar={soFar} mayWrite={mayWrite}>

@@ -1,6 +1,6 @@
 import { screen } from '@testing-library/react';
 import { describe, expect, it } from 'vitest';
-import { renderInWizard } from '../../../../tests/setup/wizard-stand.tsx';
+import { renderInWizard } from '../../../../tests/builders/in-wizard.tsx';
 import { translatorFor } from '../../../i18n/translator.ts';
 import type { Answers } from '../answers.schema.ts';
 import type { StarterWords } from '../starters/starter.ts';
@@ -13,7 +13,7 @@ const begun: Answers = { ...sealing, job: { ...sealing.job, starter: 'sealing' }
 const words = 'These are examples. Change them to fit your machine.';
 
 function renderNote(answers: Answers) {
-  renderInWizard(<ExampleNote step="settings" />, { answers, namespaces: ['starters'] });
+  renderInWizard(<ExampleNote step="settings" />, { answers, namespaces: ['starters'], soFar: 'worked out' });
 }
 
 describe('the note on examples', () => {

@@ -1,7 +1,7 @@
 import { fireEvent, screen, within } from '@testing-library/react';
 import { userEvent } from '@testing-library/user-event';
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
-import { renderInWizard } from '../../../../../tests/setup/wizard-stand.tsx';
+import { renderInWizard, wizardShop } from '../../../../../tests/builders/in-wizard.tsx';
 import type { CrewMember } from '../wizard-context.ts';
 import { CrewPart } from './CrewPart.tsx';
 
@@ -27,9 +27,9 @@ afterEach(() => vi.unstubAllGlobals());
 
 function renderCrew(crew: readonly CrewMember[] = people) {
   return renderInWizard(<CrewPart />, {
-    answers: {},
     namespaces: ['wizard-plan', 'trials'],
-    people: crew,
+    soFar: 'worked out',
+    shop: wizardShop({ people: crew }),
   });
 }
 
@@ -48,7 +48,7 @@ describe('the crew', () => {
     const way = screen.getByRole('group', { name: /Ana Ruiz/ });
     await userEvent.click(within(way).getByRole('radio', { name: 'Text' }));
     expect(screen.getByText('Ana Ruiz said yes to texts on Mar 3, 2026.')).toBeInTheDocument();
-    expect(told.answers.crew).toMatchObject({
+    expect(told.answers().crew).toMatchObject({
       shifts: [{ name: 'Day', runs: 'ana' }],
       ways: { ana: 'text' },
     });
@@ -62,7 +62,7 @@ describe('the crew', () => {
     expect(screen.getByText('Minh Trần has not said yes yet.')).toBeInTheDocument();
     expect(screen.getByRole('button', { name: 'Ask again' })).toBeInTheDocument();
     await userEvent.click(screen.getByRole('button', { name: 'Use paper' }));
-    expect(told.answers.crew?.ways).toEqual({ minh: 'paper' });
+    expect(told.answers().crew?.ways).toEqual({ minh: 'paper' });
     expect(screen.queryByRole('button', { name: 'Ask again' })).toBeNull();
   });
 

@@ -1,7 +1,7 @@
 import { configure, screen } from '@testing-library/react';
 import { userEvent } from '@testing-library/user-event';
 import { afterEach, describe, expect, it, vi } from 'vitest';
-import { renderInWizard } from '../../../../../tests/setup/wizard-stand.tsx';
+import { renderInWizard } from '../../../../../tests/builders/in-wizard.tsx';
 import type { Practice, TextsPreview } from '../../texts-preview.schema.ts';
 import { TextsPart } from './TextsPart.tsx';
 
@@ -28,7 +28,7 @@ function renderTexts(answer: TextsPreview, outcome: Practice['outcome'] = 'queue
   vi.stubGlobal('fetch', async (_: string, call: { method: string }) =>
     Response.json(call.method === 'POST' ? { outcome } : answer),
   );
-  renderInWizard(<TextsPart />, { answers: {}, namespaces: ['wizard-plan', 'trials'] });
+  renderInWizard(<TextsPart />, { namespaces: ['wizard-plan', 'trials'], soFar: 'worked out' });
 }
 
 describe('the text that the crew gets', () => {

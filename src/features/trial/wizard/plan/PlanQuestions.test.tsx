@@ -2,14 +2,14 @@ import { configure, fireEvent, screen, waitFor, within } from '@testing-library/
 import { userEvent } from '@testing-library/user-event';
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import { finishedAnswers } from '../../../../../tests/builders/answers.ts';
-import { renderInWizard } from '../../../../../tests/setup/wizard-stand.tsx';
+import { renderInWizard, shownTrialId } from '../../../../../tests/builders/in-wizard.tsx';
 import { proposePlans } from '../../../../lib/doe/index.ts';
 import type { Answers } from '../../answers.schema.ts';
 import { toBrief } from '../../to-brief.ts';
 import { PlanQuestions } from './PlanQuestions.tsx';
 
 const trial = {
-  trialId: '0193b3a0-0000-7000-8000-000000000001',
+  trialId: shownTrialId,
   number: 1,
   title: 'Line 3 seals',
   machine: 'Line 3',
@@ -53,7 +53,11 @@ afterEach(() => vi.unstubAllGlobals());
 
 function renderPlans(more: Answers = {}) {
   const answers = finishedAnswers({ neverRun: { mixes: [] }, ...more });
-  return renderInWizard(<PlanQuestions />, { answers, namespaces: ['wizard-plan', 'plan-facts', 'trials'] });
+  return renderInWizard(<PlanQuestions />, {
+    answers,
+    namespaces: ['wizard-plan', 'plan-facts', 'trials'],
+    soFar: 'worked out',
+  });
 }
 
 const cards = () => screen.getAllByRole('article');
@@ -78,7 +82,7 @@ describe('picking a plan', () => {
     const told = renderPlans();
     const runs = screen.getByRole('slider', { name: 'Runs' });
     fireEvent.change(runs, { target: { value: '8' } });
-    expect(told.answers.spare?.runs).toBe('8');
+    expect(told.answers().spare?.runs).toBe('8');
     for (const card of cards()) expect(card.textContent).toMatch(/[4-8] runs/);
     expect(screen.getByText(/plans? fits?\./)).toBeInTheDocument();
   });
@@ -88,7 +92,7 @@ describe('picking a plan', () => {
     expect(screen.queryAllByRole('article')).toEqual([]);
     expect(screen.getByText(/No plan fits in this time/)).toBeInTheDocument();
     await userEvent.click(screen.getByRole('button', { name: /Allow \d+ hours/ }));
-    expect(Number(told.answers.spare?.hours)).toBeGreaterThan(1);
+    expect(Number(told.answers().spare?.hours)).toBeGreaterThan(1);
     expect(cards().length).toBeGreaterThan(0);
   });
 
@@ -108,7 +112,7 @@ describe('picking a plan', () => {
       `/trials/${trial.trialId}/settings`,
     );
     await userEvent.click(screen.getByRole('button', { name: /Allow \d+ runs/ }));
-    expect(Number(told.answers.spare?.runs)).toBeGreaterThan(4);
+    expect(Number(told.answers().spare?.runs)).toBeGreaterThan(4);
   });
 
   it('takes a plan by its id on the present revision, and marks it', async () => {
