@@ -22,9 +22,13 @@ async function come(role: 'supervisor' | 'engineer', language: Language, options
 }
 
 async function awake(page: Page): Promise<void> {
-  await page.waitForFunction(() => document.querySelector('astro-island[ssr]') === null, undefined, {
-    polling: 100,
-  });
+  await page.waitForFunction(
+    () => document.querySelector('astro-island[ssr][client="load"]') === null,
+    undefined,
+    {
+      polling: 100,
+    },
+  );
 }
 
 /** A walk through the wizard: knows the order of the pages, leaves the answers to its caller. */
