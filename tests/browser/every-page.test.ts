@@ -66,6 +66,7 @@ const visits: Visit[] = [
   { file: 'trials/[id]/board.astro', path: '/trials/:runningId/board', as: 'supervisor' },
   { file: 'trials/[id]/paper.astro', path: '/trials/:runningId/paper', as: 'supervisor', isPaper: true },
   { file: 'trials/[id]/review.astro', path: '/trials/:trialId/review', as: 'supervisor' },
+  { file: 'interface.astro', path: '/interface?find=verdict', as: 'engineer' },
   { file: 'trials/[id]/audit/index.astro', path: '/trials/:runningId/audit', as: 'engineer' },
   { file: 'trials/[id]/audit/data.astro', path: '/trials/:runningId/audit/data', as: 'engineer' },
   { file: 'trials/[id]/audit/model.astro', path: '/trials/:runningId/audit/model', as: 'engineer' },

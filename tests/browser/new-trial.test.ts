@@ -70,8 +70,8 @@ async function answerTheRest(page: Page, hands: Hands, { next }: Walker, hazards
   await next('crew');
   await hands.press('#add-shift');
   await hands.type('#shift-0-name', 'A');
-  await hands.type('#shift-0-from', '0600AM');
-  await hands.type('#shift-0-to', '0200PM');
+  await hands.time('#shift-0-from', { hour: 6, half: 'AM' });
+  await hands.time('#shift-0-to', { hour: 2, half: 'PM' });
   await hands.choose('#shift-0-runs', 'Ana Ruiz');
   await page.locator('fieldset[id^="way-"]').first().waitFor();
   const way = (await page.locator('fieldset[id^="way-"]').first().getAttribute('id')) ?? '';

@@ -110,7 +110,7 @@ describe('the door', () => {
     const fault = (body: string) => fetch(`${standIns.textsUrl}/fake/faults`, { method: 'POST', body });
     expect((await fault('{"webhoks":"off"}')).status).toBe(422);
     expect((await fault('{')).status).toBe(400);
-    expect((await fault(`"${'x'.repeat(300_000)}"`)).status).toBe(413);
+    expect((await fault(`"${'x'.repeat(17 * 1024 * 1024)}"`)).status).toBe(413);
     expect((await fetch(`${standIns.textsUrl}/nothing`)).status).toBe(404);
   });
 });

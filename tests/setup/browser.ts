@@ -69,10 +69,14 @@ export async function findAccessFaults(page: Page, rules: string[] | null = null
   }, rules);
 }
 
-/** Opens an address and waits until each island on it is awake. Answers the status. */
+/**
+ * Opens an address and waits until its islands are awake, save those that only wake once somebody scrolls to them. Answers the status.
+ */
 export async function openAwake(page: Page, address: string): Promise<number | undefined> {
   const answer = await page.goto(address, { waitUntil: 'load' });
-  await page.waitForFunction(() => document.querySelector('astro-island[ssr]') === null);
+  await page.waitForFunction(
+    () => document.querySelector('astro-island[ssr]:not([client="visible"])') === null,
+  );
   return answer?.status();
 }
 

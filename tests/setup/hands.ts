@@ -8,6 +8,8 @@ export interface Hands {
   press(selector: string): Promise<void>;
   /** Fills a field in. */
   type(selector: string, text: string): Promise<void>;
+  /** Fills a time of day in. */
+  time(selector: string, at: { hour: number; half: 'AM' | 'PM' }): Promise<void>;
   /** Ticks a box. */
   tick(selector: string): Promise<void>;
   /** Picks one of a group of radio buttons. */
@@ -42,6 +44,10 @@ export function keysOn(page: Page): Hands {
       await tabTo(selector);
       await page.keyboard.type(text);
     },
+    async time(selector, { hour, half }) {
+      await tabTo(selector);
+      await page.keyboard.type(`${String(hour).padStart(2, '0')}00${half}`);
+    },
     async tick(selector) {
       await tabTo(selector);
       await page.keyboard.press('Space');
@@ -73,7 +79,10 @@ export function fingerOn(page: Page): Hands {
     actions += 1;
     await page.locator(selector).first().tap();
   };
-  const tapWords = (input: string) => tap(`label:has(${input})`);
+  const tapWords = async (input: string) => {
+    actions += 1;
+    await page.locator(input).first().locator('xpath=ancestor::label[1]').tap();
+  };
   return {
     get actions() {
       return actions;
@@ -83,8 +92,13 @@ export function fingerOn(page: Page): Hands {
       actions += 1;
       await page.locator(selector).first().fill(text);
     },
+    async time(selector, { hour, half }) {
+      actions += 1;
+      const shown = String(half === 'PM' ? hour + 12 : hour).padStart(2, '0');
+      await page.locator(selector).fill(`${shown}:00`);
+    },
     tick: tapWords,
-    pick: (group, value) => tapWords(`input[value="${value}"]:is(fieldset[id="${group}"] *)`),
+    pick: (group, value) => tapWords(`fieldset[id="${group}"] input[value="${value}"]`),
     async choose(selector, label) {
       actions += 1;
       await page.locator(selector).selectOption({ label });

@@ -63,6 +63,7 @@ export const personalTables: readonly PersonalTable[] = [
     fields: ['run_id', 'result', 'part', 'value', 'rejects', 'lot', 'source', 'reason', 'created_at'],
   },
   { table: 'trials', column: 'owner_id', fields: ['number', 'title', 'machine', 'state', 'created_at'] },
+  { table: 'models', column: 'made_by', fields: ['trial_id', 'name', 'spec', 'created_at', 'updated_at'] },
   { table: 'plans', column: 'chosen_by', fields: ['trial_id', 'n', 'created_at'] },
   { table: 'decisions', column: 'decided_by', fields: ['trial_id', 'outcome', 'note', 'decided_at'] },
   { table: 'answers', column: 'updated_by', fields: ['trial_id', 'version', 'updated_at'] },

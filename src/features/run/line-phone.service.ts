@@ -14,14 +14,22 @@ import { tell } from './tell.service.ts';
 /** As people sign a sheet: two or three letters, with or without points. */
 const initials = /^\p{L}\.?\s?\p{L}\.?(\s?\p{L}\.?)?$/u;
 
+/** The shift that is on and the day on which it began: past midnight a night shift is still that of the evening before. */
+function nameShift(trial: RunningTrial, moment: number, zone: string): string {
+  const shift = shiftAt(trial, moment, zone);
+  const wall = DateTime.fromMillis(moment, { zone });
+  const minutes = wall.hour * 60 + wall.minute;
+  const beganYesterday = shift?.fromMinute != null && minutes < shift.fromMinute;
+  const day = beganYesterday ? wall.minus({ days: 1 }) : wall;
+  return `${shift?.name ?? ''}:${day.toISODate() ?? ''}`;
+}
+
 /** Asks a line phone once a shift who is on, with the first run that goes to it. Call it in a transaction. */
 export async function askWhoIsOn(scope: ShopScope, trial: RunningTrial, personId: string): Promise<void> {
   if (!(await isLinePhone(scope, personId))) return;
   const zone = await readTimeZone(scope);
-  const shift = shiftAt(trial, now(), zone)?.name ?? '';
-  const day = DateTime.fromMillis(now(), { zone }).toISODate() ?? '';
   const params = { machine: trial.machine };
-  const because = `${trial.id}:${shift}:${day}`;
+  const because = `${trial.id}:${nameShift(trial, now(), zone)}`;
   await tell(scope, personId, { template: 'whoIsOn', params }, { trialId: trial.id, because });
 }
 

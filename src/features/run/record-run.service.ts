@@ -91,7 +91,8 @@ export function recordRun(scope: ShopScope, wish: RecordRun): Promise<Recorded> 
     const isDone = step.to === 'done';
     const at = now();
     await takeRunStep(inner, run, step, {
-      revision: wish.revision,
+      // Whoever typed saw a run without figures; that its text went out meanwhile takes nothing from what they typed.
+      revision: before.length > 0 ? wish.revision : undefined,
       madeAt: run.madeAt ?? at,
       measuredAt: at,
       stretchId: run.stretchId ?? (await findStretch(inner, run.trialId)),

@@ -72,7 +72,9 @@ export async function askIfQuick(talk: Talk, trial: RunningTrial, run: Run): Pro
   const isNamed = findRunMention(text.body).run !== undefined;
   const third = (trial.shortestMinutes * minute) / 3;
   const isFirst = run.state === 'asked' && run.madeAt === null && run.askedAt !== null;
-  if (!isFirst || isNamed || text.sentAt - (run.askedAt ?? 0) >= third) return undefined;
+  // The service dates its list in whole seconds, so an answer may seem to come before its question: only a known length makes it quick.
+  const isQuick = third > 0 && text.sentAt - (run.askedAt ?? 0) < third;
+  if (!isFirst || isNamed || !isQuick) return undefined;
   const before = await findRunBefore(talk, trial);
   if (before === undefined) return undefined;
   const readingId = await setApart(scope, run, figuresOf(trial, reply.values), submissionOf(talk));

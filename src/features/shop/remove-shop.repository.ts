@@ -3,6 +3,7 @@ import type { ShopScope } from '../../server/db/scope.ts';
 
 /** Every table with rows of a shop, children before parents. A test reads the schema and refuses one that is missing. */
 export const shopTables = [
+  'models',
   'decisions',
   'verdicts',
   'notes',

@@ -23,10 +23,21 @@ export interface Crew {
 let phones = 0;
 let ahead = 0;
 
+/** From now to the next morning of a working day: what is asked at night, or across midnight, is tried on purpose and not by chance. */
+function untilMorning(): number {
+  const morning = new Date(Date.now());
+  morning.setUTCHours(7, 0, 0, 0);
+  const isGone = () => morning.getTime() < Date.now();
+  const isWeekend = () => morning.getUTCDay() === 0 || morning.getUTCDay() === 6;
+  while (isGone() || isWeekend()) morning.setUTCDate(morning.getUTCDate() + 1);
+  return morning.getTime() - Date.now();
+}
+
 /** Opens the text desk for a test file and gives each of its tests a crew of its own. */
 export function openCrew(person: Record<string, unknown> = {}): Crew {
   const crew = {} as Crew;
   beforeAll(async () => {
+    await passTime(untilMorning());
     crew.desk = await openTextDesk();
   });
   afterAll(() => crew.desk.close());

@@ -2,13 +2,13 @@ import { expect, it } from 'vitest';
 import { runWhileKilled } from '../../bench/texts/killed-often.ts';
 
 it('loses nothing and sends nothing twice while web and worker are killed twenty times', {
-  timeout: 300_000,
+  timeout: 660_000,
 }, async () => {
   const outcome = await runWhileKilled({
     kills: 20,
     trials: 46,
     seed: 20_261_201,
-    limitMilliseconds: 270_000,
+    limitMilliseconds: 600_000,
   });
   expect(outcome.kills).toEqual({ web: 8, worker: 12 });
   expect(outcome.runs).toBeGreaterThan(500);

@@ -34,9 +34,21 @@ describe('readings of a run', () => {
     expect((await recordRun(scene.shop.scope, wish)).already).toBe(false);
     expect((await recordRun(scene.shop.scope, wish)).already).toBe(true);
     expect(await scene.shop.scope.db('readings').where({ run_id: id })).toHaveLength(3);
-    const behind = scene.doRun(2, { event: 'record', figures: allFigures(36), revision: 7 });
+    await scene.doRun(2, { event: 'record', figures: allFigures(36).slice(0, 1) });
+    const behind = scene.doRun(2, { event: 'record', figures: allFigures(37), revision });
     expect((await refusalOf(behind)).code).toBe('changed-meanwhile');
     expect((await refusalOf(scene.doRun(1, { event: 'record', figures }))).code).toBe('not-now');
+  });
+
+  it('are kept although the run went out while they were typed', async () => {
+    const scene = await buildBoard();
+    const { id, revision } = await scene.run(2);
+    await scene.shop.scope
+      .db('runs')
+      .where({ id })
+      .update({ revision: revision + 1 });
+    await scene.doRun(2, { event: 'record', figures: allFigures(36), revision });
+    expect((await scene.run(2)).state).toBe('done');
   });
 
   it('are refused by name where they cannot be right, and nothing is kept of them', async () => {

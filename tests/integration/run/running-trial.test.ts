@@ -121,7 +121,7 @@ describe('a stop for safety', () => {
       ['stopped', 'waiting', true],
     ]);
     expect(texts[1]?.body).toContain('JAW TEMP 150');
-    expect(stop?.told).toEqual([
+    expect(stop?.told).toMatchObject([
       { name: 'Ana', text: 'on its way', answeredAt: null },
       { name: 'Dana', text: 'on its way', answeredAt: null },
     ]);
