@@ -17,6 +17,7 @@ export const sameWords: SameWords = {
   'audit:plan.powerLikely': ['es'],
   'audit:part.model': ['pl'],
   'audit-models:model': ['pl'],
+  'audit-pack:api.no': ['es'],
   'audit-review:group.settings': ['es'],
   'audit-model:terms.t': ['es', 'pl', 'vi'],
   'audit-model:terms.p': ['es'],

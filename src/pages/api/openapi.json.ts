@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { listEndpoints } from '../../features/audit/api/list-endpoints.ts';
 import { writeOpenApi } from '../../features/audit/api/openapi.ts';
+import { config } from '../../server/env.ts';
 import { defineEndpoint } from '../../server/http/define-endpoint.ts';
 
 // Read in when it is first asked for: this file is one of them.
@@ -12,6 +13,6 @@ export const GET = defineEndpoint(
   async ({ context }) => {
     const modules: Record<string, unknown> = {};
     for (const [file, read] of Object.entries(files)) modules[file] = await read();
-    return writeOpenApi(listEndpoints(modules), { t: context.locals.t, server: context.url.origin });
+    return writeOpenApi(listEndpoints(modules), { t: context.locals.t, server: config().appUrl });
   },
 );

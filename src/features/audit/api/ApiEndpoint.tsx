@@ -1,20 +1,7 @@
 import { Table } from '../../../components/ui/Table.tsx';
 import type { Translate } from '../../../i18n/translator.ts';
 import type { DescribedField } from './describe-fields.ts';
-
-export interface ShownEndpoint {
-  id: string;
-  method: string;
-  path: string;
-  permission: string;
-  byToken: boolean;
-  /** What stands in the address, and behind its question mark. */
-  parameters: readonly DescribedField[];
-  body: readonly DescribedField[];
-  answer: readonly DescribedField[];
-  /** A call as a terminal takes it. */
-  example: string;
-}
+import type { ShownEndpoint } from './show-endpoints.ts';
 
 interface Props {
   readonly endpoint: ShownEndpoint;

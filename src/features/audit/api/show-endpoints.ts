@@ -1,7 +1,21 @@
 import type { JsonSchema } from '../pack/json-schema.ts';
-import type { ShownEndpoint } from './ApiEndpoint.tsx';
-import { describeFields } from './describe-fields.ts';
+import { type DescribedField, describeFields } from './describe-fields.ts';
 import type { writeOpenApi } from './openapi.ts';
+
+/** One call of the API as the page shows it. */
+export interface ShownEndpoint {
+  id: string;
+  method: string;
+  path: string;
+  permission: string;
+  byToken: boolean;
+  /** What stands in the address, and behind its question mark. */
+  parameters: readonly DescribedField[];
+  body: readonly DescribedField[];
+  answer: readonly DescribedField[];
+  /** A call as a terminal takes it. */
+  example: string;
+}
 
 type Document = ReturnType<typeof writeOpenApi>;
 
