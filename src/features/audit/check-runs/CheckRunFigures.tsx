@@ -3,7 +3,7 @@ import type { AuditWording } from '../audit-wording.ts';
 import { AuditPart } from '../frame/AuditPart.tsx';
 import { FigureLines } from '../frame/FigureLines.tsx';
 import { FigureSources } from '../sources/FigureSources.tsx';
-import { FigureTable, figureColumn } from '../table/FigureTable.tsx';
+import { FigureTable, figureColumn, wholeColumn } from '../table/FigureTable.tsx';
 
 interface Props extends AuditWording {
   readonly checks: AuditChecksView;
@@ -53,14 +53,8 @@ export function CheckRunFigures(props: Props) {
         showsCaption
         caption={t('audit-model:gain.runs')}
         columns={[
-          figureColumn(
-            {
-              key: 'run',
-              header: t('audit:data.run'),
-              rows: runs,
-              value: ({ number }) => number,
-              write: figures.tick,
-            },
+          wholeColumn(
+            { key: 'run', header: t('audit:data.run'), rows: runs, value: ({ number }) => number },
             wording,
           ),
           {

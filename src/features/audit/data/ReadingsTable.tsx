@@ -1,7 +1,7 @@
 import type { TableColumn } from '../../../components/ui/Table.tsx';
 import type { AuditDataView, AuditReading } from '../audit-data-view.ts';
 import type { AuditWording } from '../audit-wording.ts';
-import { FigureTable, figureColumn } from '../table/FigureTable.tsx';
+import { FigureTable, figureColumn, wholeColumn } from '../table/FigureTable.tsx';
 
 interface Props extends AuditWording {
   readonly data: AuditDataView;
@@ -13,14 +13,8 @@ export function ReadingsTable({ data, ...wording }: Props) {
   const { readings, showsNames } = data;
   const hasLots = readings.some(({ lot }) => lot !== null);
   const columns: TableColumn<AuditReading>[] = [
-    figureColumn(
-      {
-        key: 'run',
-        header: t('audit:data.run'),
-        rows: readings,
-        value: ({ runNumber }) => runNumber,
-        write: figures.tick,
-      },
+    wholeColumn(
+      { key: 'run', header: t('audit:data.run'), rows: readings, value: ({ runNumber }) => runNumber },
       wording,
     ),
     {
@@ -28,13 +22,12 @@ export function ReadingsTable({ data, ...wording }: Props) {
       header: t('audit:data.result'),
       cell: ({ resultName, unit }) => (unit ? `${resultName}, ${unit}` : resultName),
     },
-    figureColumn(
+    wholeColumn(
       {
         key: 'part',
         header: t('audit:data.part'),
         rows: readings,
         value: ({ part }) => part,
-        write: figures.tick,
       },
       wording,
     ),
@@ -50,13 +43,12 @@ export function ReadingsTable({ data, ...wording }: Props) {
     ),
     ...(hasLots
       ? [
-          figureColumn<AuditReading>(
+          wholeColumn<AuditReading>(
             {
               key: 'lot',
               header: t('audit:data.lot'),
               rows: readings,
               value: ({ lot }) => lot,
-              write: figures.tick,
             },
             wording,
           ),

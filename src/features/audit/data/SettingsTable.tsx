@@ -1,7 +1,7 @@
 import type { TableColumn } from '../../../components/ui/Table.tsx';
 import type { AuditDataView, AuditRun } from '../audit-data-view.ts';
 import type { AuditWording } from '../audit-wording.ts';
-import { FigureTable, figureColumn } from '../table/FigureTable.tsx';
+import { FigureTable, wholeColumn } from '../table/FigureTable.tsx';
 
 interface Props extends AuditWording {
   readonly data: AuditDataView;
@@ -14,7 +14,7 @@ export function SettingsTable({ data, ...wording }: Props) {
   const setting = (value: number | string | undefined) =>
     typeof value === 'number' ? <data value={String(value)}>{figures.one(value)}</data> : value;
   const whole = (key: string, header: string, value: (run: AuditRun) => number | null) =>
-    figureColumn({ key, header, rows: runs, value, write: figures.tick }, wording);
+    wholeColumn({ key, header, rows: runs, value }, wording);
   const columns: TableColumn<AuditRun>[] = [
     {
       key: 'run',

@@ -1,7 +1,7 @@
 import type { TableColumn } from '../../../components/ui/Table.tsx';
 import type { AuditDataView, AuditRun } from '../audit-data-view.ts';
 import type { AuditWording } from '../audit-wording.ts';
-import { FigureTable, figureColumn } from '../table/FigureTable.tsx';
+import { FigureTable, wholeColumn } from '../table/FigureTable.tsx';
 
 interface Props extends AuditWording {
   readonly data: AuditDataView;
@@ -9,7 +9,7 @@ interface Props extends AuditWording {
 
 /** When each run was asked for, made and measured, with which gauge, and what is written on its parts. */
 export function StepsTable({ data, ...wording }: Props) {
-  const { t, figures, formats } = wording;
+  const { t, formats } = wording;
   const { runs, showsNames } = data;
   const moment = (
     key: string,
@@ -29,14 +29,8 @@ export function StepsTable({ data, ...wording }: Props) {
     },
   });
   const columns: TableColumn<AuditRun>[] = [
-    figureColumn(
-      {
-        key: 'run',
-        header: t('audit:data.run'),
-        rows: runs,
-        value: ({ number }) => number,
-        write: figures.tick,
-      },
+    wholeColumn(
+      { key: 'run', header: t('audit:data.run'), rows: runs, value: ({ number }) => number },
       wording,
     ),
     moment('asked', t('audit:data.asked'), ({ askedAt }) => askedAt),

@@ -65,3 +65,11 @@ export function figureColumn<Row>(
     },
   };
 }
+
+/** A column of counts and numbers of runs, which have no decimals. */
+export function wholeColumn<Row>(
+  column: Omit<FigureColumn<Row>, 'write'>,
+  wording: Pick<AuditWording, 'figures'>,
+): TableColumn<Row> {
+  return figureColumn({ ...column, write: wording.figures.tick }, wording);
+}
